@@ -1,0 +1,2 @@
+/** Photos, what is read out of them, and how they are redrawn. */
+package plumbray.imaging;

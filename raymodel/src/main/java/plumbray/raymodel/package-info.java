@@ -1,0 +1,2 @@
+/** Air, sight line and rays, as pure physics on doubles: no files, no images, no terminal. */
+package plumbray.raymodel;

@@ -1,0 +1,2 @@
+/** Checks that cross rooms. */
+package plumbray;
