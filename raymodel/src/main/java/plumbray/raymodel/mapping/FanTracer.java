@@ -1,0 +1,209 @@
+package plumbray.raymodel.mapping;
+
+import java.util.ArrayList;
+import java.util.List;
+import plumbray.raymodel.path.SightPath;
+import plumbray.raymodel.ray.Medium;
+import plumbray.raymodel.ray.RayTrace;
+import plumbray.raymodel.ray.RayTracer;
+
+/**
+ * Places the rays of a fan: more where the mapping curves, and rays exactly at its ends and turning
+ * points.
+ *
+ * <p>An interval is left when the cubic through its ends foretells the ray in its middle, elevation
+ * and slope, at every distance that both ends reach. Where one end reaches a distance and the other
+ * does not, the grazing ray between them is found first.
+ */
+final class FanTracer {
+
+  private static final int FIRST_INTERVALS = 16;
+  private static final int DEEPEST = 26;
+
+  /**
+   * The middle ray is kept, which makes a cubic's error 16 times smaller than it was found to be;
+   * half of that is claimed.
+   */
+  private static final double HALVING_GAIN = 8.0;
+
+  private static final double GRAZING_RAD = 1e-13;
+  private static final double TURNING_RAD = 1e-13;
+  private static final int ITERATIONS = 60;
+
+  private final FanRequest request;
+  private final double[] distancesM;
+  private final RayTracer tracer;
+  private final List<RayTrace> traces = new ArrayList<>();
+
+  FanTracer(Medium medium, SightPath path, FanRequest request, double traceToleranceM) {
+    this.request = request;
+    this.distancesM = request.distancesM();
+    tracer = new RayTracer(medium, path, distancesM, true, traceToleranceM);
+  }
+
+  /** All rays by rising angle. */
+  List<RayTrace> trace() {
+    double span = request.highestRad() - request.lowestRad();
+    RayTrace left = ray(request.lowestRad());
+    traces.add(left);
+    for (int i = 1; i <= FIRST_INTERVALS; i++) {
+      double angle =
+          i == FIRST_INTERVALS
+              ? request.highestRad()
+              : request.lowestRad() + span * i / FIRST_INTERVALS;
+      RayTrace right = ray(angle);
+      refine(left, right, 0);
+      left = right;
+    }
+    return traces;
+  }
+
+  private RayTrace ray(double apparentRad) {
+    return tracer.trace(request.cameraHeightM(), apparentRad);
+  }
+
+  /** Appends the rays after {@code a} up to and with {@code b}. */
+  private void refine(RayTrace a, RayTrace b, int depth) {
+    double width = b.apparentRad() - a.apparentRad();
+    if (depth >= DEEPEST || width <= 4.0 * GRAZING_RAD) {
+      traces.add(b);
+      return;
+    }
+    if (a.reached() != b.reached()) {
+      splitAtGrazing(a, b, depth);
+      return;
+    }
+    if (splitAtTurning(a, b, depth)) {
+      return;
+    }
+    RayTrace mid = ray(a.apparentRad() + 0.5 * width);
+    if (mid.reached() == a.reached() && foretold(a, mid, b)) {
+      traces.add(mid);
+      traces.add(b);
+    } else {
+      refine(a, mid, depth + 1);
+      refine(mid, b, depth + 1);
+    }
+  }
+
+  private void splitAtGrazing(RayTrace a, RayTrace b, int depth) {
+    int target = Math.min(a.reached(), b.reached());
+    boolean rightArrives = b.reached() > target;
+    double low = a.apparentRad();
+    double high = b.apparentRad();
+    double fLow = clearance(low, target);
+    double fHigh = clearance(high, target);
+    int kept = 0;
+    for (int i = 0; i < ITERATIONS && high - low > GRAZING_RAD; i++) {
+      double mid = falsePosition(low, fLow, high, fHigh, i);
+      double f = clearance(mid, target);
+      if (f >= 0.0 == rightArrives) {
+        high = mid;
+        fHigh = f;
+        fLow = kept == 1 ? 0.5 * fLow : fLow;
+        kept = 1;
+      } else {
+        low = mid;
+        fLow = f;
+        fHigh = kept == -1 ? 0.5 * fHigh : fHigh;
+        kept = -1;
+      }
+    }
+    RayTrace before = ray(low);
+    RayTrace after = ray(high);
+    refine(a, before, depth + 1);
+    traces.add(after);
+    refine(after, b, depth + 1);
+  }
+
+  /** Illinois step, kept off the ends; every third step halves, so that it cannot stall. */
+  private static double falsePosition(
+      double low, double fLow, double high, double fHigh, int iteration) {
+    double mid = (low * fHigh - high * fLow) / (fHigh - fLow);
+    double margin = 0.25 * GRAZING_RAD;
+    if (iteration % 4 == 3 || !(mid > low && mid < high)) {
+      return 0.5 * (low + high);
+    }
+    return Math.min(high - margin, Math.max(low + margin, mid));
+  }
+
+  private double clearance(double apparentRad, int target) {
+    return tracer.traceThrough(request.cameraHeightM(), apparentRad).clearanceM(target);
+  }
+
+  /** Puts a ray where the slope at some distance is zero, if it changes sign between the rays. */
+  private boolean splitAtTurning(RayTrace a, RayTrace b, int depth) {
+    for (int d = 0; d < a.reached(); d++) {
+      double sa = a.sensitivity(d, 0);
+      double sb = b.sensitivity(d, 0);
+      if (sa * sb < 0.0 && Math.abs(sa) > 1e-7 && Math.abs(sb) > 1e-7) {
+        RayTrace turning = turning(a, b, d);
+        if (turning.reached() == a.reached()) {
+          refine(a, turning, depth + 1);
+          refine(turning, b, depth + 1);
+          return true;
+        }
+      }
+    }
+    return false;
+  }
+
+  private RayTrace turning(RayTrace a, RayTrace b, int d) {
+    double low = a.apparentRad();
+    double high = b.apparentRad();
+    double fLow = a.sensitivity(d, 0);
+    double fHigh = b.sensitivity(d, 0);
+    RayTrace best = a;
+    int kept = 0;
+    for (int i = 0; i < ITERATIONS && high - low > TURNING_RAD; i++) {
+      best = ray(falsePosition(low, fLow, high, fHigh, i));
+      if (best.reached() <= d) {
+        return best;
+      }
+      double f = best.sensitivity(d, 0);
+      if (Math.abs(f) < 1e-9) {
+        return best;
+      }
+      if (f > 0.0 == fHigh > 0.0) {
+        high = best.apparentRad();
+        fHigh = f;
+        fLow = kept == 1 ? 0.5 * fLow : fLow;
+        kept = 1;
+      } else {
+        low = best.apparentRad();
+        fLow = f;
+        fHigh = kept == -1 ? 0.5 * fHigh : fHigh;
+        kept = -1;
+      }
+    }
+    return best;
+  }
+
+  /** Whether the cubic through a and b foretells mid well enough at every distance. */
+  private boolean foretold(RayTrace a, RayTrace mid, RayTrace b) {
+    double width = b.apparentRad() - a.apparentRad();
+    for (int d = 0; d < a.reached(); d++) {
+      double tolerance = HALVING_GAIN * request.toleranceRad() * distancesM[d];
+      double y0 = a.elevationM(d);
+      double y1 = b.elevationM(d);
+      double d0 = a.sensitivity(d, 0);
+      double d1 = b.sensitivity(d, 0);
+      double value = CubicPiece.value(0.5, width, y0, d0, y1, d1);
+      double slope = CubicPiece.slope(0.5, width, y0, d0, y1, d1);
+      if (!(Math.abs(value - mid.elevationM(d)) <= tolerance)
+          || !(Math.abs(slope - mid.sensitivity(d, 0)) * width <= 16.0 * tolerance)) {
+        return false;
+      }
+    }
+    return !a.ended() || !b.ended() || !mid.ended() || groundForetold(a, mid, b);
+  }
+
+  private boolean groundForetold(RayTrace a, RayTrace mid, RayTrace b) {
+    double width = b.apparentRad() - a.apparentRad();
+    double xa = 1.0 / a.endDistanceM();
+    double xb = 1.0 / b.endDistanceM();
+    double miss = 0.5 * (xa + xb) - 1.0 / mid.endDistanceM();
+    return Math.abs(miss) * width <= request.toleranceRad() * Math.abs(xb - xa)
+        || width < 0.1 * request.toleranceRad();
+  }
+}

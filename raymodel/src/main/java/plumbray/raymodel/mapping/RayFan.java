@@ -1,0 +1,126 @@
+package plumbray.raymodel.mapping;
+
+import java.util.ArrayList;
+import java.util.List;
+import plumbray.raymodel.path.SightPath;
+import plumbray.raymodel.ray.Medium;
+import plumbray.raymodel.ray.RayTrace;
+import plumbray.raymodel.ray.RayTracer;
+
+/** A fan of rays from one camera, and the mappings at all distances in use that follow from it. */
+public final class RayFan {
+
+  private final List<SightMapping> mappings;
+  private final GroundView ground;
+  private final int rayCount;
+  private final boolean accurate;
+
+  private RayFan(List<SightMapping> mappings, GroundView ground, int rayCount, boolean accurate) {
+    this.mappings = List.copyOf(mappings);
+    this.ground = ground;
+    this.rayCount = rayCount;
+    this.accurate = accurate;
+  }
+
+  /** Traces a fan. */
+  public static RayFan trace(Medium medium, SightPath path, FanRequest request) {
+    return trace(medium, path, request, RayTracer.DEFAULT_TOLERANCE_M);
+  }
+
+  /** Traces a fan whose steps have a local error below {@code traceToleranceM}, m. */
+  public static RayFan trace(
+      Medium medium, SightPath path, FanRequest request, double traceToleranceM) {
+    if (request.cameraHeightM() <= path.blockedBelowM()) {
+      throw new IllegalArgumentException(
+          "camera height is "
+              + request.cameraHeightM()
+              + " m, must be above "
+              + path.blockedBelowM()
+              + " m (height under which rays are stopped)");
+    }
+    List<RayTrace> traces = new FanTracer(medium, path, request, traceToleranceM).trace();
+    double[] distances = request.distancesM();
+    List<SightMapping> mappings = new ArrayList<>();
+    for (int d = 0; d < distances.length; d++) {
+      mappings.add(
+          new SightMapping(distances[d], path.ground().elevationM(distances[d]), runs(traces, d)));
+    }
+    boolean accurate = traces.stream().allMatch(RayTrace::accurate);
+    return new RayFan(mappings, GroundView.of(groundRuns(traces)), traces.size(), accurate);
+  }
+
+  /** Runs of neighbouring rays that arrive at distance d. */
+  private static List<List<MappingRay>> runs(List<RayTrace> traces, int d) {
+    List<List<MappingRay>> runs = new ArrayList<>();
+    List<MappingRay> run = new ArrayList<>();
+    for (RayTrace t : traces) {
+      if (t.arrives(d)) {
+        run.add(mappingRay(t, d));
+      } else if (!run.isEmpty()) {
+        runs.add(run);
+        run = new ArrayList<>();
+      }
+    }
+    if (!run.isEmpty()) {
+      runs.add(run);
+    }
+    return runs;
+  }
+
+  private static MappingRay mappingRay(RayTrace t, int d) {
+    double[] sensitivities = new double[t.sensitivityCount() - 1];
+    for (int k = 0; k < sensitivities.length; k++) {
+      sensitivities[k] = t.sensitivity(d, k + 1);
+    }
+    return new MappingRay(
+        t.apparentRad(), t.elevationM(d), t.sensitivity(d, 0), t.pathSlope(d), sensitivities);
+  }
+
+  /** Runs of neighbouring rays that end in the ground ever farther out. */
+  private static List<List<double[]>> groundRuns(List<RayTrace> traces) {
+    List<List<double[]>> runs = new ArrayList<>();
+    List<double[]> run = new ArrayList<>();
+    for (RayTrace t : traces) {
+      boolean goesOn =
+          t.ended() && (run.isEmpty() || t.endDistanceM() >= run.get(run.size() - 1)[1]);
+      if (!goesOn) {
+        runs.add(run);
+        run = new ArrayList<>();
+      }
+      if (t.ended()) {
+        run.add(new double[] {t.apparentRad(), t.endDistanceM()});
+      }
+    }
+    runs.add(run);
+    return runs;
+  }
+
+  /** The mappings by rising distance. */
+  public List<SightMapping> mappings() {
+    return mappings;
+  }
+
+  /** The mapping at one of the distances asked for, m. */
+  public SightMapping mapping(double distanceM) {
+    return mappings.stream()
+        .filter(m -> m.distanceM() == distanceM)
+        .findFirst()
+        .orElseThrow(
+            () -> new IllegalArgumentException("the fan was not traced to " + distanceM + " m"));
+  }
+
+  /** The ground as the fan sees it. */
+  public GroundView ground() {
+    return ground;
+  }
+
+  /** How many rays were traced and kept. */
+  public int rayCount() {
+    return rayCount;
+  }
+
+  /** Whether every ray reached the demanded accuracy. */
+  public boolean accurate() {
+    return accurate;
+  }
+}

@@ -1,0 +1,252 @@
+package plumbray.raymodel.ray;
+
+import java.util.Arrays;
+
+/**
+ * Position, direction and their derivatives along one ray, and one Nystrom step of them all.
+ *
+ * <p>Component 0 is the ray itself; component j > 0 is the derivative by quantity j - 1 (apparent
+ * elevation, camera height, parameters of the medium). Arrays: u and X of the component, their
+ * rates by sigma, and forces by stage.
+ */
+final class RayState {
+
+  private final Medium medium;
+  private final double earthRadiusM;
+  final int components;
+  private final double[] air;
+
+  double[] u;
+  double[] x;
+  double[] uRate;
+  double[] xRate;
+  private double[] uNew;
+  private double[] xNew;
+  private double[] uRateNew;
+  private double[] xRateNew;
+  private final double[][] uForce;
+  private final double[][] xForce;
+  private double groundSlope;
+  private double groundIntercept;
+  private double heightM;
+
+  RayState(Medium medium, double earthRadiusM, boolean withSensitivities) {
+    this.medium = medium;
+    this.earthRadiusM = earthRadiusM;
+    components = withSensitivities ? 3 + medium.parameterCount() : 1;
+    air = new double[3 + 2 * medium.parameterCount()];
+    u = new double[components];
+    x = new double[components];
+    uRate = new double[components];
+    xRate = new double[components];
+    uNew = new double[components];
+    xNew = new double[components];
+    uRateNew = new double[components];
+    xRateNew = new double[components];
+    uForce = new double[NystromPair.STAGES][components];
+    xForce = new double[NystromPair.STAGES][components];
+  }
+
+  /** Ground y = intercept + slope x holds from here on; forces are evaluated afresh. */
+  void enterSegment(double slope, double intercept) {
+    groundSlope = slope;
+    groundIntercept = intercept;
+    force(0, u, x);
+  }
+
+  /** Puts the ray at the camera. */
+  void start(double cameraHeightM, double apparentRad) {
+    Arrays.fill(u, 0.0);
+    Arrays.fill(x, 0.0);
+    medium.evaluate(cameraHeightM, air);
+    double scale = 1.0 + cameraHeightM / earthRadiusM;
+    double m = (1.0 + air[0]) * scale;
+    double cos = Math.cos(apparentRad);
+    double sin = Math.sin(apparentRad);
+    u[0] = earthRadiusM * Math.log1p(cameraHeightM / earthRadiusM);
+    uRate[0] = m * sin;
+    xRate[0] = m * cos;
+    if (components == 1) {
+      return;
+    }
+    uRate[1] = m * cos;
+    xRate[1] = -m * sin;
+    u[2] = 1.0 / scale;
+    scaleRates(2, air[1] + 1.0 / (earthRadiusM * scale));
+    for (int j = 3; j < components; j++) {
+      scaleRates(j, air[2 * j - 3]);
+    }
+  }
+
+  private void scaleRates(int j, double logIndexDerivative) {
+    uRate[j] = uRate[0] * logIndexDerivative;
+    xRate[j] = xRate[0] * logIndexDerivative;
+  }
+
+  /** Tries a step of {@code h} in sigma and returns the larger of its two error estimates, m. */
+  double attempt(double h, double slopeLengthM) {
+    for (int stage = 1; stage < NystromPair.STAGES; stage++) {
+      double[] a = NystromPair.A[stage];
+      double ch = NystromPair.C[stage] * h;
+      advance(u, uRate, uForce, a, ch, h * h, uNew);
+      if (groundSlope == 0.0) {
+        coast(ch);
+      } else {
+        advance(x, xRate, xForce, a, ch, h * h, xNew);
+      }
+      force(stage, uNew, xNew);
+    }
+    advance(uRate, uForce, h, uRateNew);
+    if (groundSlope == 0.0) {
+      System.arraycopy(xRate, 0, xRateNew, 0, components);
+    } else {
+      advance(xRate, xForce, h, xRateNew);
+    }
+    return errorM(h, slopeLengthM);
+  }
+
+  private void advance(
+      double[] from,
+      double[] rate,
+      double[][] forces,
+      double[] a,
+      double ch,
+      double hh,
+      double[] to) {
+    for (int j = 0; j < components; j++) {
+      double sum = 0.0;
+      for (int s = 0; s < a.length; s++) {
+        sum += a[s] * forces[s][j];
+      }
+      to[j] = from[j] + ch * rate[j] + hh * sum;
+    }
+  }
+
+  private void coast(double ch) {
+    for (int j = 0; j < components; j++) {
+      xNew[j] = x[j] + ch * xRate[j];
+    }
+  }
+
+  private void advance(double[] rate, double[][] forces, double h, double[] to) {
+    for (int j = 0; j < components; j++) {
+      double sum = 0.0;
+      for (int s = 0; s < NystromPair.STAGES; s++) {
+        sum += NystromPair.SLOPE[s] * forces[s][j];
+      }
+      to[j] = rate[j] + h * sum;
+    }
+  }
+
+  private double errorM(double h, double slopeLengthM) {
+    double position = 0.0;
+    double slope = 0.0;
+    for (int s = 0; s < NystromPair.STAGES; s++) {
+      position += NystromPair.POSITION_ERROR[s] * uForce[s][0];
+      slope += NystromPair.SLOPE_ERROR[s] * uForce[s][0];
+    }
+    return Math.max(Math.abs(position) * h * h, Math.abs(slope) * h * slopeLengthM);
+  }
+
+  /** Takes the step that was tried last. */
+  void accept() {
+    double[] swap = u;
+    u = uNew;
+    uNew = swap;
+    swap = x;
+    x = xNew;
+    xNew = swap;
+    swap = uRate;
+    uRate = uRateNew;
+    uRateNew = swap;
+    swap = xRate;
+    xRate = xRateNew;
+    xRateNew = swap;
+    int last = NystromPair.STAGES - 1;
+    swap = uForce[0];
+    uForce[0] = uForce[last];
+    uForce[last] = swap;
+    swap = xForce[0];
+    xForce[0] = xForce[last];
+    xForce[last] = swap;
+  }
+
+  /** Distance at which the step that was tried last ends, m. */
+  double triedDistanceM() {
+    return xNew[0];
+  }
+
+  /** Height above the ground, m, at the end of the step accepted last or at the start. */
+  double heightM() {
+    return elevationM() - groundIntercept - groundSlope * x[0];
+  }
+
+  /** Fills value, first and second derivative by sigma of the height above the ground. */
+  void clearance(double[] out) {
+    double b = 1.0 + elevationM() / earthRadiusM;
+    out[0] = heightM();
+    out[1] = b * uRate[0] - groundSlope * xRate[0];
+    out[2] = b * (uForce[0][0] + uRate[0] * uRate[0] / earthRadiusM) - groundSlope * xForce[0][0];
+  }
+
+  /** Elevation above the level surface, m. */
+  double elevationM() {
+    return elevationM(u[0]);
+  }
+
+  private double elevationM(double uM) {
+    double e = uM / earthRadiusM;
+    return Math.abs(e) < 1e-3
+        ? uM * (1.0 + e * (0.5 + e * (1.0 / 6 + e * (1.0 / 24 + e / 120))))
+        : earthRadiusM * Math.expm1(e);
+  }
+
+  /** dy/dx of the ray. */
+  double pathSlope() {
+    return (1.0 + elevationM() / earthRadiusM) * uRate[0] / xRate[0];
+  }
+
+  /** Derivative of the elevation at fixed distance by quantity {@code j - 1}. */
+  double sensitivity(int j) {
+    double b = 1.0 + elevationM() / earthRadiusM;
+    return b * (u[j] - uRate[0] / xRate[0] * x[j]);
+  }
+
+  /** Largest step, in sigma, that stays within the medium's vertical scale. */
+  double largestStep() {
+    double scale = medium.verticalScaleM(heightM());
+    double bySlope = scale / Math.abs(uRate[0] - groundSlope * xRate[0]);
+    double byBend = Math.sqrt(2.0 * scale / Math.abs(uForce[0][0]));
+    return Math.min(bySlope, byBend);
+  }
+
+  private void force(int stage, double[] atU, double[] atX) {
+    double y = elevationM(atU[0]);
+    double b = 1.0 + y / earthRadiusM;
+    double s = groundSlope;
+    medium.evaluate(y - groundIntercept - s * atX[0], air);
+    double n = 1.0 + air[0];
+    double m2 = n * n * b * b;
+    double g = air[1];
+    double logU = g * b + 1.0 / earthRadiusM;
+    double[] fu = uForce[stage];
+    double[] fx = xForce[stage];
+    fu[0] = m2 * logU;
+    double logX = -g * s;
+    fx[0] = m2 * logX;
+    double logUu = air[2] * b * b + g * b / earthRadiusM;
+    double logUx = -air[2] * b * s;
+    double logXx = air[2] * s * s;
+    for (int j = 1; j < components; j++) {
+      double byIndex = 0.0;
+      double byGradient = 0.0;
+      if (j > 2) {
+        byIndex = air[2 * j - 3];
+        byGradient = air[2 * j - 2];
+      }
+      double log = logU * atU[j] + logX * atX[j] + byIndex;
+      fu[j] = m2 * (2.0 * log * logU + logUu * atU[j] + logUx * atX[j] + byGradient * b);
+      fx[j] = m2 * (2.0 * log * logX + logUx * atU[j] + logXx * atX[j] - byGradient * s);
+    }
+  }
+}
