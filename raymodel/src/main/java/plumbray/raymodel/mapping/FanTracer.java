@@ -26,6 +26,9 @@ final class FanTracer {
    */
   private static final double HALVING_GAIN = 8.0;
 
+  /** Ground is interpolated straight, to a tenth of a pixel where the mapping is to a hundredth. */
+  private static final double GROUND_TOLERANCE = 40.0;
+
   private static final double GRAZING_RAD = 1e-13;
   private static final double TURNING_RAD = 1e-13;
   private static final int ITERATIONS = 60;
@@ -203,7 +206,7 @@ final class FanTracer {
     double xa = 1.0 / a.endDistanceM();
     double xb = 1.0 / b.endDistanceM();
     double miss = 0.5 * (xa + xb) - 1.0 / mid.endDistanceM();
-    return Math.abs(miss) * width <= request.toleranceRad() * Math.abs(xb - xa)
-        || width < 0.1 * request.toleranceRad();
+    double tolerance = GROUND_TOLERANCE * request.toleranceRad();
+    return Math.abs(miss) * width <= tolerance * Math.abs(xb - xa) || width < 0.1 * tolerance;
   }
 }

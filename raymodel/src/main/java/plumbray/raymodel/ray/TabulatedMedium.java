@@ -1,0 +1,192 @@
+package plumbray.raymodel.ray;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+
+/**
+ * A medium turned into polynomials by height, several times faster to evaluate than air with all
+ * its physics.
+ *
+ * <p>Panels are halved until, in each, the polynomial through Chebyshev points agrees with the
+ * medium at points between them: to {@link #GRADIENT_TOLERANCE} in d ln n/dz, and to {@link
+ * #DERIVATIVE_TOLERANCE} of the panel's largest in its derivatives by the parameters. Outside
+ * {@link #LOWEST_M} to {@link #HIGHEST_M} the medium itself answers. Not safe for use by several
+ * threads at once.
+ */
+public final class TabulatedMedium implements Medium {
+
+  /** Largest error of d ln n/dz within the table, 1/m. */
+  public static final double GRADIENT_TOLERANCE = 1e-12;
+
+  /** Largest error of a derivative by a parameter, as a part of the largest nearby. */
+  public static final double DERIVATIVE_TOLERANCE = 1e-8;
+
+  /** Lowest height of the table, m. */
+  public static final double LOWEST_M = -0.5;
+
+  /** Highest height of the table, m. */
+  public static final double HIGHEST_M = 50.0;
+
+  private static final int NODES = 8;
+  private static final int COEFFICIENTS = NODES + 1;
+  private static final int DEEPEST = 24;
+  private static final double[] CHECKS = {-0.99, -0.7, -0.2, 0.31, 0.62, 0.9};
+
+  private final Medium medium;
+  private final int channels;
+  private final ChebyshevFit fit = new ChebyshevFit(NODES);
+  private final double[] scratch;
+  private final double[] edges;
+
+  /** By panel: for each channel the coefficients of ln n (or its derivative by a parameter). */
+  private final double[][] panels;
+
+  private int at;
+
+  /** Tabulates a medium. */
+  public TabulatedMedium(Medium medium) {
+    this.medium = medium;
+    channels = 1 + medium.parameterCount();
+    scratch = new double[3 + 2 * medium.parameterCount()];
+    List<double[]> built = new ArrayList<>();
+    List<Double> tops = new ArrayList<>();
+    tops.add(LOWEST_M);
+    build(LOWEST_M, 0.0, 0, tops, built);
+    double z = 0.0;
+    while (z < HIGHEST_M) {
+      double top = Math.min(HIGHEST_M, z + 4.0 * medium.verticalScaleM(z));
+      build(z, top, 0, tops, built);
+      z = top;
+    }
+    edges = tops.stream().mapToDouble(Double::doubleValue).toArray();
+    panels = built.toArray(double[][]::new);
+  }
+
+  @Override
+  public int parameterCount() {
+    return channels - 1;
+  }
+
+  @Override
+  public double verticalScaleM(double heightM) {
+    return medium.verticalScaleM(heightM);
+  }
+
+  /** How many polynomials the table is made of. */
+  public int panelCount() {
+    return panels.length;
+  }
+
+  @Override
+  public void evaluate(double heightM, double[] out) {
+    if (!(heightM >= LOWEST_M && heightM < HIGHEST_M)) {
+      medium.evaluate(heightM, out);
+      return;
+    }
+    locate(heightM);
+    double half = 0.5 * (edges[at + 1] - edges[at]);
+    double s = (heightM - edges[at]) / half - 1.0;
+    double[] panel = panels[at];
+    logIndex(panel, s, half, out);
+    for (int c = 1; c < channels; c++) {
+      int base = c * COEFFICIENTS;
+      double value = panel[base + NODES];
+      double slope = 0.0;
+      for (int i = NODES - 1; i >= 0; i--) {
+        slope = slope * s + value;
+        value = value * s + panel[base + i];
+      }
+      out[1 + 2 * c] = value;
+      out[2 + 2 * c] = slope / half;
+    }
+  }
+
+  private static void logIndex(double[] panel, double s, double half, double[] out) {
+    double value = panel[NODES];
+    double slope = 0.0;
+    double bend = 0.0;
+    for (int i = NODES - 1; i >= 0; i--) {
+      bend = bend * s + slope;
+      slope = slope * s + value;
+      value = value * s + panel[i];
+    }
+    // ln n is below 1e-3, so four terms give n - 1 to the last bit
+    out[0] = value * (1.0 + value * (0.5 + value * (1.0 / 6 + value / 24)));
+    out[1] = slope / half;
+    out[2] = 2.0 * bend / (half * half);
+  }
+
+  private void locate(double heightM) {
+    if (heightM >= edges[at] && heightM < edges[at + 1]) {
+      return;
+    }
+    if (at + 2 < edges.length && heightM >= edges[at + 1] && heightM < edges[at + 2]) {
+      at++;
+    } else if (at > 0 && heightM >= edges[at - 1] && heightM < edges[at]) {
+      at--;
+    } else {
+      int i = Arrays.binarySearch(edges, heightM);
+      at = Math.min(panels.length - 1, i >= 0 ? i : -i - 2);
+    }
+  }
+
+  private void build(double a, double b, int depth, List<Double> tops, List<double[]> built) {
+    double[] panel = panel(a, b);
+    if (depth < DEEPEST && !goodEnough(panel, a, b)) {
+      double mid = 0.5 * (a + b);
+      build(a, mid, depth + 1, tops, built);
+      build(mid, b, depth + 1, tops, built);
+    } else {
+      tops.add(b);
+      built.add(panel);
+    }
+  }
+
+  /** Coefficients in s = -1..1 of every channel: the gradient's polynomial, integrated. */
+  private double[] panel(double a, double b) {
+    double half = 0.5 * (b - a);
+    double[][] gradients = new double[channels][NODES];
+    for (int i = 0; i < NODES; i++) {
+      medium.evaluate(a + half * (1.0 + fit.node(i)), scratch);
+      gradients[0][i] = scratch[1] * half;
+      for (int c = 1; c < channels; c++) {
+        gradients[c][i] = scratch[2 + 2 * c] * half;
+      }
+    }
+    medium.evaluate(a + half, scratch);
+    double[] panel = new double[channels * COEFFICIENTS];
+    for (int c = 0; c < channels; c++) {
+      double[] power = fit.powerCoefficients(gradients[c]);
+      int base = c * COEFFICIENTS;
+      panel[base] = c == 0 ? Math.log1p(scratch[0]) : scratch[1 + 2 * c];
+      for (int i = 0; i < NODES; i++) {
+        panel[base + 1 + i] = power[i] / (i + 1);
+      }
+    }
+    return panel;
+  }
+
+  private boolean goodEnough(double[] panel, double a, double b) {
+    double half = 0.5 * (b - a);
+    double[] worst = new double[channels];
+    double[] largest = new double[channels];
+    for (double s : CHECKS) {
+      medium.evaluate(a + half * (1.0 + s), scratch);
+      for (int c = 0; c < channels; c++) {
+        double truth = c == 0 ? scratch[1] : scratch[2 + 2 * c];
+        double slope = 0.0;
+        for (int i = NODES; i >= 1; i--) {
+          slope = slope * s + i * panel[c * COEFFICIENTS + i];
+        }
+        worst[c] = Math.max(worst[c], Math.abs(slope / half - truth));
+        largest[c] = Math.max(largest[c], Math.abs(truth));
+      }
+    }
+    boolean good = worst[0] <= GRADIENT_TOLERANCE;
+    for (int c = 1; c < channels; c++) {
+      good &= worst[c] <= Math.max(GRADIENT_TOLERANCE, DERIVATIVE_TOLERANCE * largest[c]);
+    }
+    return good;
+  }
+}
