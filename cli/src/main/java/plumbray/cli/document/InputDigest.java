@@ -1,0 +1,46 @@
+package plumbray.cli.document;
+
+import java.nio.charset.StandardCharsets;
+import java.security.MessageDigest;
+import java.security.NoSuchAlgorithmException;
+import java.util.HexFormat;
+import java.util.Objects;
+
+/**
+ * What a result was made from, so that it can be told whether it would come out the same again.
+ *
+ * @param name what it is called: a file's name, or what else went in
+ * @param sha256 SHA-256 (FIPS 180-4) of its bytes, 64 lower-case hexadecimal digits
+ */
+public record InputDigest(String name, String sha256) {
+  /** Checks that both are there. */
+  public InputDigest {
+    Objects.requireNonNull(name, "name");
+    Objects.requireNonNull(sha256, "sha256");
+  }
+
+  /**
+   * The digest of some bytes.
+   *
+   * @param name what they are called
+   * @param bytes the bytes
+   */
+  public static InputDigest of(String name, byte[] bytes) {
+    try {
+      byte[] digest = MessageDigest.getInstance("SHA-256").digest(bytes);
+      return new InputDigest(name, HexFormat.of().formatHex(digest));
+    } catch (NoSuchAlgorithmException e) {
+      throw new IllegalStateException("every Java has SHA-256", e);
+    }
+  }
+
+  /**
+   * The digest of a text's UTF-8 bytes.
+   *
+   * @param name what it is called
+   * @param text the text
+   */
+  public static InputDigest of(String name, String text) {
+    return of(name, text.getBytes(StandardCharsets.UTF_8));
+  }
+}

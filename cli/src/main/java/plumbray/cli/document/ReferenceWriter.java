@@ -1,0 +1,44 @@
+package plumbray.cli.document;
+
+import com.fasterxml.jackson.databind.node.ArrayNode;
+import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.util.Locale;
+import plumbray.calibration.sight.ImageBox;
+import plumbray.calibration.sight.PointMark;
+import plumbray.calibration.sight.PointTarget;
+import plumbray.calibration.sight.Reference;
+import plumbray.calibration.sight.StaffTarget;
+
+/** Writes one of {@code references} of a sight file. */
+final class ReferenceWriter {
+  private ReferenceWriter() {}
+
+  static ObjectNode write(Reference reference) {
+    ObjectNode object = Json.object();
+    object.put("name", reference.name());
+    object.set("distanceM", Json.number(reference.distanceM()));
+    Quantities.write(object, "footM", reference.footM(), Unit.METRE);
+    if (reference.kind() instanceof StaffTarget staff) {
+      ObjectNode bars = object.putObject("staff");
+      bars.set("edgesM", Json.array(staff.edgesM()));
+      bars.put("firstBar", staff.firstBarDark() ? "dark" : "bright");
+    } else if (reference.kind() instanceof PointTarget points) {
+      ArrayNode marks = object.putArray("points");
+      points.marks().forEach(mark -> marks.add(mark(mark)));
+    }
+    reference.imageBox().ifPresent(box -> object.set("imageBox", box(box)));
+    return object;
+  }
+
+  private static ObjectNode mark(PointMark mark) {
+    ObjectNode object = Json.object();
+    object.set("heightM", Json.number(mark.heightM()));
+    object.set("pixel", Json.array(mark.pixel().u(), mark.pixel().v()));
+    object.set("sigmaPx", Json.number(mark.sigmaPx()));
+    return object.put("sense", mark.sense().name().toLowerCase(Locale.ROOT));
+  }
+
+  private static ArrayNode box(ImageBox box) {
+    return Json.array(box.u0(), box.v0(), box.u1(), box.v1());
+  }
+}

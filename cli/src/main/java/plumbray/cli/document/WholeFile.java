@@ -1,0 +1,70 @@
+package plumbray.cli.document;
+
+import java.io.BufferedOutputStream;
+import java.io.IOException;
+import java.io.OutputStream;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.AtomicMoveNotSupportedException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.nio.file.StandardCopyOption;
+
+/**
+ * Writes a file so that it appears whole or not at all: into a temporary file in the same folder,
+ * which then takes the file's place in one step.
+ */
+public final class WholeFile {
+  private WholeFile() {}
+
+  /** What puts the bytes into the stream; it need not close it. */
+  @FunctionalInterface
+  public interface Content {
+    /**
+     * Writes the content.
+     *
+     * @param out where to
+     * @throws IOException when that fails; the file then does not appear
+     */
+    void writeTo(OutputStream out) throws IOException;
+  }
+
+  /**
+   * Writes text as UTF-8.
+   *
+   * @param target the file; its folder is made where it is missing
+   * @param text what it is to hold
+   * @throws IOException when it cannot be written; what was there before is then still there
+   */
+  public static void write(Path target, String text) throws IOException {
+    write(target, out -> out.write(text.getBytes(StandardCharsets.UTF_8)));
+  }
+
+  /**
+   * Writes what the content gives.
+   *
+   * @param target the file; its folder is made where it is missing
+   * @param content what it is to hold
+   * @throws IOException when it cannot be written; what was there before is then still there
+   */
+  public static void write(Path target, Content content) throws IOException {
+    Path folder = target.toAbsolutePath().getParent();
+    Files.createDirectories(folder);
+    Path part = Files.createTempFile(folder, "." + target.getFileName(), ".part");
+    try {
+      try (OutputStream out = new BufferedOutputStream(Files.newOutputStream(part))) {
+        content.writeTo(out);
+      }
+      takePlace(part, target);
+    } finally {
+      Files.deleteIfExists(part);
+    }
+  }
+
+  private static void takePlace(Path part, Path target) throws IOException {
+    try {
+      Files.move(part, target, StandardCopyOption.ATOMIC_MOVE, StandardCopyOption.REPLACE_EXISTING);
+    } catch (AtomicMoveNotSupportedException e) {
+      Files.move(part, target, StandardCopyOption.REPLACE_EXISTING);
+    }
+  }
+}

@@ -1,0 +1,40 @@
+package plumbray.cli.document;
+
+import java.io.IOException;
+import java.io.InputStream;
+import java.io.UncheckedIOException;
+import java.nio.charset.StandardCharsets;
+import java.util.Objects;
+
+/** The sample documents of these tests, whole or with one place changed. */
+record SampleText(String file, String text) {
+  static SampleText of(String name) {
+    try (InputStream stream = SampleText.class.getResourceAsStream(name)) {
+      byte[] bytes = Objects.requireNonNull(stream, name).readAllBytes();
+      return new SampleText(name, new String(bytes, StandardCharsets.UTF_8));
+    } catch (IOException e) {
+      throw new UncheckedIOException(e);
+    }
+  }
+
+  static SampleText everything() {
+    return of("everything.sight.json");
+  }
+
+  static SampleText least() {
+    return of("least.sight.json");
+  }
+
+  /** The same with one place changed; the place must be there, so that no case tests nothing. */
+  SampleText with(String from, String to) {
+    if (!text.contains(from)) {
+      throw new IllegalArgumentException(file + " does not hold " + from);
+    }
+    return new SampleText(file, text.replaceFirst(java.util.regex.Pattern.quote(from),
+        java.util.regex.Matcher.quoteReplacement(to)));
+  }
+
+  byte[] bytes() {
+    return text.getBytes(StandardCharsets.UTF_8);
+  }
+}

@@ -1,0 +1,238 @@
+package plumbray.cli.document;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.assertThatThrownBy;
+
+import java.util.stream.Stream;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.Arguments;
+import org.junit.jupiter.params.provider.MethodSource;
+
+/** One mistake a case, and the one line that is said about it. */
+class SightMessagesTest {
+  private static Arguments everything(String from, String to, String message) {
+    return Arguments.of(SampleText.everything().with(from, to), message);
+  }
+
+  private static Arguments least(String from, String to, String message) {
+    return Arguments.of(SampleText.least().with(from, to), message);
+  }
+
+  static Stream<Arguments> camera() {
+    return Stream.of(
+        everything(
+            "\"heightM\": 1.62",
+            "\"heightM\": -1.2",
+            "/camera/heightM is -1.2 m, must be 0.01 to 5000 m (height of the camera above the"
+                + " ground)"),
+        least(
+            "\"heightM\": 2, ",
+            "",
+            "/camera/heightM is missing, must be given (height of the camera above the ground)"),
+        everything(
+            "\"heightM\": 1.62",
+            "\"hightM\": 1.62",
+            "/camera/hightM is not a known key, must be one of widthPx, heightPx, focalLengthMm,"
+                + " pixelPitchUm, principalPointPx, radialDistortion, heightM, pitchMrad, rollMrad"
+                + " (the camera)"),
+        everything(
+            "\"heightM\": 1.62",
+            "\"heightM\": \"1.62\"",
+            "/camera/heightM is \"1.62\", must be a number, 0.01 to 5000 m (height of the camera"
+                + " above the ground)"),
+        everything(
+            "\"heightM\": 1.62",
+            "\"heightM\": null",
+            "/camera/heightM is null, must be a number, 0.01 to 5000 m (height of the camera above"
+                + " the ground)"),
+        everything(
+            "\"widthPx\": 6000",
+            "\"widthPx\": 6000.5",
+            "/camera/widthPx is 6000.5 px, must be a whole number (size of the photo)"),
+        everything(
+            "[2990.5, 2010.25]",
+            "[2990.5]",
+            "/camera/principalPointPx is an array of 1, must be of 2 numbers (where the lens's axis"
+                + " meets the photo)"),
+        everything(
+            "\"sigma\": 2.0",
+            "\"sigma\": 0.0",
+            "/camera/pitchMrad/sigma is 0 mrad, must be above 0 mrad (standard deviation of what is"
+                + " known beforehand of the pitch of the camera's axis, up positive; leave it out"
+                + " for none)"),
+        everything(
+            "\"min\": -5.0, \"max\": 5.0",
+            "\"min\": 5.0, \"max\": -5.0",
+            "/camera/rollMrad/max is -5 mrad, must be above 5 mrad (roll of the camera about its"
+                + " axis)"),
+        everything(
+            "\"min\": -5.0, \"max\": 5.0",
+            "\"min\": 1.0, \"max\": 5.0",
+            "/camera/rollMrad/value is 0 mrad, must be 1 to 5 mrad (roll of the camera about its"
+                + " axis)"),
+        everything(
+            "{\"value\": 0.5, \"sigma\": 2.0}",
+            "{\"sigma\": 2.0}",
+            "/camera/pitchMrad/value is missing, must be given (pitch of the camera's axis, up"
+                + " positive)"));
+  }
+
+  static Stream<Arguments> pathAndAir() {
+    return Stream.of(
+        everything(
+            "[640.0, -0.15]",
+            "[640.0, -0.15], [640.0, 0.2]",
+            "/path/groundM/2 is [640, 0.2], must be farther than 640 m (the distances must rise)"),
+        everything(
+            "[0.0, 0.0]",
+            "[0.0, 0.5]",
+            "/path/groundM/0 is [0, 0.5], must be [0, 0] (the ground under the camera)"),
+        everything(
+            "{\"value\": 0.05, \"min\": 0.0, \"max\": 0.3}",
+            "2",
+            "/path/blockedBelowM is 2 m, must be below the camera's height, 1.62 m (height under"
+                + " which things on the ground stop a ray)"),
+        least(
+            "\"temperatureC\": 20",
+            "",
+            "/air/temperatureC is missing, must be given (temperature of the air)"),
+        everything(
+            "\"relativeHumidityPct\": 35.0",
+            "\"relativeHumidityPct\": 135.0",
+            "/air/relativeHumidityPct is 135 %, must be 0 to 100 % (relative humidity)"),
+        everything(
+            "[610, 540, 460]",
+            "[610, 540, 4600]",
+            "/air/channelWavelengthsNm/2 is 4600 nm, must be 300 to 1700 nm (wavelength of the"
+                + " light)"));
+  }
+
+  static Stream<Arguments> profile() {
+    return Stream.of(
+        least(
+            "\"uniform\"",
+            "\"unifrom\"",
+            "/profile/family is \"unifrom\", must be one of \"uniform\", \"exponential\","
+                + " \"twoScale\", \"logarithmic\", \"power\", \"similarity\", \"step\", \"best\""
+                + " (family of temperature profiles)"),
+        least(
+            "\"uniform\"",
+            "\"layered\"",
+            "/profile/family is \"layered\", must be one of \"uniform\", \"exponential\","
+                + " \"twoScale\", \"logarithmic\", \"power\", \"similarity\", \"step\", \"best\""
+                + " (family of temperature profiles; this release does not read layered)"),
+        least(
+            "{\"family\": \"uniform\"}",
+            "[{\"family\": \"uniform\"}]",
+            "/profile is a list of stretches, must be one profile (temperature against height; this"
+                + " release does not read stretches)"),
+        least(
+            "\"uniform\"",
+            "\"best\", \"gradientKPerM\": 0",
+            "/profile/gradientKPerM is not a known key, must be one of family (all families are"
+                + " tried; none of their keys is given)"),
+        least(
+            "\"uniform\"",
+            "\"exponential\", \"surfaceExcessK\": 3",
+            "/profile/scaleHeightM is missing, must be given (the profile's scaleHeightM)"),
+        least(
+            "\"uniform\"",
+            "\"similarity\", \"temperatureScaleK\": 1, \"obukhovLengthM\": 0, \"roughnessM\": 0.1",
+            "/profile/obukhovLengthM is 0 m, must be below or above 0 m (the profile's"
+                + " obukhovLengthM)"));
+  }
+
+  static Stream<Arguments> referencesAndRegions() {
+    return Stream.of(
+        everything(
+            "\"distanceM\": 640.0",
+            "\"distanceM\": -640.0",
+            "/references/0/distanceM is -640 m, must be 0.1 to 200000 m (distance from the camera"
+                + " along the ground)"),
+        everything(
+            "[0.0, 0.1, 0.2, 0.3]",
+            "[0.0, 0.2, 0.2, 0.3]",
+            "/references/0/staff/edgesM/2 is 0.2 m, must be above 0.2 m (heights of the bars' edges,"
+                + " rising)"),
+        everything(
+            "[2950.0, 1700.0, 3050.0, 2300.0]",
+            "[2950.0, 1700.0, 3050.0, 4300.0]",
+            "/references/0/imageBox/3 is 4300 px, must be -0.5 to 3999.5 px (row inside the photo)"),
+        everything(
+            "[2950.0, 1700.0, 3050.0, 2300.0]",
+            "[2950.0, 1700.0, 2900.0, 2300.0]",
+            "/references/0/imageBox/2 is 2900 px, must be above 2950 px (box in the photo, [u0, v0,"
+                + " u1, v1])"),
+        everything(
+            ",\n      \"imageBox\": [2950.0, 1700.0, 3050.0, 2300.0]",
+            "",
+            "/references/0/imageBox is missing, must be [u0, v0, u1, v1] (where the staff is in the"
+                + " photo)"),
+        everything(
+            "\"staff\": {\"edgesM\": [0.0, 0.1, 0.2, 0.3], \"firstBar\": \"dark\"}",
+            "\"coded\": {}",
+            "/references/0/coded is given, must be left out (a reference; this release reads staff"
+                + " and points alone)"),
+        everything(
+            "\"staff\": {\"edgesM\": [0.0, 0.1, 0.2, 0.3], \"firstBar\": \"dark\"},",
+            "",
+            "/references/0 is of no kind, must be exactly one of staff, points (a reference)"),
+        everything(
+            "\"imageBox\": [2950.0, 1700.0, 3050.0, 2300.0]",
+            "\"points\": []",
+            "/references/0 is both staff and points, must be exactly one of staff, points (a"
+                + " reference)"),
+        everything(
+            "\"sense\": \"upright\"",
+            "\"sense\": \"Upright\"",
+            "/references/1/points/0/sense is \"Upright\", must be one of \"upright\", \"inverted\","
+                + " \"any\" (which way up the point is seen)"),
+        everything(
+            "\"surface\": \"ground\"",
+            "\"surface\": \"ground\", \"distanceM\": 3",
+            "/regions/1 is given both, must be given exactly one of distanceM, surface (a region of"
+                + " the picture)"),
+        everything(
+            "[[2800, 1500], [3200, 1500], [3200, 2400], [2800, 2400]]",
+            "[[2800, 1500], [3200, 1500]]",
+            "/regions/0/polygonPx is an array of 2, must be of 3 or more (corners of the region, [u,"
+                + " v] each)"));
+  }
+
+  static Stream<Arguments> wholeFile() {
+    return Stream.of(
+        least(
+            "plumbray-sight/1",
+            "plumbray-sight/2",
+            "/format is \"plumbray-sight/2\", must be \"plumbray-sight/1\" (the file's format)"),
+        least(
+            "\"heightM\": 2,",
+            "\"heightM\": NaN,",
+            "/camera/heightM is NaN, must be a finite number (line 4, column 107)"),
+        least(
+            "\"heightM\": 2,",
+            "\"heightM\": 1e999,",
+            "/camera/heightM is 1e999, must be a finite number (line 4, column 107)"),
+        least(
+            "\"heightM\": 2,",
+            "\"heightM\": 2, \"heightM\": 3,",
+            "/camera/heightM is given twice, must be given once (line 4, column 121)"),
+        least("\"name\"", "\"name\\n\"", "/name\\u000a is not a known key, must be one of format,"
+            + " name, camera, path, air, profile, references, regions, rectified (a sight file)"));
+  }
+
+  @ParameterizedTest
+  @MethodSource({"camera", "pathAndAir", "profile", "referencesAndRegions", "wholeFile"})
+  void oneLineNamesThePlaceWhatWasFoundAndWhatIsAllowed(SampleText sample, String message) {
+    assertThatThrownBy(() -> SightReader.read(sample.file(), sample.bytes()))
+        .isInstanceOf(InputException.class)
+        .hasMessage(sample.file() + ": " + message);
+  }
+
+  @ParameterizedTest
+  @MethodSource({"camera", "pathAndAir", "profile", "referencesAndRegions", "wholeFile"})
+  void theSampleIsRightWithoutTheMistake(SampleText sample, String message) {
+    SampleText unchanged = SampleText.of(sample.file());
+    assertThat(SightReader.read(unchanged.file(), unchanged.bytes())).isNotNull();
+  }
+}
