@@ -85,8 +85,7 @@ public final class BatchReader {
   private static Source source(Path sightFile) {
     byte[] text = JsonText.bytes(sightFile);
     String name = sightFile.getFileName().toString();
-    return new Source(
-        JsonText.parse(sightFile.toString(), text), InputDigest.of(name, text));
+    return new Source(JsonText.parse(sightFile.toString(), text), InputDigest.of(name, text));
   }
 
   private void claim(Node file, String name, Path photo) {
@@ -94,7 +93,9 @@ public final class BatchReader {
     Path other = taken.putIfAbsent(name.toLowerCase(Locale.ROOT), photo);
     if (other != null) {
       throw file.wrong(
-          "the name of " + photo.getFileName() + ", whose results would overwrite those of "
+          "the name of "
+              + photo.getFileName()
+              + ", whose results would overwrite those of "
               + other.getFileName(),
           "a photo of another name",
           "results bear the photo's name; rename one, or put it in a batch of its own");

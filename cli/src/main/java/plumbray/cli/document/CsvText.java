@@ -5,8 +5,8 @@ import java.util.List;
 
 /**
  * Takes the text of a CSV file (RFC 4180) apart: commas between fields, quotes around fields that
- * hold commas, quotes or line breaks, a quote inside quotes doubled. Lines may end with CR LF or LF;
- * empty lines are passed over.
+ * hold commas, quotes or line breaks, a quote inside quotes doubled. Lines may end with CR LF or
+ * LF; empty lines are passed over.
  */
 final class CsvText {
   /**

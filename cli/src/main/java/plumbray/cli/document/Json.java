@@ -18,8 +18,7 @@ import java.util.OptionalDouble;
 final class Json {
   private static final DefaultIndenter INDENT = new DefaultIndenter("  ", "\n");
   private static final ObjectWriter WRITER =
-      new ObjectMapper()
-          .writer(new DefaultPrettyPrinter().withObjectIndenter(INDENT));
+      new ObjectMapper().writer(new DefaultPrettyPrinter().withObjectIndenter(INDENT));
 
   private Json() {}
 

@@ -141,7 +141,12 @@ final class JsonText {
     double value = parser.getDoubleValue();
     if (!Double.isFinite(value)) {
       throw new InputException(
-          file + ": " + pointer() + " is " + parser.getText() + ", must be a finite number "
+          file
+              + ": "
+              + pointer()
+              + " is "
+              + parser.getText()
+              + ", must be a finite number "
               + place());
     }
     return NODES.numberNode(value);

@@ -203,7 +203,9 @@ final class Node {
     return elements;
   }
 
-  /** The numbers of this array, which must have exactly one for each of the limits; units theirs. */
+  /**
+   * The numbers of this array, which must have exactly one for each of the limits; units theirs.
+   */
   double[] tuple(String what, Limits... limits) {
     List<Node> elements = elements(what);
     if (elements.size() != limits.length) {

@@ -11,8 +11,7 @@ final class PathReader {
   static final double MEAN_EARTH_RADIUS_M = 6_371_000.0;
   static final double FARTHEST_M = 200_000.0;
   static final Limits EARTH_RADIUS = new Limits("radius of the earth", Unit.METRE, 1e5, 1e12);
-  static final Limits DISTANCE =
-      new Limits("distance along the ground", Unit.METRE, 0, FARTHEST_M);
+  static final Limits DISTANCE = new Limits("distance along the ground", Unit.METRE, 0, FARTHEST_M);
   static final Limits ELEVATION =
       new Limits("elevation of the ground above the camera's foot", Unit.METRE, -5000, 5000);
   static final Limits BLOCKED_BELOW =
@@ -58,7 +57,8 @@ final class PathReader {
   }
 
   private static void checkPoint(Node point, double[] distancesM, int i, double elevationM) {
-    String found = "[" + Numbers.shortest(distancesM[i]) + ", " + Numbers.shortest(elevationM) + "]";
+    String found =
+        "[" + Numbers.shortest(distancesM[i]) + ", " + Numbers.shortest(elevationM) + "]";
     if (i == 0 && (distancesM[0] != 0.0 || elevationM != 0.0)) {
       throw point.wrong(found, "[0, 0]", "the ground under the camera");
     }

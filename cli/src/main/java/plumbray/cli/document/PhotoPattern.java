@@ -12,9 +12,9 @@ import java.util.List;
 import java.util.regex.PatternSyntaxException;
 
 /**
- * The photos that a name or a pattern such as {@code day1/*.jpg} stands for. A pattern stands in the
- * last part of the path. It passes over hidden files and over the program's own pictures ({@code
- * NAME.rectified.EXT}, {@code NAME.mask.png}), so that results may lie beside the photos.
+ * The photos that a name or a pattern such as {@code day1/*.jpg} stands for. A pattern stands in
+ * the last part of the path. It passes over hidden files and over the program's own pictures
+ * ({@code NAME.rectified.EXT}, {@code NAME.mask.png}), so that results may lie beside the photos.
  */
 final class PhotoPattern {
   private static final String WHAT = "a photo's file, or a pattern of files";
@@ -28,7 +28,9 @@ final class PhotoPattern {
     this.file = file;
   }
 
-  /** The files by rising name; a plain name stands for itself, whether there is such a file or not. */
+  /**
+   * The files by rising name; a plain name stands for itself, whether there is such a file or not.
+   */
   List<Path> matches() {
     String text = file.text(WHAT);
     int slash = text.lastIndexOf('/');

@@ -31,8 +31,7 @@ final class ReferenceReader {
   private static final String SENSE = "which way up the point is seen";
   private static final List<String> KINDS = List.of("staff", "coded", "points", "baseline");
   private static final List<String> KEYS =
-      List.of(
-          "name", "distanceM", "footM", "staff", "coded", "points", "baseline", "imageBox");
+      List.of("name", "distanceM", "footM", "staff", "coded", "points", "baseline", "imageBox");
 
   private final PhotoFrame frame;
 
@@ -83,8 +82,7 @@ final class ReferenceReader {
       if (i > 0 && !(edgesM[i] > edgesM[i - 1])) {
         throw edges
             .get(i)
-            .wrong(
-                Unit.METRE.show(edgesM[i]), "above " + Unit.METRE.show(edgesM[i - 1]), EDGES);
+            .wrong(Unit.METRE.show(edgesM[i]), "above " + Unit.METRE.show(edgesM[i - 1]), EDGES);
       }
     }
     String what = "which the lowest bar is";

@@ -12,7 +12,9 @@ import plumbray.calibration.sight.Sight;
 import plumbray.raymodel.profile.ProfileFamily;
 import plumbray.raymodel.profile.ProfileParameter;
 
-/** Writes a sight as a sight file, with every default spelt out; read back, it is the same sight. */
+/**
+ * Writes a sight as a sight file, with every default spelt out; read back, it is the same sight.
+ */
 final class SightWriter {
   private SightWriter() {}
 

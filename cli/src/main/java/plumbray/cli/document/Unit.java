@@ -3,8 +3,8 @@ package plumbray.cli.document;
 /**
  * The units that the files' keys name, and the way from each to SI and back.
  *
- * <p>{@code si = (value + offset) * numerator / denominator}. Whole numbers above and below keep the
- * conversion correctly rounded (5.5 um is 5.5 / 1 000 000 m, not 5.5 times a rounded 1e-6).
+ * <p>{@code si = (value + offset) * numerator / denominator}. Whole numbers above and below keep
+ * the conversion correctly rounded (5.5 um is 5.5 / 1 000 000 m, not 5.5 times a rounded 1e-6).
  */
 enum Unit {
   /** Metres. */
@@ -73,8 +73,8 @@ enum Unit {
   }
 
   /**
-   * The shortest decimal in this unit that {@link #toSi} takes back to the SI value, the nearest one
-   * where none does so to the last bit.
+   * The shortest decimal in this unit that {@link #toSi} takes back to the SI value, the nearest
+   * one where none does so to the last bit.
    */
   double fromSi(double si) {
     double exact = spanFromSi(si) - offset;

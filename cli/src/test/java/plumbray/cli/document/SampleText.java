@@ -5,6 +5,8 @@ import java.io.InputStream;
 import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
 import java.util.Objects;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 
 /** The sample documents of these tests, whole or with one place changed. */
 record SampleText(String file, String text) {
@@ -30,8 +32,8 @@ record SampleText(String file, String text) {
     if (!text.contains(from)) {
       throw new IllegalArgumentException(file + " does not hold " + from);
     }
-    return new SampleText(file, text.replaceFirst(java.util.regex.Pattern.quote(from),
-        java.util.regex.Matcher.quoteReplacement(to)));
+    return new SampleText(
+        file, text.replaceFirst(Pattern.quote(from), Matcher.quoteReplacement(to)));
   }
 
   byte[] bytes() {
