@@ -9,12 +9,12 @@ import net.jqwik.api.constraints.DoubleRange;
 import org.junit.jupiter.api.Test;
 
 class NumbersTest {
-  @Property
+  @Property(seed = "20260101")
   void theShortestTextReadsBackToTheSameDouble(@ForAll double value) {
     assertThat(Double.parseDouble(Numbers.shortest(value)) + 0.0).isEqualTo(value + 0.0);
   }
 
-  @Property
+  @Property(seed = "20260101")
   void aUnitsValueComesBackToTheSameSi(@ForAll @DoubleRange(min = -90, max = 99) double value) {
     for (Unit unit : Unit.values()) {
       double si = unit.toSi(Numbers.rounded(value, 9));
