@@ -1,0 +1,180 @@
+package plumbray.imaging.fit;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.TreeSet;
+import plumbray.calibration.camera.Camera;
+import plumbray.calibration.sight.Reference;
+import plumbray.calibration.sight.Region;
+import plumbray.calibration.sight.Sight;
+import plumbray.raymodel.air.AirColumn;
+import plumbray.raymodel.mapping.FanRequest;
+import plumbray.raymodel.mapping.RayFan;
+import plumbray.raymodel.mapping.SightMapping;
+import plumbray.raymodel.profile.ProfileFamily;
+import plumbray.raymodel.ray.StraightRay;
+import plumbray.raymodel.ray.TabulatedMedium;
+
+/**
+ * What a sight's camera sees, at the current values of all its quantities: the camera, the air, and
+ * the mapping at every distance in use over all of the picture's rows.
+ */
+public final class SightOptics {
+
+  /** Mappings are good to this part of a pixel. */
+  public static final double TOLERANCE_PX = 0.01;
+
+  private static final double MARGIN = 0.05;
+
+  /** Ground is followed this many times as far as the farthest distance in use. */
+  private static final double GROUND_REACH = 3.0;
+
+  private final Sight sight;
+  private final Camera camera;
+  private final AirColumn column;
+  private final RayFan fan;
+
+  private SightOptics(Sight sight, Camera camera, AirColumn column, RayFan fan) {
+    this.sight = sight;
+    this.camera = camera;
+    this.column = column;
+    this.fan = fan;
+  }
+
+  /** The optics at the sight's current values, without derivatives by them. */
+  public static SightOptics of(Sight sight) {
+    return of(sight, List.of());
+  }
+
+  /**
+   * The optics at the sight's current values.
+   *
+   * @param sight a sight whose profile family is chosen
+   * @param estimated names of the quantities by which the mappings carry derivatives
+   * @throws IllegalArgumentException where the values make no physical sense together
+   */
+  public static SightOptics of(Sight sight, List<String> estimated) {
+    return of(sight, estimated, distancesInUse(sight));
+  }
+
+  /** The optics for distances of one's own, m. */
+  public static SightOptics of(Sight sight, List<String> estimated, double[] distancesM) {
+    Camera camera = sight.camera().camera();
+    AirColumn column = column(sight, estimated);
+    double[] range = elevationRange(camera);
+    TreeSet<Double> targets = new TreeSet<>();
+    for (double d : distancesM) {
+      targets.add(d);
+    }
+    if (sight.regions().stream().anyMatch(Region::ground)) {
+      targets.add(GROUND_REACH * targets.last());
+    }
+    FanRequest request =
+        new FanRequest(
+            sight.camera().heightM().value(),
+            range[0],
+            range[1],
+            targets.stream().mapToDouble(Double::doubleValue).toArray(),
+            TOLERANCE_PX * camera.radPerPx(),
+            !estimated.isEmpty());
+    RayFan fan = RayFan.trace(new TabulatedMedium(column), sight.path().path(), request);
+    return new SightOptics(sight, camera, column, fan);
+  }
+
+  /** The air over the ground of a sight, with derivatives by the quantities named. */
+  public static AirColumn column(Sight sight, List<String> estimated) {
+    ProfileFamily family =
+        sight
+            .profile()
+            .family()
+            .orElseThrow(
+                () ->
+                    new IllegalArgumentException(
+                        "profile.family is best, must be one family (the air is not known before a"
+                            + " fit has chosen)"));
+    return AirColumn.of(
+        sight.air().state(),
+        sight.air().atHeightM(),
+        family.profile(sight.profile().values(), sight.profile().stability()),
+        EstimateLayout.of(sight, estimated).columnParameters());
+  }
+
+  /** Apparent elevations that the picture spans, with a margin, rad. */
+  static double[] elevationRange(Camera camera) {
+    double lowest = Double.POSITIVE_INFINITY;
+    double highest = Double.NEGATIVE_INFINITY;
+    double[] direction = new double[2];
+    int steps = 16;
+    for (int i = 0; i <= steps; i++) {
+      for (int j = 0; j <= steps; j++) {
+        if (i == 0 || j == 0 || i == steps || j == steps) {
+          double u = (camera.widthPx() - 1.0) * i / steps;
+          double v = (camera.heightPx() - 1.0) * j / steps;
+          camera.direction(u, v, direction);
+          lowest = Math.min(lowest, direction[0]);
+          highest = Math.max(highest, direction[0]);
+        }
+      }
+    }
+    double margin = MARGIN * (highest - lowest);
+    return new double[] {lowest - margin, highest + margin};
+  }
+
+  /** Distances of the references and regions of a sight, m, rising, each once. */
+  public static double[] distancesInUse(Sight sight) {
+    TreeSet<Double> distances = new TreeSet<>();
+    sight.references().stream().map(Reference::distanceM).forEach(distances::add);
+    sight.regions().stream()
+        .filter(r -> !r.ground())
+        .map(Region::distanceM)
+        .forEach(distances::add);
+    if (distances.isEmpty()) {
+      throw new IllegalArgumentException(
+          "no distance is in use, must be at least one (distance of a reference or a region); add"
+              + " one");
+    }
+    return distances.stream().mapToDouble(Double::doubleValue).toArray();
+  }
+
+  /** Mappings at the distances in use, by rising distance. */
+  public List<SightMapping> mappings() {
+    List<SightMapping> used = new ArrayList<>();
+    for (double d : distancesInUse(sight)) {
+      used.add(fan.mapping(d));
+    }
+    return used;
+  }
+
+  /** The sight. */
+  public Sight sight() {
+    return sight;
+  }
+
+  /** The camera. */
+  public Camera camera() {
+    return camera;
+  }
+
+  /** The air; for one thread at a time. */
+  public AirColumn column() {
+    return column;
+  }
+
+  /** The rays. */
+  public RayFan fan() {
+    return fan;
+  }
+
+  /** The mapping at one of the distances in use, m. */
+  public SightMapping mapping(double distanceM) {
+    return fan.mapping(distanceM);
+  }
+
+  /** The rays as which the picture is redrawn. */
+  public StraightRay straight() {
+    return new StraightRay(
+        sight.camera().heightM().value(),
+        sight.path().earthRadiusM(),
+        sight.refractionCoefficient());
+  }
+}
