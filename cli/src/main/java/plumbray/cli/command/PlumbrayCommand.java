@@ -17,7 +17,7 @@ import picocli.CommandLine.Spec;
         "Puts photographs taken along a sight line close to hot or cold ground back into true"
             + " geometry, and says how far each height read from them can be trusted.",
     versionProvider = VersionText.class,
-    subcommands = {},
+    subcommands = {SimulateCommand.class},
     synopsisSubcommandLabel = "COMMAND",
     sortOptions = false)
 public final class PlumbrayCommand implements Runnable {

@@ -30,7 +30,7 @@ import javax.imageio.stream.MemoryCacheImageOutputStream;
 
 /** Encodes a photo's samples, untouched, with its colour profile. */
 final class PhotoEncoder {
-  private static final float JPEG_QUALITY = 0.97f;
+  static final float JPEG_QUALITY = 0.97f;
 
   /** Rows written at a time in a TIFF file: few seeks, and little to unpack for a few rows. */
   private static final int TIFF_STRIP_ROWS = 64;
@@ -38,14 +38,18 @@ final class PhotoEncoder {
   private final Photo photo;
   private final BufferedImage image;
 
-  private PhotoEncoder(Photo photo) {
+  private final float jpegQuality;
+
+  private PhotoEncoder(Photo photo, float jpegQuality) {
     this.photo = photo;
+    this.jpegQuality = jpegQuality;
     this.image = image(photo);
   }
 
   /** Writes the file anew. */
-  static void encode(Photo photo, PhotoFormat format, Path file) throws IOException {
-    PhotoEncoder encoder = new PhotoEncoder(photo);
+  static void encode(Photo photo, PhotoFormat format, float jpegQuality, Path file)
+      throws IOException {
+    PhotoEncoder encoder = new PhotoEncoder(photo, jpegQuality);
     if (format == PhotoFormat.JPEG) {
       Files.write(file, encoder.jpeg());
       return;
@@ -77,7 +81,7 @@ final class PhotoEncoder {
       ImageWriteParam param = writer.getDefaultWriteParam();
       if (format == PhotoFormat.JPEG) {
         param.setCompressionMode(ImageWriteParam.MODE_EXPLICIT);
-        param.setCompressionQuality(JPEG_QUALITY);
+        param.setCompressionQuality(jpegQuality);
       }
       writer.write(null, new IIOImage(image, null, metadata(format, writer, param)), param);
     } finally {

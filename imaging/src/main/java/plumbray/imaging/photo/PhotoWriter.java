@@ -23,11 +23,22 @@ public final class PhotoWriter {
    *     photo, or the file cannot be written
    */
   public static void write(Photo photo, Path file) throws PhotoException {
+    write(photo, file, PhotoEncoder.JPEG_QUALITY);
+  }
+
+  /**
+   * Writes a photo, over an existing file of the name.
+   *
+   * @param jpegQuality quality of a JPEG, 0 to 1; of no effect for the other formats
+   * @throws PhotoException with one line where the name's format is unknown or cannot hold the
+   *     photo, or the file cannot be written
+   */
+  public static void write(Photo photo, Path file, double jpegQuality) throws PhotoException {
     PhotoFormat format = checkedFormat(photo.shape(), file);
     try {
       Path part = newPart(file);
       try {
-        PhotoEncoder.encode(photo, format, part);
+        PhotoEncoder.encode(photo, format, (float) jpegQuality, part);
         moveInto(part, file);
       } finally {
         Files.deleteIfExists(part);
