@@ -23,7 +23,7 @@ import plumbray.commandline.StartScriptCheckout.Outcome;
  */
 class StartScriptTest {
   private static final String BUILDING =
-      "plumbray: building the program (first use, or its sources have changed)";
+      "plumbray: building the program (first use, or its sources have changed); this can take a minute";
 
   @TempDir private Path temporary;
   private StartScriptCheckout checkout;
