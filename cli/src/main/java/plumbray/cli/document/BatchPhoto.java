@@ -14,7 +14,7 @@ import plumbray.calibration.sight.Sight;
  * @param sightInputs digests of what the sight was read from
  */
 public record BatchPhoto(
-    String name, Path photo, Path sightFile, Sight sight, List<InputDigest> sightInputs) {
+    String name, Path photo, Path sightFile, Sight sight, List<Digest> sightInputs) {
   /** Copies the list. */
   public BatchPhoto {
     sightInputs = List.copyOf(sightInputs);

@@ -28,7 +28,7 @@ public final class BatchReader {
   private final Map<String, Path> taken = new HashMap<>();
   private final List<BatchPhoto> photos = new ArrayList<>();
 
-  private record Source(Node root, InputDigest digest) {}
+  private record Source(Node root, Digest digest) {}
 
   private BatchReader(Node root, Path folder) {
     this.root = root;
@@ -64,9 +64,9 @@ public final class BatchReader {
     Source source = sources.computeIfAbsent(sightFile, BatchReader::source);
     Optional<Node> air = photo.find("air");
     Sight sight = SightReader.read(source.root(), air);
-    List<InputDigest> inputs = new ArrayList<>();
+    List<Digest> inputs = new ArrayList<>();
     inputs.add(source.digest());
-    air.ifPresent(node -> inputs.add(InputDigest.of("air of the photo", node.json().toString())));
+    air.ifPresent(node -> inputs.add(Digest.of("air of the photo", node.json().toString())));
     for (Path match : new PhotoPattern(folder, file).matches()) {
       String name = BatchPhoto.resultName(match);
       claim(file, name, match);
@@ -85,7 +85,7 @@ public final class BatchReader {
   private static Source source(Path sightFile) {
     byte[] text = JsonText.bytes(sightFile);
     String name = sightFile.getFileName().toString();
-    return new Source(JsonText.parse(sightFile.toString(), text), InputDigest.of(name, text));
+    return new Source(JsonText.parse(sightFile.toString(), text), Digest.of(name, text));
   }
 
   private void claim(Node file, String name, Path photo) {

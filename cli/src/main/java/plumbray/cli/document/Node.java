@@ -5,6 +5,7 @@ import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.stream.Collectors;
 
 /**
@@ -157,6 +158,25 @@ final class Node {
       throw node.wrong(limits.unit().show(number), "a whole number", limits.what());
     }
     return (int) number;
+  }
+
+  /** The number under a key, NaN where it is null. */
+  double orNaN(String key) {
+    return get(key, "a number").orNaN();
+  }
+
+  /** This number, NaN where it is null. */
+  double orNaN() {
+    if (!value.isNumber() && !value.isNull()) {
+      throw wrong("a number or null", "a number");
+    }
+    return value.isNumber() ? value.doubleValue() : Double.NaN;
+  }
+
+  /** The number under a key, none where it is null. */
+  OptionalDouble orNone(String key) {
+    double number = orNaN(key);
+    return Double.isNaN(number) ? OptionalDouble.empty() : OptionalDouble.of(number);
   }
 
   String text(String what) {

@@ -12,9 +12,9 @@ import java.util.Objects;
  * @param name what it is called: a file's name, or what else went in
  * @param sha256 SHA-256 (FIPS 180-4) of its bytes, 64 lower-case hexadecimal digits
  */
-public record InputDigest(String name, String sha256) {
+public record Digest(String name, String sha256) {
   /** Checks that both are there. */
-  public InputDigest {
+  public Digest {
     Objects.requireNonNull(name, "name");
     Objects.requireNonNull(sha256, "sha256");
   }
@@ -25,10 +25,10 @@ public record InputDigest(String name, String sha256) {
    * @param name what they are called
    * @param bytes the bytes
    */
-  public static InputDigest of(String name, byte[] bytes) {
+  public static Digest of(String name, byte[] bytes) {
     try {
       byte[] digest = MessageDigest.getInstance("SHA-256").digest(bytes);
-      return new InputDigest(name, HexFormat.of().formatHex(digest));
+      return new Digest(name, HexFormat.of().formatHex(digest));
     } catch (NoSuchAlgorithmException e) {
       throw new IllegalStateException("every Java has SHA-256", e);
     }
@@ -40,7 +40,7 @@ public record InputDigest(String name, String sha256) {
    * @param name what it is called
    * @param text the text
    */
-  public static InputDigest of(String name, String text) {
+  public static Digest of(String name, String text) {
     return of(name, text.getBytes(StandardCharsets.UTF_8));
   }
 }

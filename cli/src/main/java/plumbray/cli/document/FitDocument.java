@@ -1,0 +1,104 @@
+package plumbray.cli.document;
+
+import java.util.List;
+import java.util.Objects;
+import java.util.Optional;
+import plumbray.calibration.sight.Sight;
+import plumbray.imaging.fit.Alternative;
+import plumbray.imaging.fit.Estimates;
+import plumbray.imaging.fit.FitResult;
+import plumbray.imaging.fit.FitStatus;
+import plumbray.imaging.fit.Residuals;
+import plumbray.imaging.fit.SightLine;
+import plumbray.imaging.fit.SightOptics;
+import plumbray.imaging.fit.TemperatureRow;
+import plumbray.imaging.fit.Warning;
+
+/**
+ * What a fit file holds.
+ *
+ * @param status the verdict
+ * @param error why the fit failed, where it did
+ * @param warnings reasons for doubt
+ * @param sight the sight with every estimated quantity held at its estimate; as asked where the fit
+ *     failed
+ * @param estimates what was estimated, SI
+ * @param residuals what was left unexplained
+ * @param jitterPx standard deviation of the shimmer found in the picture, px
+ * @param alternatives the families tried, where the data chose
+ * @param temperatures temperature against height; empty where the fit failed
+ * @param sightLines what can be seen at each distance in use; empty where the fit failed
+ * @param inputs what the fit was made from
+ * @param program version of the program that made it
+ */
+public record FitDocument(
+    FitStatus status,
+    Optional<String> error,
+    List<Warning> warnings,
+    Sight sight,
+    Estimates estimates,
+    Residuals residuals,
+    double jitterPx,
+    List<Alternative> alternatives,
+    List<TemperatureRow> temperatures,
+    List<SightLine> sightLines,
+    List<Digest> inputs,
+    String program) {
+
+  /** Copies the lists. */
+  public FitDocument {
+    Objects.requireNonNull(status, "status");
+    Objects.requireNonNull(sight, "sight");
+    Objects.requireNonNull(program, "program");
+    warnings = List.copyOf(warnings);
+    alternatives = List.copyOf(alternatives);
+    temperatures = List.copyOf(temperatures);
+    sightLines = List.copyOf(sightLines);
+    inputs = List.copyOf(inputs);
+  }
+
+  /**
+   * The document of a fit that gave something.
+   *
+   * @param result the fit
+   * @param optics the optics of its sight
+   * @param inputs what it was made from
+   */
+  public static FitDocument of(FitResult result, SightOptics optics, List<Digest> inputs) {
+    return of(
+        result,
+        TemperatureRow.of(result.sight(), result.estimates()),
+        SightLine.of(optics),
+        inputs);
+  }
+
+  /**
+   * The document of a fit that failed.
+   *
+   * @param result the fit
+   * @param inputs what it was made from
+   */
+  public static FitDocument failed(FitResult result, List<Digest> inputs) {
+    return of(result, List.of(), List.of(), inputs);
+  }
+
+  private static FitDocument of(
+      FitResult result,
+      List<TemperatureRow> temperatures,
+      List<SightLine> sightLines,
+      List<Digest> inputs) {
+    return new FitDocument(
+        result.status(),
+        result.error(),
+        result.warnings(),
+        result.sight(),
+        result.estimates(),
+        result.residuals(),
+        result.jitterPx(),
+        result.alternatives(),
+        temperatures,
+        sightLines,
+        inputs,
+        ProgramVersion.name());
+  }
+}
