@@ -23,7 +23,8 @@ import plumbray.raymodel.ray.StraightRay;
  * @param elevationM elevation above the level surface through the camera's foot, m
  * @param straightRad apparent elevation that the redrawn picture's rays would give it, rad
  * @param rectifiedRowPx row in the redrawn picture, px
- * @param shiftPx {@code rectifiedRowPx - rowPx}: positive where it belongs lower than it is seen, px
+ * @param shiftPx {@code rectifiedRowPx - rowPx}: positive where it belongs lower than it is seen,
+ *     px
  * @param sigmaShiftPx standard deviation of the shift at that row of the photo, px
  * @param sense which way up the image is there
  * @param slopeMPerRad d elevation / d apparent elevation, m/rad
