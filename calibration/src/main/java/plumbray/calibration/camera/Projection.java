@@ -128,7 +128,8 @@ public final class Projection {
    * The row at the principal column in which an elevation is seen.
    *
    * <p>Along that column, {@code y = tan phi} with {@code sin elevation = sin tau cos phi - cos rho
-   * cos tau sin phi}, solved in closed form.
+   * cos tau sin phi}, solved in closed form. A steep or strongly rolled camera may show an
+   * elevation twice in that column; the row at which the elevation falls downwards is answered.
    *
    * @param elevationRad angle above the horizontal, rad
    * @return row, px; NaN when the column never shows that elevation

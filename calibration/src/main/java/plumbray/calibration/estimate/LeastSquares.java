@@ -23,6 +23,9 @@ public final class LeastSquares {
   private static final double DEFAULT_TOLERANCE = 1e-6;
   private static final double FIRST_DAMPING = 1e-3;
 
+  /** How many times the size of the start the first step may be, sizes weighed by D. */
+  private static final double FIRST_REACH = 10;
+
   /** Enough to keep a singular triangle solvable, too little to be felt. */
   private static final double LEAST_DAMPING = 1e-16;
 
@@ -104,6 +107,7 @@ public final class LeastSquares {
         return false;
       }
       arrive(best);
+      shortenFirstStep();
       while (!closerThan(tolerance)) {
         boolean close = closerThan(Math.max(tolerance, STALLED_TOLERANCE));
         if (evaluations >= mostEvaluations || damping > MOST_DAMPING) {
@@ -123,6 +127,26 @@ public final class LeastSquares {
       for (int k = 0; k < scaling.length; k++) {
         scaling[k] = Math.max(scaling[k], point.columnLength(k));
       }
+    }
+
+    /** Raises the damping until the first step is in proportion to the start (More 1978). */
+    private void shortenFirstStep() {
+      double[] size = new double[scaling.length];
+      for (int k = 0; k < size.length; k++) {
+        double scale = problem.parameters().get(k).typicalScale();
+        size[k] = FIRST_REACH * Math.max(1, Math.abs(best.values()[k]) / scale);
+      }
+      while (damping < MOST_DAMPING && weighed(step.solve(damping, scaling)) > weighed(size)) {
+        damping *= 4;
+      }
+    }
+
+    private double weighed(double[] p) {
+      double sum = 0;
+      for (int k = 0; k < p.length; k++) {
+        sum += scaling[k] * p[k] * (scaling[k] * p[k]);
+      }
+      return sum;
     }
 
     private void tryStep() {
