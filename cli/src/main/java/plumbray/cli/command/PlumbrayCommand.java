@@ -17,7 +17,12 @@ import picocli.CommandLine.Spec;
         "Puts photographs taken along a sight line close to hot or cold ground back into true"
             + " geometry, and says how far each height read from them can be trusted.",
     versionProvider = VersionText.class,
-    subcommands = {SimulateCommand.class},
+    subcommands = {
+      TraceCommand.class,
+      MeasureCommand.class,
+      SimulateCommand.class,
+      SchemaCommand.class
+    },
     synopsisSubcommandLabel = "COMMAND",
     sortOptions = false)
 public final class PlumbrayCommand implements Runnable {

@@ -68,11 +68,6 @@ public final class FitReader {
     return new FitReader(JsonText.parse(file, text)).document();
   }
 
-  /** Whether a file that can be used as a fit says that it is one; a sight file does not. */
-  static boolean isFit(Node root) {
-    return root.isObject() && root.child("format").json().asText().equals(FORMAT);
-  }
-
   static FitDocument read(Node root) {
     return new FitReader(root).document();
   }

@@ -1,0 +1,46 @@
+package plumbray.cli.command;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.OptionalDouble;
+import plumbray.cli.document.FitDocument;
+import plumbray.cli.document.Numbers;
+import plumbray.imaging.fit.SightLine;
+import plumbray.raymodel.profile.ProfileFamily;
+
+/** Says results shortly, a line each. */
+final class ResultLines {
+  private ResultLines() {}
+
+  /** What can be seen at one distance. */
+  static String sightLine(SightLine line) {
+    List<String> parts = new ArrayList<>();
+    add(parts, "lowest visible height %s m", line.lowestVisibleHeightM(), 3);
+    add(parts, "vanishing line at row %s", line.vanishingLineRowPx(), 1);
+    parts.add("at most " + line.imagesMost() + (line.imagesMost() == 1 ? " image" : " images"));
+    parts.add(
+        "refraction coefficient "
+            + Numbers.fixed(line.localRefractionCoefficient(), 2)
+            + " at the camera");
+    return "at " + Numbers.shortest(line.distanceM()) + " m: " + String.join(", ", parts);
+  }
+
+  private static void add(List<String> parts, String text, OptionalDouble value, int decimals) {
+    value.ifPresent(number -> parts.add(text.formatted(Numbers.fixed(number, decimals))));
+  }
+
+  /** The verdict on one photo, or on the points of a sight file. */
+  static String verdict(String name, FitDocument fit) {
+    if (fit.error().isPresent()) {
+      return name + ": failed: " + fit.error().get();
+    }
+    String family = fit.sight().profile().family().map(ProfileFamily::key).orElse("");
+    return "%s: %s, %s, rms %s px over %d rows"
+        .formatted(
+            name,
+            fit.status().key(),
+            family,
+            Numbers.fixed(fit.residuals().rmsPx(), 3),
+            fit.residuals().count());
+  }
+}

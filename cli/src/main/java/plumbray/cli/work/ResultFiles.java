@@ -1,0 +1,64 @@
+package plumbray.cli.work;
+
+import java.nio.file.Path;
+import java.util.List;
+import java.util.Locale;
+import java.util.Objects;
+
+/**
+ * Where the results of one photo go.
+ *
+ * @param folder the output folder
+ * @param name the name that all of them bear: the photo's, without its ending
+ */
+public record ResultFiles(Path folder, String name) {
+  private static final List<String> ENDINGS = List.of("jpg", "jpeg", "png", "tif", "tiff");
+
+  /** Checks that both are there. */
+  public ResultFiles {
+    Objects.requireNonNull(folder, "folder");
+    Objects.requireNonNull(name, "name");
+  }
+
+  /** What the fit found. */
+  public Path fit() {
+    return of(".fit.json");
+  }
+
+  /** The redrawn photo. */
+  public Path rectified(String ending) {
+    return of(".rectified." + ending);
+  }
+
+  /** The redrawn photo under every ending it can have. */
+  List<Path> rectifiedOfAnyEnding() {
+    return ENDINGS.stream()
+        .flatMap(ending -> List.of(ending, ending.toUpperCase(Locale.ROOT)).stream())
+        .map(this::rectified)
+        .toList();
+  }
+
+  /** What the pixels of the redrawn photo rest on. */
+  public Path mask() {
+    return of(".mask.png");
+  }
+
+  /** The traced rays. */
+  public Path mapping() {
+    return of(".mapping.csv");
+  }
+
+  /** Temperature against height. */
+  public Path temperatures() {
+    return of(".temperature.csv");
+  }
+
+  /** The page to read. */
+  public Path page() {
+    return of(".html");
+  }
+
+  private Path of(String ending) {
+    return folder.resolve(name + ending);
+  }
+}
