@@ -45,7 +45,16 @@ public final class PhotoBuilder {
     return this;
   }
 
-  /** Sets a row from as-encoded sample values, limited to the range and rounded to nearest. */
+  /** One sample as drawn so far. */
+  public int sample(int x, int y, int channel) {
+    int index = (y * shape.widthPx() + x) * shape.channels() + channel;
+    return bytes != null ? bytes[index] & 0xff : shorts[index] & 0xffff;
+  }
+
+  /**
+   * Sets a row from as-encoded sample values, limited to the range and rounded to nearest; the
+   * array is used up.
+   */
   public PhotoBuilder row(int y, float[] values) {
     int start = y * shape.rowSamples();
     int count = shape.rowSamples();

@@ -1,0 +1,165 @@
+package plumbray.imaging.rectify;
+
+import java.util.ArrayList;
+import java.util.HashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import plumbray.calibration.camera.Camera;
+import plumbray.calibration.camera.Projection;
+import plumbray.calibration.sight.Region;
+import plumbray.raymodel.mapping.RayFan;
+import plumbray.raymodel.path.SightPath;
+import plumbray.raymodel.ray.StraightRay;
+
+/**
+ * From a pixel of the redrawn picture to the place in the photo that shows what belongs there.
+ *
+ * <p>Polygons are drawn on the photo. The first region whose things, as seen in the photo, lie
+ * inside its polygon is the one shown; where a region's thing is not seen in the photo, the output
+ * pixel itself must lie inside. A pixel that no region claims goes with the last one.
+ */
+public final class RectifyMap {
+  private final Camera camera;
+  private final List<MappedRegion> regions;
+
+  /** A region with its table; without outline it holds all pixels. */
+  record MappedRegion(Optional<Outline> outline, ElevationTable table) {
+    boolean holds(double u, double v) {
+      return outline.isEmpty() || outline.get().holds(u, v);
+    }
+  }
+
+  RectifyMap(Camera camera, List<MappedRegion> regions) {
+    this.camera = camera;
+    this.regions = List.copyOf(regions);
+  }
+
+  /**
+   * The map of one sight.
+   *
+   * @param camera camera of both the photo and the redrawn picture
+   * @param straight the rays that the redrawn picture is to have
+   * @param path what lies under the sight
+   * @param fan rays over the picture's rows, to the distances of all regions
+   * @param regions what lies where in the photo, at least one
+   */
+  public static RectifyMap of(
+      Camera camera, StraightRay straight, SightPath path, RayFan fan, List<Region> regions) {
+    if (regions.isEmpty()) {
+      throw new IllegalArgumentException(
+          "regions is empty, must have at least one region (what lies where); add one");
+    }
+    ElevationSpan span = ElevationSpan.of(camera);
+    Map<Double, ElevationTable> tables = new HashMap<>();
+    List<MappedRegion> mapped = new ArrayList<>();
+    for (Region region : regions) {
+      ElevationTable table =
+          tables.computeIfAbsent(
+              region.distanceM(),
+              distanceM ->
+                  region.ground()
+                      ? groundTable(straight, path, fan, span)
+                      : table(straight, fan, distanceM, span));
+      mapped.add(new MappedRegion(region.polygonPx().map(Outline::new), table));
+    }
+    return new RectifyMap(camera, mapped);
+  }
+
+  private static ElevationTable table(
+      StraightRay straight, RayFan fan, double distanceM, ElevationSpan span) {
+    List<ApparentBranch> branches =
+        fan.mapping(distanceM).branches().stream().map(ApparentBranch::of).toList();
+    return MappingTable.of(branches, straight, distanceM, span);
+  }
+
+  private static ElevationTable groundTable(
+      StraightRay straight, SightPath path, RayFan fan, ElevationSpan span) {
+    double reachM = fan.mappings().get(fan.mappings().size() - 1).distanceM();
+    return GroundTable.of(straight, path, fan.ground(), reachM, span);
+  }
+
+  int widthPx() {
+    return camera.widthPx();
+  }
+
+  int heightPx() {
+    return camera.heightPx();
+  }
+
+  /** A reader of this map for one thread. */
+  Cursor cursor() {
+    return new Cursor();
+  }
+
+  /** Looks pixels up; keeps its working space, so each thread needs its own. */
+  final class Cursor {
+    private final Projection projection = camera.projection();
+    private final ElevationTable.Answer answer = new ElevationTable.Answer();
+    private final double[] direction = new double[2];
+    private final double[] source = new double[2];
+    private int code;
+
+    /** Looks an output pixel up; the answers are then asked for. */
+    void look(double u, double v) {
+      projection.direction(u, v, direction);
+      double halfSine = Math.sin(0.5 * direction[1]);
+      double fartherShare = 2 * halfSine * halfSine;
+      for (MappedRegion region : regions) {
+        region.table().look(direction[0], fartherShare, answer);
+        if (answer.code != ElevationTable.NOT_HERE && claims(region, u, v)) {
+          return;
+        }
+      }
+      code = answer.code == ElevationTable.NOT_HERE ? MaskPlane.NEVER_VISIBLE : code;
+    }
+
+    private boolean claims(MappedRegion region, double u, double v) {
+      code = answer.code;
+      if (code != MaskPlane.UPRIGHT && code != MaskPlane.INVERTED) {
+        return region.holds(u, v);
+      }
+      projection.pixel(answer.apparentRad, direction[1], source);
+      if (!inPhoto(source[0], camera.widthPx()) || !inPhoto(source[1], camera.heightPx())) {
+        code = MaskPlane.OUTSIDE;
+        return region.holds(u, v);
+      }
+      return region.holds(
+          withinCentres(source[0], camera.widthPx()), withinCentres(source[1], camera.heightPx()));
+    }
+
+    /** A photo reaches half a pixel beyond the centres of its outer pixels; NaN is outside. */
+    private static boolean inPhoto(double at, int size) {
+      return at >= -0.5 && at <= size - 0.5;
+    }
+
+    private static double withinCentres(double at, int size) {
+      return Math.max(0, Math.min(size - 1, at));
+    }
+
+    /** Mask code of the pixel. */
+    int code() {
+      return code;
+    }
+
+    /** Whether the photo shows what belongs there. */
+    boolean isShown() {
+      return code == MaskPlane.UPRIGHT || code == MaskPlane.INVERTED;
+    }
+
+    /** Column in the photo, px, where shown. */
+    double sourceU() {
+      return source[0];
+    }
+
+    /** Row in the photo, px, where shown. */
+    double sourceV() {
+      return source[1];
+    }
+
+    /** Rows of the photo that the pixel is made of, where shown. */
+    double stretch() {
+      return answer.stretch;
+    }
+  }
+}
