@@ -1,0 +1,2 @@
+/** Results of ours beside those of independent implementations. */
+package plumbray.crosscheck;
