@@ -1,0 +1,111 @@
+package plumbray.imaging.fit;
+
+import java.util.List;
+import java.util.TreeSet;
+import plumbray.calibration.camera.Camera;
+import plumbray.calibration.camera.RowSensitivity;
+import plumbray.calibration.sight.Reference;
+import plumbray.calibration.sight.Sight;
+import plumbray.imaging.reading.TracedSight;
+import plumbray.raymodel.mapping.Branch;
+import plumbray.raymodel.mapping.FanRequest;
+import plumbray.raymodel.mapping.RayFan;
+import plumbray.raymodel.mapping.SightMapping;
+import plumbray.raymodel.ray.TabulatedMedium;
+
+/** A sight traced to its references' distances, for one evaluation of a fit. */
+final class FitTrace implements TracedSight {
+
+  /** Near the vanishing line the row of an edge runs away; its derivative is cut off here. */
+  private static final double LEAST_SLOPE_SHARE = 1e-3;
+
+  private final Sight sight;
+  private final Camera camera;
+  private final EstimateLayout layout;
+  private final RayFan fan;
+
+  private FitTrace(Sight sight, Camera camera, EstimateLayout layout, RayFan fan) {
+    this.sight = sight;
+    this.camera = camera;
+    this.layout = layout;
+    this.fan = fan;
+  }
+
+  /**
+   * Traces.
+   *
+   * @param sight the sight at the present values
+   * @param estimated names of the estimated quantities
+   * @param range lowest and highest apparent elevation that matter, rad
+   * @param tolerancePx how good the mappings must be, px
+   */
+  static FitTrace of(Sight sight, List<String> estimated, double[] range, double tolerancePx) {
+    Camera camera = sight.camera().camera();
+    TreeSet<Double> distances = new TreeSet<>();
+    sight.references().stream().map(Reference::distanceM).forEach(distances::add);
+    FanRequest request =
+        new FanRequest(
+            sight.camera().heightM().value(),
+            range[0],
+            range[1],
+            distances.stream().mapToDouble(Double::doubleValue).toArray(),
+            tolerancePx * camera.radPerPx(),
+            !estimated.isEmpty());
+    RayFan fan =
+        RayFan.trace(
+            new TabulatedMedium(SightOptics.column(sight, estimated)),
+            sight.path().path(),
+            request);
+    return new FitTrace(sight, camera, EstimateLayout.of(sight, estimated), fan);
+  }
+
+  Sight sight() {
+    return sight;
+  }
+
+  @Override
+  public Camera camera() {
+    return camera;
+  }
+
+  @Override
+  public SightMapping mapping(double distanceM) {
+    return fan.mapping(distanceM);
+  }
+
+  @Override
+  public double footElevationM(int reference) {
+    Reference r = sight.references().get(reference);
+    return sight.path().ground().elevationM(r.distanceM()) + r.footM().value();
+  }
+
+  @Override
+  public int estimateCount() {
+    return layout.size();
+  }
+
+  @Override
+  public void rowDerivatives(
+      int reference, Branch branch, double elevationRad, double azimuthRad, double[] out) {
+    RowSensitivity row = camera.rowSensitivity(elevationRad, azimuthRad);
+    double distance = sight.references().get(reference).distanceM();
+    double slope = branch.slopeMPerRad(elevationRad);
+    double least = LEAST_SLOPE_SHARE * distance;
+    double perM = row.dvdElevation() / Math.copySign(Math.max(least, Math.abs(slope)), slope);
+    String foot = "references[" + reference + "].footM";
+    for (int i = 0; i < layout.size(); i++) {
+      int index = layout.sensitivityIndex(i);
+      if (index >= 0) {
+        out[i] = -perM * branch.sensitivity(elevationRad, index);
+      } else {
+        out[i] =
+            switch (layout.name(i)) {
+              case "camera.pitchRad" -> row.dvdPitch();
+              case "camera.rollRad" -> row.dvdRoll();
+              case "camera.focalLengthM" -> row.dvdFocalPx() / sight.camera().pixelPitchM();
+              default -> layout.name(i).equals(foot) ? perM : 0.0;
+            };
+      }
+    }
+  }
+}

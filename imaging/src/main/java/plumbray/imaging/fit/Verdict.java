@@ -1,0 +1,194 @@
+package plumbray.imaging.fit;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import plumbray.calibration.estimate.Degeneracy;
+import plumbray.calibration.estimate.Solution;
+import plumbray.calibration.sight.Sight;
+import plumbray.imaging.reading.ReferenceObservation;
+import plumbray.imaging.reading.StaffObservation;
+import plumbray.imaging.reading.StripLook;
+
+/** Judges an adjustment: whether it is one at all, and what speaks against it. */
+final class Verdict {
+
+  /** Unexplained brightness of a staff, as a part of its contrast, that no staff leaves. */
+  private static final double NO_STAFF = 0.3;
+
+  private static final int LEAST_EDGES = 4;
+  private static final double MOST_SHIMMER_PX = 1.5;
+  private static final double MISFIT = 3.0;
+  private static final double DRIFT_SHARE = 0.3;
+  private static final double DRIFT_PX = 0.25;
+
+  private final Sight sight;
+  private final FamilyFit.Adjusted adjusted;
+  private final List<Warning> warnings = new ArrayList<>();
+  private boolean doubtful;
+  private String error;
+
+  Verdict(Sight sight, FamilyFit.Adjusted adjusted) {
+    this.sight = sight;
+    this.adjusted = adjusted;
+    Solution solution = adjusted.solution();
+    if (!Double.isFinite(solution.cost())) {
+      error = "no profile of this family puts the references where the photo shows them";
+      return;
+    }
+    staffs();
+    if (error == null) {
+      shimmer();
+      misfit();
+      solver(solution);
+    }
+  }
+
+  Optional<String> error() {
+    return Optional.ofNullable(error);
+  }
+
+  List<Warning> warnings() {
+    return List.copyOf(warnings);
+  }
+
+  FitStatus status() {
+    if (error != null) {
+      return FitStatus.FAILED;
+    }
+    return doubtful ? FitStatus.DOUBTFUL : FitStatus.GOOD;
+  }
+
+  private void doubt(String code, String message, Object... values) {
+    doubtful = true;
+    note(code, message, values);
+  }
+
+  private void note(String code, String message, Object... values) {
+    warnings.add(new Warning(code, String.format(Locale.ROOT, message, values)));
+  }
+
+  private void staffs() {
+    double[] values = adjusted.solution().values();
+    FitTrace trace = adjusted.observation().trace(values, false);
+    List<ReferenceObservation> references = adjusted.observation().references();
+    for (int r = 0; r < references.size() && error == null; r++) {
+      if (references.get(r) instanceof StaffObservation staff) {
+        staff(staff, trace, adjusted.observation().own(values, r));
+      }
+    }
+  }
+
+  private void staff(StaffObservation staff, FitTrace trace, double[] own) {
+    String name = sight.references().get(staff.scene().reference()).name();
+    if (staff.edges().size() < LEAST_EDGES) {
+      error =
+          String.format(
+              Locale.ROOT,
+              "reference \"%s\": %d edges of the staff lie in its imageBox, %d are needed; check"
+                  + " the imageBox, the staff's edges and its distance",
+              name,
+              staff.edges().size(),
+              LEAST_EDGES);
+      return;
+    }
+    StripLook look = staff.look(trace, own);
+    double sum = 0.0;
+    for (int i = 0; i < look.used().length; i++) {
+      double miss = staff.scene().strip().brightness(look.used()[i]) - look.predicted()[i];
+      sum += miss * miss;
+    }
+    double rms = Math.sqrt(sum / look.used().length);
+    if (!(rms < NO_STAFF * look.contrast())) {
+      error =
+          String.format(
+              Locale.ROOT,
+              "reference \"%s\": no staff with these edges is seen in its imageBox (bars explain"
+                  + " too little of the brightness); check that the imageBox lies on the bars, and"
+                  + " the staff's edges and distance",
+              name);
+    }
+  }
+
+  private void shimmer() {
+    boolean anyStaff =
+        adjusted.observation().references().stream().anyMatch(StaffObservation.class::isInstance);
+    double sigma = adjusted.found().shimmer().sigmaPx();
+    if (anyStaff && sigma > MOST_SHIMMER_PX) {
+      doubt(
+          "strong-shimmer",
+          "Edges stray by %.2f px (1 sigma) from where the fit puts them: strong shimmer, or a"
+              + " profile that this family cannot follow.",
+          sigma);
+    }
+    for (ReferenceObservation reference : adjusted.observation().references()) {
+      if (reference instanceof StaffObservation staff) {
+        double span = staff.scene().strip().rows();
+        double length = adjusted.found().shimmer().lengthPx();
+        if (sigma > DRIFT_PX && length > DRIFT_SHARE * span) {
+          doubt(
+              "slow-residuals",
+              "Edges stray by %.2f px in slow waves along the staff (over some %.0f rows): the"
+                  + " profile may not be of this family.",
+              sigma,
+              length);
+          return;
+        }
+      }
+    }
+  }
+
+  private void misfit() {
+    int points = 0;
+    double chi = 0.0;
+    double[] residuals = adjusted.solution().residuals();
+    int row = 0;
+    for (ReferenceObservation reference : adjusted.observation().references()) {
+      if (!(reference instanceof StaffObservation)) {
+        for (int i = 0; i < reference.count(); i++) {
+          chi += residuals[row + i] * residuals[row + i];
+          points++;
+        }
+      }
+      row += reference.count();
+    }
+    if (points > 0 && chi > MISFIT * points) {
+      doubt(
+          "points-misfit",
+          "Points lie %.1f times as far from the fit as their stated standard deviations: wrong"
+              + " points, or a profile that this family cannot follow.",
+          Math.sqrt(chi / points));
+    }
+  }
+
+  private void solver(Solution solution) {
+    if (!solution.converged()) {
+      doubt("not-converged", "The adjustment had not come to rest when it was stopped.");
+    }
+    for (String name : solution.atBound()) {
+      if (!name.contains("shimmerPx")) {
+        doubt(
+            "at-bound",
+            "%s ended at its bound and was held there: the data ask for more than is allowed, or"
+                + " do not determine it.",
+            PlainNames.of(name));
+      }
+    }
+    for (Degeneracy degeneracy : solution.degeneracies()) {
+      List<String> names =
+          degeneracy.names().stream()
+              .filter(n -> !n.contains("shimmerPx") && !n.contains("spreadPx"))
+              .map(PlainNames::of)
+              .toList();
+      if (!names.isEmpty()) {
+        note(
+            "undetermined",
+            "Nearly undetermined together: %s. Their sigmas say so; heights between the marks of a"
+                + " reference do not suffer. A reference at a second distance, a taller staff or a"
+                + " measured pitch would tell them apart.",
+            String.join(", ", names));
+      }
+    }
+  }
+}

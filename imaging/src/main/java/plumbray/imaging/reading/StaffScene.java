@@ -1,0 +1,146 @@
+package plumbray.imaging.reading;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.stream.IntStream;
+import plumbray.calibration.camera.Camera;
+import plumbray.calibration.sight.Reference;
+import plumbray.calibration.sight.StaffTarget;
+import plumbray.raymodel.mapping.Branch;
+
+/** A staff and the strip of the photo in which it is seen. */
+public final class StaffScene {
+
+  /** Share of a strip's row that must be bars, or lie this near to one, for the row to count. */
+  private static final double BORDER_PX = 6.0;
+
+  private final String name;
+  private final StaffBars bars;
+  private final StaffStrip strip;
+  private final StaffPlace place;
+
+  /** A staff, {@code index} being its place among the sight's references. */
+  public StaffScene(int index, Reference reference, StaffTarget target, StaffStrip strip) {
+    name = "references[" + index + "]";
+    bars = new StaffBars(target);
+    this.strip = strip;
+    place = new StaffPlace(index, reference.distanceM());
+  }
+
+  String name() {
+    return name;
+  }
+
+  StaffBars bars() {
+    return bars;
+  }
+
+  /** The strip. */
+  public StaffStrip strip() {
+    return strip;
+  }
+
+  /** Indices of all of the strip's values. */
+  public int[] allRows() {
+    return IntStream.range(0, strip.rows()).toArray();
+  }
+
+  /** Height of a bar of average size, m. */
+  public double meanBarM() {
+    int last = bars.edgeCount() - 1;
+    return (bars.edgeM(last) - bars.edgeM(0)) / last;
+  }
+
+  StaffPlace place() {
+    return place;
+  }
+
+  /** Index of the reference. */
+  public int reference() {
+    return place.reference();
+  }
+
+  double azimuthRad(Camera camera) {
+    double[] direction = new double[2];
+    camera.direction(strip.columnPx(), strip.firstRow() + 0.5 * (strip.rows() - 1), direction);
+    return direction[1];
+  }
+
+  /** The edges that a sight shows within the strip, by rising row. */
+  public List<EdgeImage> edges(TracedSight sight) {
+    List<EdgeImage> seen = new ArrayList<>();
+    for (StripEvent event : StripEvents.of(bars, strip, sight, place, new int[1])) {
+      if (event.branch().isPresent()
+          && event.row() >= strip.firstRow()
+          && event.row() <= strip.firstRow() + strip.rows() - 1) {
+        Branch branch = event.branch().get();
+        seen.add(
+            new EdgeImage(
+                event.edge(),
+                bars.edgeM(event.edge()),
+                event.image(),
+                branch.sense(),
+                event.row(),
+                Math.abs(branch.slopeMPerRad(event.apparentRad())) / place.distanceM()));
+      }
+    }
+    return seen;
+  }
+
+  /** Indices of the strip's values that show bars, or lie next to some, through a sight. */
+  public int[] rowsInUse(TracedSight sight) {
+    int[] top = new int[1];
+    List<StripEvent> events = StripEvents.of(bars, strip, sight, place, top);
+    boolean[] use = new boolean[strip.rows()];
+    int what = top[0];
+    double from = strip.firstRow();
+    for (StripEvent event : events) {
+      mark(use, what, from, event.row());
+      what = event.below();
+      from = event.row();
+    }
+    mark(use, what, from, strip.firstRow() + strip.rows());
+    int[] indices = new int[use.length];
+    int n = 0;
+    for (int i = 0; i < use.length; i++) {
+      if (use[i]) {
+        indices[n++] = i;
+      }
+    }
+    return Arrays.copyOf(indices, n);
+  }
+
+  private void mark(boolean[] use, int what, double from, double to) {
+    if (bars.isBar(what)) {
+      int first = (int) Math.max(0, Math.ceil(from - BORDER_PX - strip.firstRow()));
+      int last = (int) Math.min(use.length - 1, Math.floor(to + BORDER_PX - strip.firstRow()));
+      for (int i = first; i <= last; i++) {
+        use[i] = true;
+      }
+    }
+  }
+
+  /**
+   * The pattern that a sight shows: for each row of the strip the share of bright less dark bars.
+   */
+  public BarShares shares(TracedSight sight, int rowsAround) {
+    int[] top = new int[1];
+    StaffStrip wide = strip.widened(rowsAround);
+    List<StripEvent> events = StripEvents.of(bars, wide, sight, place, top);
+    BarShares shares = new BarShares(wide.firstRow(), wide.rows());
+    int what = top[0];
+    double from = wide.firstRow() - 0.5;
+    for (StripEvent event : events) {
+      shares.add(from, event.row(), bars.isBar(what), bars.isBar(what) && bars.isDark(what));
+      what = event.below();
+      from = event.row();
+    }
+    shares.add(
+        from,
+        wide.firstRow() + wide.rows() - 0.5,
+        bars.isBar(what),
+        bars.isBar(what) && bars.isDark(what));
+    return shares;
+  }
+}
