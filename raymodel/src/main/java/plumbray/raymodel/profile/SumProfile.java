@@ -52,6 +52,7 @@ final class SumProfile implements TemperatureProfile {
     for (ProfileTerm term : terms) {
       scale = Math.min(scale, term.scaleM(z));
     }
-    return scale;
+    // below the ground the line is straight: only the way back up to it counts
+    return heightM < 0.0 ? scale - 0.5 * heightM : scale;
   }
 }
