@@ -19,6 +19,7 @@ import picocli.CommandLine.Spec;
     versionProvider = VersionText.class,
     subcommands = {
       TraceCommand.class,
+      RectifyCommand.class,
       MeasureCommand.class,
       SimulateCommand.class,
       SchemaCommand.class

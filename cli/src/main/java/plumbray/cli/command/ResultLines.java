@@ -10,6 +10,9 @@ import plumbray.raymodel.profile.ProfileFamily;
 
 /** Says results shortly, a line each. */
 final class ResultLines {
+  private static final int DIGITS = 6;
+  private static final int SIGMA_DIGITS = 2;
+
   private ResultLines() {}
 
   /** What can be seen at one distance. */
@@ -27,6 +30,20 @@ final class ResultLines {
 
   private static void add(List<String> parts, String text, OptionalDouble value, int decimals) {
     value.ifPresent(number -> parts.add(text.formatted(Numbers.fixed(number, decimals))));
+  }
+
+  /** What was estimated, a line each, by the sight file's names and units. */
+  static List<String> estimates(FitDocument fit) {
+    List<String> lines = new ArrayList<>();
+    for (FitDocument.NamedEstimate estimate : fit.namedEstimates()) {
+      lines.add(
+          "  %s = %s +- %s"
+              .formatted(
+                  estimate.name(),
+                  Numbers.significant(estimate.value(), DIGITS),
+                  Numbers.significant(estimate.sigma(), SIGMA_DIGITS)));
+    }
+    return lines;
   }
 
   /** The verdict on one photo, or on the points of a sight file. */

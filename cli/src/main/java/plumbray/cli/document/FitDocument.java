@@ -1,5 +1,6 @@
 package plumbray.cli.document;
 
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Objects;
 import java.util.Optional;
@@ -29,6 +30,7 @@ import plumbray.imaging.fit.Warning;
  * @param temperatures temperature against height; empty where the fit failed
  * @param sightLines what can be seen at each distance in use; empty where the fit failed
  * @param inputs what the fit was made from
+ * @param outputs the files that were written with it
  * @param program version of the program that made it
  */
 public record FitDocument(
@@ -43,6 +45,7 @@ public record FitDocument(
     List<TemperatureRow> temperatures,
     List<SightLine> sightLines,
     List<Digest> inputs,
+    List<Digest> outputs,
     String program) {
 
   /** Copies the lists. */
@@ -55,6 +58,7 @@ public record FitDocument(
     temperatures = List.copyOf(temperatures);
     sightLines = List.copyOf(sightLines);
     inputs = List.copyOf(inputs);
+    outputs = List.copyOf(outputs);
   }
 
   /**
@@ -99,6 +103,52 @@ public record FitDocument(
         temperatures,
         sightLines,
         inputs,
+        List.of(),
         ProgramVersion.name());
+  }
+
+  /**
+   * The same with the files that were written with it.
+   *
+   * @param written the files
+   */
+  public FitDocument withOutputs(List<Digest> written) {
+    return new FitDocument(
+        status,
+        error,
+        warnings,
+        sight,
+        estimates,
+        residuals,
+        jitterPx,
+        alternatives,
+        temperatures,
+        sightLines,
+        inputs,
+        written,
+        program);
+  }
+
+  /**
+   * One estimate by the sight file's name and in its unit.
+   *
+   * @param name the keys on the way to it, with points between
+   * @param value the estimate
+   * @param sigma its standard deviation
+   */
+  public record NamedEstimate(String name, double value, double sigma) {}
+
+  /** What was estimated, by the sight file's names and units. */
+  public List<NamedEstimate> namedEstimates() {
+    List<NamedEstimate> named = new ArrayList<>();
+    for (int i = 0; i < estimates.names().size(); i++) {
+      EstimateName name = EstimateName.ofInside(estimates.names().get(i));
+      named.add(
+          new NamedEstimate(
+              name.name(),
+              name.unit().fromSi(estimates.values()[i]),
+              name.unit().spanFromSi(estimates.sigmas()[i])));
+    }
+    return named;
   }
 }

@@ -36,6 +36,7 @@ public final class FitReader {
           "sightLines",
           "sight",
           "inputs",
+          "outputs",
           "program");
   private static final Limits COUNT = new Limits("a count", Unit.NONE, 0, Integer.MAX_VALUE);
   private static final Limits SPARE =
@@ -88,7 +89,8 @@ public final class FitReader {
         rows("alternatives", FitReader::alternative),
         rows("temperatureProfile", FitReader::temperature),
         rows("sightLines", FitReader::sightLine),
-        rows("inputs", FitReader::input),
+        rows("inputs", FitReader::digest),
+        rows("outputs", FitReader::digest),
         root.text("program", "version of the program"));
   }
 
@@ -150,9 +152,8 @@ public final class FitReader {
         node.orNaN("localRefractionCoefficient"));
   }
 
-  private static Digest input(Node node) {
-    return new Digest(
-        node.text("name", "name of an input"), node.text("sha256", "digest of an input"));
+  private static Digest digest(Node node) {
+    return new Digest(node.text("name", "name of a file"), node.text("sha256", "digest of a file"));
   }
 
   /** Reads the estimates and puts their covariance together again. */

@@ -2,6 +2,7 @@ package plumbray.cli.document;
 
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.util.List;
 import java.util.Map;
 import plumbray.calibration.quantity.Quantity;
 import plumbray.calibration.sight.CameraSetup;
@@ -53,10 +54,16 @@ public final class FitWriter {
     ArrayNode sightLines = root.putArray("sightLines");
     fit.sightLines().forEach(line -> sightLines.add(sightLine(line)));
     root.set("sight", SightWriter.write(fit.sight()));
-    ArrayNode inputs = root.putArray("inputs");
-    fit.inputs()
-        .forEach(in -> inputs.addObject().put("name", in.name()).put("sha256", in.sha256()));
+    root.set("inputs", digests(fit.inputs()));
+    root.set("outputs", digests(fit.outputs()));
     return root.put("program", fit.program());
+  }
+
+  private static ArrayNode digests(List<Digest> digests) {
+    ArrayNode array = Json.array();
+    digests.forEach(
+        digest -> array.addObject().put("name", digest.name()).put("sha256", digest.sha256()));
+    return array;
   }
 
   private static ObjectNode warning(Warning warning) {
@@ -98,11 +105,10 @@ public final class FitWriter {
 
   private ArrayNode estimates() {
     ArrayNode array = Json.array();
-    for (int i = 0; i < estimates.names().size(); i++) {
-      EstimateName name = EstimateName.ofInside(estimates.names().get(i));
-      ObjectNode entry = array.addObject().put("name", name.name());
-      entry.set("value", Json.number(name.unit().fromSi(estimates.values()[i])));
-      entry.set("sigma", Json.number(name.unit().spanFromSi(estimates.sigmas()[i])));
+    for (FitDocument.NamedEstimate estimate : fit.namedEstimates()) {
+      ObjectNode entry = array.addObject().put("name", estimate.name());
+      entry.set("value", Json.number(estimate.value()));
+      entry.set("sigma", Json.number(estimate.sigma()));
     }
     return array;
   }

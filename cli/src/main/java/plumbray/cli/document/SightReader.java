@@ -47,6 +47,16 @@ public final class SightReader {
   }
 
   /**
+   * The bytes of a sight file, for {@link #read(String, byte[])} and for their digest.
+   *
+   * @param path the file
+   * @throws InputException when it cannot be read
+   */
+  public static byte[] bytes(Path path) {
+    return JsonText.bytes(path);
+  }
+
+  /**
    * Reads the text of a sight file.
    *
    * @param file the name that messages give

@@ -1,0 +1,51 @@
+package plumbray.cli.batch;
+
+import java.util.Objects;
+import java.util.Optional;
+import plumbray.cli.document.FitDocument;
+import plumbray.imaging.fit.FitStatus;
+
+/**
+ * What came of one photo of a batch.
+ *
+ * @param name the name its results bear
+ * @param photo the photo's file name
+ * @param fit what was found; none where not even that could be written
+ * @param error why the photo failed, in one line
+ * @param kept whether the results were there already
+ */
+public record PhotoOutcome(
+    String name, String photo, Optional<FitDocument> fit, Optional<String> error, boolean kept) {
+  /** Checks that all is there. */
+  public PhotoOutcome {
+    Objects.requireNonNull(name, "name");
+    Objects.requireNonNull(photo, "photo");
+    Objects.requireNonNull(fit, "fit");
+    Objects.requireNonNull(error, "error");
+  }
+
+  static PhotoOutcome of(String name, String photo, FitDocument fit, boolean kept) {
+    return new PhotoOutcome(name, photo, Optional.of(fit), fit.error(), kept);
+  }
+
+  static PhotoOutcome broken(String name, String photo, String error) {
+    return new PhotoOutcome(name, photo, Optional.empty(), Optional.of(error), false);
+  }
+
+  /** Whether the photo failed. */
+  public boolean failed() {
+    return fit.map(FitDocument::status).orElse(FitStatus.FAILED) == FitStatus.FAILED;
+  }
+
+  /** The photo's line in the log: its verdict, and what is to be known about it. */
+  public String line() {
+    StringBuilder line = new StringBuilder(photo).append(": ");
+    line.append(fit.map(FitDocument::status).orElse(FitStatus.FAILED).key());
+    line.append(kept ? " (kept, nothing has changed)" : "");
+    error.ifPresent(text -> line.append(": ").append(text));
+    fit.ifPresent(
+        document ->
+            document.warnings().forEach(warning -> line.append("; ").append(warning.message())));
+    return line.toString();
+  }
+}

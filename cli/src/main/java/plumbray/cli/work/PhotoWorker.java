@@ -1,0 +1,124 @@
+package plumbray.cli.work;
+
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import plumbray.calibration.sight.Sight;
+import plumbray.cli.document.Digest;
+import plumbray.cli.document.FitDocument;
+import plumbray.cli.document.FitWriter;
+import plumbray.cli.document.MappingCsv;
+import plumbray.cli.document.WholeFile;
+import plumbray.imaging.fit.FitResult;
+import plumbray.imaging.fit.FitStatus;
+import plumbray.imaging.fit.SightOptics;
+import plumbray.imaging.measure.MappingRow;
+import plumbray.imaging.photo.Photo;
+import plumbray.imaging.photo.PhotoException;
+import plumbray.imaging.photo.PhotoReader;
+
+/**
+ * Fits one photo and writes all of its results. The fit file comes last and lists the digests of
+ * the others, so that where it is there and agrees with them, all of them are there and whole.
+ */
+public final class PhotoWorker {
+  private final Fitting fitting;
+  private final boolean redraw;
+  private final int threads;
+
+  /**
+   * Creates a worker, which may be used by several threads.
+   *
+   * @param fitting what fits
+   * @param redraw whether to redraw the photo too
+   * @param threads how many threads one photo may use
+   */
+  public PhotoWorker(Fitting fitting, boolean redraw, int threads) {
+    this.fitting = fitting;
+    this.redraw = redraw;
+    this.threads = threads;
+  }
+
+  /**
+   * Fits a photo and writes its results.
+   *
+   * @param task the photo and its sight
+   * @param files where the results go
+   * @return what was found; it says itself when the photo failed
+   * @throws IOException when a file cannot be read or written for no fault of the photo
+   */
+  public FitDocument work(PhotoTask task, ResultFiles files) throws IOException {
+    Files.deleteIfExists(files.fit());
+    List<Digest> inputs = task.inputs();
+    try {
+      return work(task, photo(task), inputs, files);
+    } catch (PhotoException e) {
+      return writeFailed(FitResult.failed(task.sight(), e.getMessage()), inputs, files);
+    }
+  }
+
+  private FitDocument work(
+      PhotoTask task, Optional<Photo> photo, List<Digest> inputs, ResultFiles files)
+      throws IOException {
+    Optional<String> complaint =
+        photo.flatMap(p -> PhotoSize.complaint(task.photo().get(), p, task.sight().camera()));
+    FitResult result =
+        complaint
+            .map(error -> FitResult.failed(task.sight(), error))
+            .orElseGet(() -> fitting.fit(task.sight(), photo));
+    if (result.status() == FitStatus.FAILED) {
+      return writeFailed(result, inputs, files);
+    }
+    return write(new Fitted(task, photo, result), inputs, files);
+  }
+
+  private static Optional<Photo> photo(PhotoTask task) throws PhotoException {
+    if (task.photo().isEmpty()) {
+      return Optional.empty();
+    }
+    return Optional.of(PhotoReader.read(task.photo().get()));
+  }
+
+  private FitDocument writeFailed(FitResult result, List<Digest> inputs, ResultFiles files)
+      throws IOException {
+    for (Path stale : files.rectifiedOfAnyEnding()) {
+      Files.deleteIfExists(stale);
+    }
+    Files.deleteIfExists(files.mask());
+    Files.deleteIfExists(files.mapping());
+    FitDocument fit = FitDocument.failed(result, inputs);
+    WholeFile.write(files.fit(), FitWriter.text(fit));
+    return fit;
+  }
+
+  private record Fitted(PhotoTask task, Optional<Photo> photo, FitResult result) {}
+
+  private FitDocument write(Fitted fitted, List<Digest> inputs, ResultFiles files)
+      throws IOException {
+    Sight sight = fitted.result().sight();
+    List<String> names = fitted.result().estimates().names();
+    SightOptics optics = SightOptics.of(sight, names);
+    List<Path> outputs = new ArrayList<>();
+    WholeFile.write(
+        files.mapping(), MappingCsv.text(MappingRow.of(optics, fitted.result().estimates())));
+    outputs.add(files.mapping());
+    if (redraw && fitted.photo().isPresent()) {
+      Redrawing redrawing = new Redrawing(optics, threads);
+      outputs.addAll(redrawing.write(fitted.photo().get(), fitted.task().photo().get(), files));
+    }
+    FitDocument fit = FitDocument.of(fitted.result(), optics, inputs).withOutputs(digests(outputs));
+    WholeFile.write(files.fit(), FitWriter.text(fit));
+    return fit;
+  }
+
+  private static List<Digest> digests(List<Path> files) throws IOException {
+    List<Digest> digests = new ArrayList<>();
+    for (Path file : files) {
+      digests.add(Digest.of(file));
+    }
+    return digests;
+  }
+}

@@ -1,0 +1,55 @@
+package plumbray.cli.work;
+
+import java.io.IOException;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.Optional;
+import plumbray.cli.document.BatchPhoto;
+import plumbray.cli.document.HeldSight;
+import plumbray.cli.document.InputException;
+import plumbray.cli.document.MappingCsv;
+import plumbray.cli.document.WholeFile;
+import plumbray.imaging.fit.SightOptics;
+import plumbray.imaging.measure.MappingRow;
+import plumbray.imaging.photo.Photo;
+import plumbray.imaging.photo.PhotoException;
+import plumbray.imaging.photo.PhotoReader;
+
+/** Redraws a photo with a sight of which all is known. */
+public final class RectifyWorker {
+  private RectifyWorker() {}
+
+  /**
+   * Writes the redrawn photo, its mask and the mapping.
+   *
+   * @param heldFile a fit, or a sight file whose quantities are all held
+   * @param photoFile the photo
+   * @param folder where the results go
+   * @param threads how many threads to use
+   * @return the redrawn photo's file
+   * @throws IOException when a file cannot be written
+   */
+  public static Path rectify(Path heldFile, Path photoFile, Path folder, int threads)
+      throws IOException {
+    HeldSight held = HeldSight.read(heldFile);
+    SightOptics optics = Tracing.optics(heldFile, held.sight(), held.estimates().names());
+    ResultFiles files = new ResultFiles(folder, BatchPhoto.resultName(photoFile));
+    List<Path> written =
+        new Redrawing(optics, threads).write(photo(held, photoFile), photoFile, files);
+    WholeFile.write(files.mapping(), MappingCsv.text(MappingRow.of(optics, held.estimates())));
+    return written.get(0);
+  }
+
+  private static Photo photo(HeldSight held, Path photoFile) {
+    try {
+      Photo photo = PhotoReader.read(photoFile);
+      Optional<String> complaint = PhotoSize.complaint(photoFile, photo, held.sight().camera());
+      if (complaint.isPresent()) {
+        throw new InputException(complaint.get());
+      }
+      return photo;
+    } catch (PhotoException e) {
+      throw new InputException(e.getMessage(), e);
+    }
+  }
+}

@@ -1,0 +1,104 @@
+package plumbray.cli.work;
+
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
+import plumbray.calibration.sight.AirSetup;
+import plumbray.calibration.sight.Sight;
+import plumbray.imaging.fit.SightOptics;
+import plumbray.imaging.photo.Photo;
+import plumbray.imaging.photo.PhotoBuilder;
+import plumbray.imaging.photo.PhotoException;
+import plumbray.imaging.photo.PhotoFormat;
+import plumbray.imaging.photo.PhotoWriter;
+import plumbray.imaging.rectify.Rectified;
+import plumbray.imaging.rectify.Rectifier;
+import plumbray.imaging.rectify.RectifyMap;
+
+/** Redraws a photo and writes it with its mask. */
+final class Redrawing {
+  private static final int GREEN = 1;
+  private static final int COLOURS = 3;
+
+  private final SightOptics optics;
+  private final int threads;
+
+  Redrawing(SightOptics optics, int threads) {
+    this.optics = optics;
+    this.threads = threads;
+  }
+
+  /**
+   * Redraws a photo.
+   *
+   * @param photo the photo
+   * @param photoFile its file, whose ending the redrawn one keeps where it can
+   * @param files where the results go
+   * @return the files written
+   * @throws IOException when one cannot be written
+   */
+  List<Path> write(Photo photo, Path photoFile, ResultFiles files) throws IOException {
+    Rectified rectified = redrawn(photo);
+    String name = photoFile.getFileName().toString();
+    Path picture = files.rectified(PhotoFormat.extensionFor(name, rectified.picture().shape()));
+    Files.createDirectories(files.folder());
+    try {
+      PhotoWriter.write(rectified.picture(), picture);
+      PhotoWriter.write(rectified.mask().photo(), files.mask());
+    } catch (PhotoException e) {
+      throw new IOException(e.getMessage(), e);
+    }
+    return List.of(picture, files.mask());
+  }
+
+  private Rectified redrawn(Photo photo) {
+    Sight sight = optics.sight();
+    boolean colours =
+        photo.shape().lightChannels() == COLOURS
+            && sight.air().channelWavelengthsM().size() == COLOURS;
+    return colours ? byColours(photo) : Rectifier.rectify(photo, map(optics), threads);
+  }
+
+  /** Each colour through the air as it is for its own wavelength; the mask is that of green. */
+  private Rectified byColours(Photo photo) {
+    Rectified green = Rectifier.rectify(photo, map(GREEN), threads);
+    PhotoBuilder picture = new PhotoBuilder(photo.shape()).metadata(green.picture().metadata());
+    for (int channel = 0; channel < photo.channels(); channel++) {
+      boolean other = channel != GREEN && channel < COLOURS;
+      Photo source =
+          other ? Rectifier.rectify(photo, map(channel), threads).picture() : green.picture();
+      copy(source, picture, channel);
+    }
+    return new Rectified(picture.build(), green.mask());
+  }
+
+  private static void copy(Photo from, PhotoBuilder to, int channel) {
+    for (int y = 0; y < from.height(); y++) {
+      for (int x = 0; x < from.width(); x++) {
+        to.sample(x, y, channel, from.sample(x, y, channel));
+      }
+    }
+  }
+
+  private RectifyMap map(int channel) {
+    Sight sight = optics.sight();
+    AirSetup air = sight.air();
+    AirSetup coloured =
+        new AirSetup(
+            air.temperatureK(),
+            air.atHeightM(),
+            air.pressurePa(),
+            air.relativeHumidity(),
+            air.co2Ppm(),
+            air.channelWavelengthsM().get(channel),
+            air.channelWavelengthsM());
+    return map(SightOptics.of(sight.withAir(coloured)));
+  }
+
+  private static RectifyMap map(SightOptics optics) {
+    Sight sight = optics.sight();
+    return RectifyMap.of(
+        optics.camera(), optics.straight(), sight.path().path(), optics.fan(), sight.regions());
+  }
+}
