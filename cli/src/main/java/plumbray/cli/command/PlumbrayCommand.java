@@ -19,8 +19,10 @@ import picocli.CommandLine.Spec;
     versionProvider = VersionText.class,
     subcommands = {
       TraceCommand.class,
+      FitCommand.class,
       RectifyCommand.class,
       MeasureCommand.class,
+      BatchCommand.class,
       SimulateCommand.class,
       SchemaCommand.class
     },

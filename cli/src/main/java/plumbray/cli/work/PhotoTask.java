@@ -8,6 +8,7 @@ import java.util.List;
 import java.util.Objects;
 import java.util.Optional;
 import plumbray.calibration.sight.Sight;
+import plumbray.calibration.sight.StaffTarget;
 import plumbray.cli.document.BatchPhoto;
 import plumbray.cli.document.Digest;
 import plumbray.cli.document.InputException;
@@ -30,8 +31,13 @@ public record PhotoTask(String name, Optional<Path> photo, Sight sight, List<Dig
     sightInputs = List.copyOf(sightInputs);
   }
 
-  /** The task of one photo of a batch. */
+  /**
+   * The task of one photo of a batch.
+   *
+   * @throws InputException when its sight has no reference
+   */
   public static PhotoTask of(BatchPhoto photo) {
+    checkReferences(photo.sightFile(), photo.sight());
     return new PhotoTask(
         photo.name(), Optional.of(photo.photo()), photo.sight(), photo.sightInputs());
   }
@@ -44,19 +50,30 @@ public record PhotoTask(String name, Optional<Path> photo, Sight sight, List<Dig
   public static PhotoTask of(Path sightFile, Optional<Path> photo) {
     byte[] text = SightReader.bytes(sightFile);
     Sight sight = SightReader.read(sightFile.toString(), text);
-    checkReferences(sightFile.toString(), sight);
+    checkReferences(sightFile, sight);
+    checkPhotoGiven(sightFile, sight, photo);
     Digest digest = Digest.of(sightFile.getFileName().toString(), text);
     String name = BatchPhoto.resultName(photo.orElse(sightFile));
     return new PhotoTask(name, photo, sight, List.of(digest));
   }
 
   /** Tells at once what no fit can make good. */
-  static void checkReferences(String file, Sight sight) {
+  private static void checkReferences(Path file, Sight sight) {
     if (sight.references().isEmpty()) {
       throw new InputException(
           file
               + ": /references is without a reference, must have one at least (things of known"
               + " heights in the picture); add a staff or points");
+    }
+  }
+
+  private static void checkPhotoGiven(Path file, Sight sight, Optional<Path> photo) {
+    for (int i = 0; i < sight.references().size() && photo.isEmpty(); i++) {
+      if (sight.references().get(i).kind() instanceof StaffTarget) {
+        throw new InputException(
+            "%s: /references/%d is a staff, must be points where no photo is given (what the heights are read from); give the photo"
+                .formatted(file, i));
+      }
     }
   }
 
