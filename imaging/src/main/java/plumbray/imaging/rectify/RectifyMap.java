@@ -99,14 +99,17 @@ public final class RectifyMap {
     private final double[] direction = new double[2];
     private final double[] source = new double[2];
     private int code;
+    private long place;
 
     /** Looks an output pixel up; the answers are then asked for. */
     void look(double u, double v) {
       projection.direction(u, v, direction);
       double halfSine = Math.sin(0.5 * direction[1]);
       double fartherShare = 2 * halfSine * halfSine;
-      for (MappedRegion region : regions) {
+      for (int i = 0; i < regions.size(); i++) {
+        MappedRegion region = regions.get(i);
         region.table().look(direction[0], fartherShare, answer);
+        place = (long) i << 32 | answer.piece;
         if (answer.code != ElevationTable.NOT_HERE && claims(region, u, v)) {
           return;
         }
@@ -135,6 +138,16 @@ public final class RectifyMap {
 
     private static double withinCentres(double at, int size) {
       return Math.max(0, Math.min(size - 1, at));
+    }
+
+    /** Region and piece of its table that answered: within one, the map is smooth. */
+    long place() {
+      return place;
+    }
+
+    /** Whether the place alone decides: no outlines cut through the picture. */
+    boolean isSteady() {
+      return regions.stream().allMatch(region -> region.outline().isEmpty());
     }
 
     /** Mask code of the pixel. */
