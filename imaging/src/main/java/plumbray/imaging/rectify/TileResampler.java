@@ -15,6 +15,12 @@ final class TileResampler {
   /** Source rows that the taps of a tile may spread over. */
   private static final int ROWS_MOST = 48;
 
+  /**
+   * Where sources keep their distance to within this, px, all pixels of a tile share the weights of
+   * the middle one: far below the hundredth of a pixel that the map is good for.
+   */
+  private static final double STILL = 2e-4;
+
   private final int channels;
   private final int width;
   private final FloatRows rows;
@@ -68,18 +74,39 @@ final class TileResampler {
 
   private void placeAcross(RowMap map, int from, int to, int leftmost, int columns) {
     clear(across, columns);
+    int last = to - 1;
+    int middle = (from + last) / 2;
+    if (isStill(map.u[from] - from, map.u[middle] - middle, map.u[last] - last)) {
+      kernel.place(map.u[middle], 1);
+      put(across, kernel.first() - middle - leftmost, 0, to - from);
+      return;
+    }
     for (int x = from; x < to; x++) {
       kernel.place(map.u[x], 1);
-      put(across, kernel.first() - x - leftmost, (x - from) * channels);
+      put(across, kernel.first() - x - leftmost, x - from, x - from + 1);
     }
   }
 
   private void placeDown(RowMap map, int from, int to, int firstRow, int rowCount) {
     clear(down, rowCount);
+    int last = to - 1;
+    int middle = (from + last) / 2;
+    boolean still =
+        isStill(map.v[from], map.v[middle], map.v[last])
+            && isStill(map.stretch[from], map.stretch[middle], map.stretch[last]);
+    if (still) {
+      kernel.place(map.v[middle], map.stretch[middle]);
+      put(down, kernel.first() - firstRow, 0, to - from);
+      return;
+    }
     for (int x = from; x < to; x++) {
       kernel.place(map.v[x], map.stretch[x]);
-      put(down, kernel.first() - firstRow, (x - from) * channels);
+      put(down, kernel.first() - firstRow, x - from, x - from + 1);
     }
+  }
+
+  private static boolean isStill(double first, double middle, double last) {
+    return Math.abs(first - middle) < STILL && Math.abs(last - middle) < STILL;
   }
 
   private void clear(float[][] weights, int count) {
@@ -91,13 +118,10 @@ final class TileResampler {
     }
   }
 
-  private void put(float[][] weights, int firstTap, int at) {
+  /** Gives the kernel's weights to the pixels {@code from} to before {@code to} of the tile. */
+  private void put(float[][] weights, int firstTap, int from, int to) {
     for (int i = 0; i < kernel.count(); i++) {
-      float weight = (float) kernel.weight(i);
-      float[] taps = weights[firstTap + i];
-      for (int c = 0; c < channels; c++) {
-        taps[at + c] = weight;
-      }
+      Arrays.fill(weights[firstTap + i], from * channels, to * channels, (float) kernel.weight(i));
     }
   }
 
