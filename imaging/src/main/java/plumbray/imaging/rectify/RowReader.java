@@ -8,6 +8,9 @@ final class RowReader {
   /** Columns handled at once. Fixed places, so that how rows are shared out changes nothing. */
   static final int TILE = 64;
 
+  /** Below this many columns, looking each one up is as quick. */
+  private static final int SHORTEST = 8;
+
   /** How well the parabola must foretell the map at a further column, px. */
   private static final double FORETOLD_PX = 5e-4;
 
@@ -58,10 +61,11 @@ final class RowReader {
   }
 
   private boolean foretold(int first, int last, int y) {
-    if (last - first < 8 || !cursor.isSteady()) {
+    if (last - first < SHORTEST) {
       return false;
     }
     int middle = (first + last) / 2;
+    cursor.startStretch();
     look(nodes[0], first, y);
     look(nodes[1], middle, y);
     look(nodes[2], last, y);
@@ -71,6 +75,9 @@ final class RowReader {
       if (node.place != a.place || node.code != a.code) {
         return false;
       }
+    }
+    if (!cursor.isSteady()) {
+      return false;
     }
     boolean shown = a.code == MaskPlane.UPRIGHT || a.code == MaskPlane.INVERTED;
     return shown ? parabola(first, last, y) : fill(first, last, a.code);
