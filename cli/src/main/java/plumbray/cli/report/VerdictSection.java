@@ -1,0 +1,89 @@
+package plumbray.cli.report;
+
+import java.util.List;
+import plumbray.cli.report.markup.Markup;
+import plumbray.cli.report.markup.NumberText;
+import plumbray.imaging.fit.FitResult;
+import plumbray.imaging.fit.Residuals;
+import plumbray.imaging.fit.SightLine;
+import plumbray.imaging.fit.Warning;
+
+/** Whether the result can be trusted, why not, and the numbers that matter most. */
+final class VerdictSection implements Section {
+
+  private final FitResult result;
+  private final KeyNumbers key;
+  private final List<SightLine> lines;
+
+  VerdictSection(FitResult result, KeyNumbers key, List<SightLine> lines) {
+    this.result = result;
+    this.key = key;
+    this.lines = lines;
+  }
+
+  @Override
+  public void addTo(Markup page) {
+    Verdict verdict = Verdict.of(result.status());
+    page.open("section", "class", "verdict " + verdict.css());
+    page.open("p", "class", "word");
+    page.leaf("span", verdict.sign(), "class", "sign", "aria-hidden", "true");
+    page.text(verdict.word()).close();
+    page.leaf("p", verdict.meaning());
+    result.error().ifPresent(error -> page.leaf("p", error, "class", "error"));
+    if (!result.warnings().isEmpty()) {
+      page.leaf("h2", result.warnings().size() == 1 ? "The reason" : "The reasons");
+      page.open("ul");
+      for (Warning warning : result.warnings()) {
+        page.open("li").text(warning.message() + " ");
+        page.leaf("code", warning.code()).close();
+      }
+      page.close();
+    }
+    page.close();
+    figures(page);
+  }
+
+  private void figures(Markup page) {
+    Residuals residuals = result.residuals();
+    page.open("dl", "class", "figures");
+    if (Double.isFinite(key.groundExcessK())) {
+      String sigma = key.groundExcessSigmaK() > 0.0 ? spread(key.groundExcessSigmaK()) : "";
+      figure(
+          page,
+          key.groundExcessK() >= 0.0 ? "Ground warmer than camera" : "Ground colder than camera",
+          NumberText.within(Math.abs(key.groundExcessK()), key.groundExcessSigmaK())
+              + sigma
+              + " K");
+      figure(page, "Gradient at the camera", NumberText.fixed(key.gradientKPerM(), 3) + " K/m");
+      figure(
+          page, "Refraction coefficient there", NumberText.fixed(key.refractionCoefficient(), 2));
+    }
+    if (Double.isFinite(key.hiddenBelowM())) {
+      figure(
+          page,
+          "Hidden at " + Metres.text(lines.get(lines.size() - 1).distanceM()),
+          "below " + NumberText.fixed(key.hiddenBelowM(), 2) + " m");
+    }
+    if (residuals.count() > 0) {
+      figure(
+          page,
+          "Left unexplained",
+          NumberText.significant(residuals.rmsPx(), 2)
+              + " px rms in "
+              + residuals.count()
+              + " rows");
+    }
+    if (result.jitterPx() > 0.0) {
+      figure(page, "Shimmer", NumberText.significant(result.jitterPx(), 2) + " px");
+    }
+    page.close();
+  }
+
+  private static String spread(double sigma) {
+    return " \u00b1 " + NumberText.sigma(sigma);
+  }
+
+  private static void figure(Markup page, String name, String value) {
+    page.open("div").leaf("dt", name).leaf("dd", value).close();
+  }
+}

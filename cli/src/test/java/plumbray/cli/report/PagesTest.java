@@ -1,0 +1,181 @@
+package plumbray.cli.report;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.assertThatThrownBy;
+
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.regex.Pattern;
+import java.util.stream.IntStream;
+import org.junit.jupiter.api.BeforeAll;
+import org.junit.jupiter.api.Test;
+import org.w3c.dom.Document;
+import org.w3c.dom.Element;
+import org.w3c.dom.NodeList;
+import plumbray.calibration.sight.Sight;
+import plumbray.calibration.sight.SightParameters;
+import plumbray.cli.document.FitDocument;
+import plumbray.cli.report.IndexEntry.PageLink;
+import plumbray.imaging.fit.Estimates;
+import plumbray.imaging.fit.FitResult;
+import plumbray.imaging.fit.FitStatus;
+import plumbray.imaging.fit.SightOptics;
+
+class PagesTest {
+
+  /** What would make a browser fetch or run something; namespaces are names, not addresses. */
+  private static final Pattern REACHES_OUT =
+      Pattern.compile("<script|javascript:|@import|url\\(|(src|href)=\"(?!data:|\\./)");
+
+  private static ReportInput input;
+  private static String photoPage;
+
+  @BeforeAll
+  static void drawOnce() {
+    input = ReportSamples.input(15.0, FitStatus.DOUBTFUL);
+    photoPage = new PhotoReport(input).html();
+  }
+
+  private static String index(String address) {
+    Optional<PageLink> link = Optional.of(new PageLink(address, Thumbnail.ofPage(photoPage)));
+    FitResult good = ReportSamples.result(12.0, FitStatus.GOOD, Optional.empty());
+    List<IndexEntry> entries =
+        List.of(
+            IndexEntry.of("one", link, document(input.result())),
+            IndexEntry.of("two", link, document(good)),
+            IndexEntry.failed("three <3>", Optional.empty(), "no staff & no post"));
+    return new IndexReport("brickfield", entries, ReportSamples.provenance()).html();
+  }
+
+  private static FitDocument document(FitResult result) {
+    return FitDocument.of(result, SightOptics.of(result.sight()), List.of());
+  }
+
+  private static String sightPage() {
+    Sight sight = ReportSamples.asked(15.0);
+    return new SightReport("plan", sight, Estimates.none(), ReportSamples.provenance()).html();
+  }
+
+  private static String failedPage() {
+    FitResult failed = FitResult.failed(input.result().asked(), "no staff was found in the box");
+    ReportInput bare =
+        new ReportInput(
+            "bad.jpg", failed, input.photo(), Optional.empty(), ReportSamples.provenance());
+    return new PhotoReport(bare).html();
+  }
+
+  @Test
+  void everyPageIsWellFormedAndReachesForNothing() {
+    for (String page : List.of(photoPage, index("one.html"), sightPage(), failedPage())) {
+      assertThat(page).startsWith("<!DOCTYPE html>\n<html lang=\"en\"");
+      assertThat(WellFormed.parse(page).getDocumentElement().getTagName()).isEqualTo("html");
+      assertThat(REACHES_OUT.matcher(page).find()).isFalse();
+      assertThat(page).contains("Never aim a long lens at the sun", "licensed surveyor");
+    }
+  }
+
+  @Test
+  void theStyleSheetNeedsNoEscaping() {
+    String style =
+        WellFormed.parse(photoPage).getElementsByTagName("style").item(0).getTextContent();
+    assertThat(style).contains("@media print").doesNotContain("&", "<", ">");
+    assertThat(photoPage).contains(style);
+  }
+
+  @Test
+  void theSameInputGivesTheSamePageInEveryLocale() {
+    Locale before = Locale.getDefault();
+    try {
+      Locale.setDefault(Locale.forLanguageTag("ar-EG"));
+      assertThat(new PhotoReport(input).html()).isEqualTo(photoPage);
+    } finally {
+      Locale.setDefault(before);
+    }
+  }
+
+  @Test
+  void thePhotosPageSaysWhetherToTrustItAndWhy() {
+    assertThat(photoPage)
+        .contains("Doubtful</p>", "Pitch &amp; gradient &lt;together&gt; are hardly determined.")
+        .contains("staff &lt;A&gt; &amp; \"post\"", "Estimated", "\u22120.996");
+  }
+
+  @Test
+  void thePhotosPageShowsPicturesStripsAndPlots() {
+    Document page = WellFormed.parse(photoPage);
+    NodeList images = page.getElementsByTagName("image");
+    assertThat(images.getLength()).isEqualTo(4);
+    for (int i = 0; i < images.getLength(); i++) {
+      assertThat(((Element) images.item(i)).getAttribute("href")).startsWith("data:image/");
+    }
+    List<String> titles = titles(page);
+    assertThat(titles)
+        .contains(
+            "As photographed",
+            "Redrawn",
+            "Brightness along " + ReportSamples.STAFF,
+            "Residuals of " + ReportSamples.STAFF,
+            "Apparent elevation against height at 640 m",
+            "Temperature against height");
+  }
+
+  private static List<String> titles(Document page) {
+    NodeList titles = page.getElementsByTagName("title");
+    return IntStream.range(0, titles.getLength())
+        .mapToObj(i -> titles.item(i).getTextContent())
+        .toList();
+  }
+
+  @Test
+  void inputsAreNamedWithTheirDigests() {
+    assertThat(photoPage)
+        .contains("brickfield.sight.json", "9f86d081884c7d659a2feaa0c55ad015", "Plumbray 0.1.0");
+  }
+
+  @Test
+  void aFailedPhotosPageHasTheErrorAndNoNumbers() {
+    assertThat(failedPage())
+        .contains("Failed</p>", "no staff was found in the box")
+        .doesNotContain("Temperature against height", "How far things seem");
+  }
+
+  @Test
+  void theIndexCountsVerdictsLinksPagesAndShowsThumbnails() {
+    String page = index("a photo #1 & more.html");
+    assertThat(page)
+        .contains("<strong>1</strong>", "no staff &amp; no post", "three &lt;3&gt;")
+        .contains("href=\"./a%20photo%20%231%20&amp;%20more.html\"")
+        .contains("src=\"data:image/jpeg;base64,");
+    assertThat(titles(WellFormed.parse(page))).contains("Hidden below (m) over the photos");
+  }
+
+  @Test
+  void theSmallPictureComesBackFromThePhotosPage() {
+    assertThat(Thumbnail.ofPage(photoPage)).contains(Thumbnail.of(input.photo().orElseThrow()));
+    assertThat(Thumbnail.ofPage(sightPage())).isEmpty();
+  }
+
+  @Test
+  void aPlannedSightShowsDeviationsWhereSomethingIsKnownBeforehand() {
+    Sight sight = ReportSamples.asked(15.0);
+    SightParameters parameters = SightParameters.of(sight);
+    int pitch = parameters.indexOf("camera.pitchRad");
+    Estimates known =
+        Estimates.of(
+            List.of("camera.pitchRad"),
+            new double[] {parameters.values()[pitch]},
+            new double[][] {{4e-6}});
+    String page = new SightReport("plan", sight, known, ReportSamples.provenance()).html();
+    assertThat(page).contains("\u03c3 of a height (mm)");
+    assertThat(sightPage()).doesNotContain("\u03c3 of a height (mm)");
+  }
+
+  @Test
+  void aTableWithARaggedRowIsAnError() {
+    Table table = new Table("a", "b");
+    assertThatThrownBy(() -> table.row("1"))
+        .isInstanceOf(IllegalArgumentException.class)
+        .hasMessage("row has 1 cells, must have 2 (one a column)");
+  }
+}
