@@ -92,7 +92,9 @@ public final class SightReader {
     Node airNode = root.get("air", "the air");
     AirSetup air =
         AirReader.read(airOverlay.map(airNode::overlaidBy).orElse(airNode), cameraHeightM);
-    ProfileSetup profile = ProfileReader.read(root.get("profile", "temperature against height"));
+    Node profileNode = root.get("profile", "temperature against height");
+    ProfileSetup profile = ProfileReader.read(profileNode);
+    AirCheck.check(profileNode, profile, air, cameraHeightM);
     List<Reference> references = references(root, camera);
     List<Region> regions = RegionReader.read(root.find("regions"), references);
     return new Sight(

@@ -163,6 +163,11 @@ class SightMessagesTest {
   /** What one value says about another: more than a schema can express. */
   static Stream<Arguments> relations() {
     return Stream.of(
+        least(
+            "\"uniform\"",
+            "\"exponential\", \"surfaceExcessK\": -300, \"scaleHeightM\": 0.2",
+            "/profile is air of -279.97 C at 0 m, must be -150 to 1200 C (temperature of the"
+                + " air)"),
         everything(
             "\"min\": -5.0, \"max\": 5.0",
             "\"min\": 5.0, \"max\": -5.0",

@@ -27,6 +27,10 @@ final class ElevationTable {
   /** What a table answers; filled anew at each look-up. */
   static final class Answer {
     int code;
+
+    /** Which piece of the table answered. */
+    int piece;
+
     double apparentRad;
 
     /** Source pixels that one output pixel is high. */
@@ -70,8 +74,9 @@ final class ElevationTable {
    * @param answer receives code, apparent elevation and stretch
    */
   void look(double trueRad, double fartherShare, Answer answer) {
-    double onAxisRad = trueRad - fartherShare * piece(trueRad).lagRad(trueRad);
-    TablePiece piece = piece(onAxisRad);
+    double onAxisRad = trueRad - fartherShare * pieces[index(trueRad)].lagRad(trueRad);
+    answer.piece = index(onAxisRad);
+    TablePiece piece = pieces[answer.piece];
     answer.code = piece.code();
     if (piece.isShown()) {
       answer.apparentRad = onAxisRad + piece.shiftRad(onAxisRad);
@@ -79,11 +84,11 @@ final class ElevationTable {
     }
   }
 
-  private TablePiece piece(double trueRad) {
+  private int index(double trueRad) {
     int i = 0;
     while (i < pieces.length - 1 && trueRad > pieces[i].highestRad()) {
       i++;
     }
-    return pieces[i];
+    return i;
   }
 }

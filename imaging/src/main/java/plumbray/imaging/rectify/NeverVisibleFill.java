@@ -1,5 +1,6 @@
 package plumbray.imaging.rectify;
 
+import java.util.Arrays;
 import plumbray.imaging.photo.PhotoBuilder;
 import plumbray.imaging.photo.PhotoShape;
 
@@ -46,19 +47,22 @@ final class NeverVisibleFill {
     }
   }
 
+  /** Row by row, as the mask lies in memory. */
   private boolean findNextRuns() {
+    int[] from = ends.clone();
+    Arrays.fill(starts, -1);
+    Arrays.fill(ends, mask.heightPx());
     boolean found = false;
-    for (int x = 0; x < starts.length; x++) {
-      int y = ends[x];
-      while (y < mask.heightPx() && mask.at(x, y) != MaskPlane.NEVER_VISIBLE) {
-        y++;
+    for (int y = 0; y < mask.heightPx(); y++) {
+      for (int x = 0; x < starts.length; x++) {
+        boolean never = mask.at(x, y) == MaskPlane.NEVER_VISIBLE;
+        if (never && starts[x] < 0 && y >= from[x]) {
+          starts[x] = y;
+          found = true;
+        } else if (!never && starts[x] >= 0 && ends[x] == mask.heightPx()) {
+          ends[x] = y;
+        }
       }
-      starts[x] = y < mask.heightPx() ? y : -1;
-      while (y < mask.heightPx() && mask.at(x, y) == MaskPlane.NEVER_VISIBLE) {
-        y++;
-      }
-      ends[x] = y;
-      found |= starts[x] >= 0;
     }
     return found;
   }
@@ -85,24 +89,31 @@ final class NeverVisibleFill {
   }
 
   private void paint(EdgeTones above, EdgeTones below) {
-    for (int x = 0; x < starts.length; x++) {
-      if (starts[x] >= 0) {
-        paintRun(x, above, below);
+    int channels = shape.channels();
+    double[] first = new double[shape.rowSamples()];
+    double[] last = new double[shape.rowSamples()];
+    for (int c = 0; c < channels; c++) {
+      double mean = above.mean(c, below.mean(c, 0.5 * shape.highestSample()));
+      for (int x = 0; x < starts.length; x++) {
+        first[x * channels + c] = above.tone(x, c, below.tone(x, c, mean));
+        last[x * channels + c] = below.tone(x, c, first[x * channels + c]);
+      }
+    }
+    for (int y = 0; y < mask.heightPx(); y++) {
+      for (int x = 0; x < starts.length; x++) {
+        if (starts[x] >= 0 && y >= starts[x] && y < ends[x]) {
+          paintPixel(x, y, first, last);
+        }
       }
     }
   }
 
-  private void paintRun(int x, EdgeTones above, EdgeTones below) {
-    int rows = ends[x] - starts[x];
+  private void paintPixel(int x, int y, double[] first, double[] last) {
+    double share = (y - starts[x] + 0.5) / (ends[x] - starts[x]);
+    int at = x * shape.channels();
     for (int c = 0; c < shape.channels(); c++) {
-      double middle = above.mean(c, below.mean(c, 0.5 * shape.highestSample()));
-      double first = above.tone(x, c, below.tone(x, c, middle));
-      double last = below.tone(x, c, first);
-      for (int i = 0; i < rows; i++) {
-        double share = (i + 0.5) / rows;
-        long value = Math.round(first + share * (last - first));
-        picture.sample(x, starts[x] + i, c, (int) value);
-      }
+      double tone = first[at + c] + share * (last[at + c] - first[at + c]);
+      picture.sample(x, y, c, (int) (tone + 0.5));
     }
   }
 }

@@ -40,6 +40,36 @@ final class Outline {
     return inside;
   }
 
+  /** Whether a side may pass through the box {u0, v0, u1, v1}; never false when one does. */
+  boolean cuts(double[] box) {
+    double[] from = corners[corners.length - 1];
+    for (double[] to : corners) {
+      boolean beside =
+          Math.max(from[0], to[0]) < box[0]
+              || Math.min(from[0], to[0]) > box[2]
+              || Math.max(from[1], to[1]) < box[1]
+              || Math.min(from[1], to[1]) > box[3];
+      if (!beside && isOnBothSides(box, from, to)) {
+        return true;
+      }
+      from = to;
+    }
+    return false;
+  }
+
+  private static boolean isOnBothSides(double[] box, double[] from, double[] to) {
+    boolean left = false;
+    boolean right = false;
+    for (int corner = 0; corner < 4; corner++) {
+      double u = box[corner % 2 * 2];
+      double v = box[corner / 2 * 2 + 1];
+      double turn = (to[0] - from[0]) * (v - from[1]) - (to[1] - from[1]) * (u - from[0]);
+      left |= turn >= 0;
+      right |= turn <= 0;
+    }
+    return left && right;
+  }
+
   private static boolean onSide(double u, double v, double[] from, double[] to) {
     double du = to[0] - from[0];
     double dv = to[1] - from[1];

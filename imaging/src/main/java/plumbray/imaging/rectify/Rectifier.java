@@ -79,8 +79,10 @@ public final class Rectifier {
 
   /** Paints bands of rows until there are no more; one for each thread. */
   private final class BandPainter {
-    private final RectifyMap.Cursor cursor = map.cursor();
+    private final RowReader reader = new RowReader(map);
     private final Resampler resampler = new Resampler(photo);
+    private final TileResampler tiles = new TileResampler(photo);
+    private final int channels = photo.channels();
     private final float[] row = new float[photo.shape().rowSamples()];
 
     void paint(AtomicInteger nextBand) {
@@ -93,17 +95,27 @@ public final class Rectifier {
     }
 
     private void paintRow(int y) {
-      int channels = photo.channels();
+      RowMap sources = reader.read(y);
       for (int x = 0; x < photo.width(); x++) {
-        cursor.look(x, y);
-        codes[y * photo.width() + x] = (byte) cursor.code();
-        if (cursor.isShown()) {
-          resampler.sample(cursor.sourceU(), cursor.sourceV(), cursor.stretch(), row, x * channels);
-        } else {
-          Arrays.fill(row, x * channels, (x + 1) * channels, 0f);
+        codes[y * photo.width() + x] = (byte) sources.codes[x];
+      }
+      Arrays.fill(row, 0f);
+      for (int from = 0; from < photo.width(); from += RowReader.TILE) {
+        int to = Math.min(photo.width(), from + RowReader.TILE);
+        boolean whole = !photo.hasAlpha() && sources.allShown(from, to);
+        if (!whole || !tiles.sample(sources, from, to, row)) {
+          paintPixels(sources, from, to);
         }
       }
       picture.row(y, row);
+    }
+
+    private void paintPixels(RowMap sources, int from, int to) {
+      for (int x = from; x < to; x++) {
+        if (sources.isShown(x)) {
+          resampler.sample(sources.u[x], sources.v[x], sources.stretch[x], row, x * channels);
+        }
+      }
     }
   }
 }

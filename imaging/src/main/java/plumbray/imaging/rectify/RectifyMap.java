@@ -98,34 +98,45 @@ public final class RectifyMap {
     private final ElevationTable.Answer answer = new ElevationTable.Answer();
     private final double[] direction = new double[2];
     private final double[] source = new double[2];
+    private final TestedPlaces tested = new TestedPlaces(regions.size());
     private int code;
+    private long place;
 
     /** Looks an output pixel up; the answers are then asked for. */
     void look(double u, double v) {
       projection.direction(u, v, direction);
       double halfSine = Math.sin(0.5 * direction[1]);
       double fartherShare = 2 * halfSine * halfSine;
-      for (MappedRegion region : regions) {
+      for (int i = 0; i < regions.size(); i++) {
+        MappedRegion region = regions.get(i);
         region.table().look(direction[0], fartherShare, answer);
-        if (answer.code != ElevationTable.NOT_HERE && claims(region, u, v)) {
+        place = (long) i << 32 | answer.piece;
+        if (answer.code != ElevationTable.NOT_HERE && claims(i, u, v)) {
           return;
         }
       }
       code = answer.code == ElevationTable.NOT_HERE ? MaskPlane.NEVER_VISIBLE : code;
     }
 
-    private boolean claims(MappedRegion region, double u, double v) {
+    private boolean claims(int region, double u, double v) {
       code = answer.code;
-      if (code != MaskPlane.UPRIGHT && code != MaskPlane.INVERTED) {
-        return region.holds(u, v);
+      if (!isShown()) {
+        return holds(region, u, v);
       }
       projection.pixel(answer.apparentRad, direction[1], source);
       if (!inPhoto(source[0], camera.widthPx()) || !inPhoto(source[1], camera.heightPx())) {
         code = MaskPlane.OUTSIDE;
-        return region.holds(u, v);
+        return holds(region, u, v);
       }
-      return region.holds(
-          withinCentres(source[0], camera.widthPx()), withinCentres(source[1], camera.heightPx()));
+      return holds(
+          region,
+          withinCentres(source[0], camera.widthPx()),
+          withinCentres(source[1], camera.heightPx()));
+    }
+
+    private boolean holds(int region, double u, double v) {
+      tested.add(region, u, v);
+      return regions.get(region).holds(u, v);
     }
 
     /** A photo reaches half a pixel beyond the centres of its outer pixels; NaN is outside. */
@@ -135,6 +146,27 @@ public final class RectifyMap {
 
     private static double withinCentres(double at, int size) {
       return Math.max(0, Math.min(size - 1, at));
+    }
+
+    /** Region and piece of its table that answered: within one, the map is smooth. */
+    long place() {
+      return place;
+    }
+
+    /** Starts a stretch of pixels, after which {@link #isSteady} is asked. */
+    void startStretch() {
+      tested.clear();
+    }
+
+    /** Whether no outline cuts through the stretch, so that the place alone decides in it. */
+    boolean isSteady() {
+      for (int i = 0; i < regions.size(); i++) {
+        Optional<Outline> outline = regions.get(i).outline();
+        if (outline.isPresent() && tested.isCut(i, outline.get())) {
+          return false;
+        }
+      }
+      return true;
     }
 
     /** Mask code of the pixel. */

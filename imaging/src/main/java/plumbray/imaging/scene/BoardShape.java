@@ -40,6 +40,11 @@ public record BoardShape(double leftM, double rightM, double bottomM, double top
   }
 
   @Override
+  public boolean misses(Extent box) {
+    return false;
+  }
+
+  @Override
   public Paint paint(double acrossM, double upM) {
     return paint;
   }

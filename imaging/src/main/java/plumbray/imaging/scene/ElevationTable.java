@@ -65,9 +65,10 @@ final class ElevationTable {
     double[] pathSlope = new double[nodes.count()];
     double[] out = new double[2];
     for (int i = 0; i < nodes.count(); i++) {
+      boolean stopped = inverseGroundPerM[i] * distanceM > 1;
       there.evaluate(nodes.apparentRad(i), out);
-      elevationM[i] = out[0];
-      pathSlope[i] = out[1];
+      elevationM[i] = stopped ? Double.NaN : out[0];
+      pathSlope[i] = stopped ? Double.NaN : out[1];
     }
     return new Sheet(distanceM, there.groundM(), elevationM, pathSlope);
   }

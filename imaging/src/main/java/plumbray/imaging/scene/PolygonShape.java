@@ -53,6 +53,11 @@ public final class PolygonShape implements Shape {
     return extent.holds(box) && noEdgeNear(box) && holds(box.leftM(), box.bottomM());
   }
 
+  @Override
+  public boolean misses(Extent box) {
+    return noEdgeNear(box) && !holds(box.leftM(), box.bottomM());
+  }
+
   /** Whether no edge's own rectangle touches the box: enough to know that no edge crosses it. */
   private boolean noEdgeNear(Extent box) {
     for (int i = 0, j = cornersM.length - 1; i < cornersM.length; j = i++) {

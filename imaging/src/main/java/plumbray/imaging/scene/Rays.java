@@ -19,7 +19,8 @@ interface Rays {
      * Where the ray of an apparent elevation lies.
      *
      * @param apparentRad apparent elevation (rad)
-     * @param out receives its elevation (m) and dy/dx, both NaN where the ground stops it before
+     * @param out receives its elevation (m) and dy/dx, NaN or anything where the ground stops it
+     *     before
      */
     void evaluate(double apparentRad, double[] out);
   }

@@ -48,8 +48,10 @@ final class SceneRenderer {
     private final float[] shiftU = new float[camera.widthPx()];
     private final float[] shiftV = new float[camera.widthPx()];
     private final Tile tile = new Tile(camera.projection());
-    private final TileContents contents = new TileContents(seen);
+    private final Contents tileContents = new Contents(seen);
+    private final Contents pixelContents = new Contents(seen);
     private final Shader shader = new Shader(seen, camera.radPerPx());
+    private Contents contents;
     private final double[] sum = new double[LinearPicture.CHANNELS];
 
     Row(int v, LinearPicture picture) {
@@ -65,9 +67,9 @@ final class SceneRenderer {
       for (int left = 0; left < camera.widthPx(); left += Tile.WIDTH_PX) {
         int right = Math.min(camera.widthPx(), left + Tile.WIDTH_PX);
         tile.moveTo(left, right, v);
-        contents.find(tile, greatestShiftPx(left, right) * camera.radPerPx());
+        tileContents.find(seen.things(), tile.window(left, right, greatestShiftPx(left, right)));
         for (int u = left; u < right; u++) {
-          picture.set(u, v, contents.isEven() ? single(u) : mean(u));
+          picture.set(u, v, pixel(u));
         }
       }
     }
@@ -75,9 +77,18 @@ final class SceneRenderer {
     private double greatestShiftPx(int left, int right) {
       double greatest = 0;
       for (int u = left; u < right; u++) {
-        greatest = Math.max(greatest, Math.abs(shiftU[u]) + Math.abs(shiftV[u]));
+        greatest = Math.max(greatest, Math.max(Math.abs(shiftU[u]), Math.abs(shiftV[u])));
       }
       return greatest;
+    }
+
+    private double[] pixel(int u) {
+      contents = tileContents;
+      if (!contents.isEven()) {
+        pixelContents.find(tileContents.things(), tile.window(u, u + 1, greatestShiftPx(u, u + 1)));
+        contents = pixelContents;
+      }
+      return contents.isEven() ? single(u) : mean(u);
     }
 
     private double[] single(int u) {
@@ -105,7 +116,7 @@ final class SceneRenderer {
 
     private double[] light(double u, double sampleV, double widthPx) {
       return shader.light(
-          contents, tile.apparentRad(u, sampleV), tile.tanAzimuth(u, sampleV), widthPx);
+          contents.things(), tile.apparentRad(u, sampleV), tile.tanAzimuth(u, sampleV), widthPx);
     }
   }
 }

@@ -1,5 +1,7 @@
 package plumbray.imaging.scene;
 
+import java.util.List;
+
 /** The light that comes from one direction. */
 final class Shader {
   private final SeenScene seen;
@@ -19,29 +21,28 @@ final class Shader {
   /**
    * The light from a direction.
    *
-   * @param contents what can be seen there
+   * @param things what can be seen there, nearest first
    * @param apparentRad apparent elevation (rad)
    * @param tanAzimuth tangent of the azimuth
    * @param widthPx width of the piece of the picture that the sample stands for (px)
    * @return red, green, blue in linear light; overwritten by the next call
    */
-  double[] light(TileContents contents, double apparentRad, double tanAzimuth, double widthPx) {
+  double[] light(List<Placed> things, double apparentRad, double tanAzimuth, double widthPx) {
     double position = seen.table().position(apparentRad);
     double farther = Math.sqrt(1 + tanAzimuth * tanAzimuth);
-    for (int i = 0; i < contents.count(); i++) {
-      ElevationTable.Sheet sheet = contents.layer(i).sheet();
-      double elevationM = ElevationTable.between(sheet.elevationM(), position);
-      if (Double.isNaN(elevationM)) {
-        continue;
-      }
+    for (int i = 0; i < things.size(); i++) {
+      ElevationTable.Sheet sheet = things.get(i).sheet();
       double distanceM = sheet.distanceM();
-      elevationM += distanceM * (farther - 1) * ElevationTable.between(sheet.pathSlope(), position);
-      place[0] = distanceM * tanAzimuth;
-      place[1] = elevationM - contents.thing(i).zeroM();
-      if (isOn(contents.thing(i), elevationM)) {
+      double elevationM =
+          ElevationTable.between(sheet.elevationM(), position)
+              + distanceM * (farther - 1) * ElevationTable.between(sheet.pathSlope(), position);
+      double acrossM = distanceM * tanAzimuth;
+      if (things.get(i).isAt(acrossM, elevationM)) {
+        place[0] = acrossM;
+        place[1] = elevationM - things.get(i).zeroM();
         place[2] = distanceM * radPerPx * widthPx;
         place[3] = place[2];
-        paint(contents.thing(i), distanceM);
+        paint(things.get(i), distanceM);
         return light;
       }
     }
@@ -49,16 +50,7 @@ final class Shader {
     return light;
   }
 
-  private boolean isOn(Layer.Placed placed, double elevationM) {
-    Extent extent = placed.extent();
-    return place[0] >= extent.leftM()
-        && place[0] <= extent.rightM()
-        && elevationM >= extent.bottomM()
-        && elevationM <= extent.topM()
-        && placed.thing().shape().holds(place[0], place[1]);
-  }
-
-  private void paint(Layer.Placed placed, double distanceM) {
+  private void paint(Placed placed, double distanceM) {
     shine(placed.thing().shape().paint(place[0], place[1]), placed.grainNoise(), distanceM);
   }
 
@@ -93,7 +85,7 @@ final class Shader {
 
   private void sky(double slope) {
     Backdrop.Sky sky = seen.scene().backdrop().sky();
-    double share = Math.min(1, Math.max(0, slope * farSlopePerRad));
+    double share = slope > 0 ? Math.min(1, slope * farSlopePerRad) : 0;
     LinearColour low = sky.horizon();
     LinearColour high = sky.high();
     light[0] = low.red() + share * (high.red() - low.red());

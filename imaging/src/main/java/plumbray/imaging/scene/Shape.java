@@ -20,6 +20,12 @@ public sealed interface Shape permits BoardShape, PolygonShape, SkylineShape, St
    */
   boolean fills(Extent box);
 
+  /**
+   * Whether the shape certainly leaves the whole rectangle, which meets its extent, free; {@code
+   * false} is always a safe answer.
+   */
+  boolean misses(Extent box);
+
   /** The paint at a point of the shape. */
   Paint paint(double acrossM, double upM);
 }

@@ -1,6 +1,5 @@
 package plumbray.imaging.scene;
 
-import java.util.List;
 import java.util.stream.DoubleStream;
 import plumbray.calibration.camera.Camera;
 import plumbray.calibration.sight.Sight;
@@ -127,11 +126,7 @@ public final class Simulation {
 
   private Photo picture(Scene drawn, Rays rays) {
     ElevationTable table = new ElevationTable(rays, nodes);
-    List<Layer> layers =
-        Layer.nearestFirst(drawn.things()).stream()
-            .map(things -> Layer.of(things, table.sheet(things.get(0).distanceM()), drawn.seed()))
-            .toList();
-    SeenScene seen = new SeenScene(drawn, table, layers, table.sheet(reachM()));
+    SeenScene seen = SeenScene.of(drawn, table, reachM());
     return new Development(drawn).develop(new SceneRenderer(seen, camera).render());
   }
 

@@ -1,6 +1,7 @@
 package plumbray.imaging.scene;
 
 import java.util.Objects;
+import java.util.function.DoubleBinaryOperator;
 
 /**
  * Hills, or anything that fills the view from the ground up to a broken line: all that lies under
@@ -50,19 +51,28 @@ public final class SkylineShape implements Shape {
 
   @Override
   public boolean fills(Extent box) {
-    if (!extent.holds(box)) {
-      return false;
-    }
-    double lowestM = Math.min(lineM(box.leftM()), lineM(box.rightM()));
-    for (double[] point : pointsM) {
-      if (point[0] > box.leftM() && point[0] < box.rightM()) {
-        lowestM = Math.min(lowestM, point[1]);
-      }
-    }
-    return box.topM() < lowestM;
+    return extent.holds(box) && box.topM() < lineOver(box, Math::min);
   }
 
-  private double lineM(double acrossM) {
+  @Override
+  public boolean misses(Extent box) {
+    return box.bottomM() > lineOver(box, Math::max);
+  }
+
+  /** The line's lowest or highest height over a rectangle; beyond its ends it goes on straight. */
+  private double lineOver(Extent box, DoubleBinaryOperator choice) {
+    double chosenM = choice.applyAsDouble(lineM(box.leftM()), lineM(box.rightM()));
+    int first = segment(box.leftM());
+    for (int i = pointsM[first][0] > box.leftM() ? first : first + 1;
+        i < pointsM.length && pointsM[i][0] < box.rightM();
+        i++) {
+      chosenM = choice.applyAsDouble(chosenM, pointsM[i][1]);
+    }
+    return chosenM;
+  }
+
+  /** The stretch of the line at a place: the number of its left point. */
+  private int segment(double acrossM) {
     int low = 0;
     int high = pointsM.length - 1;
     while (high - low > 1) {
@@ -73,8 +83,13 @@ public final class SkylineShape implements Shape {
         high = middle;
       }
     }
-    double share = (acrossM - pointsM[low][0]) / (pointsM[high][0] - pointsM[low][0]);
-    return pointsM[low][1] + share * (pointsM[high][1] - pointsM[low][1]);
+    return low;
+  }
+
+  private double lineM(double acrossM) {
+    int left = segment(acrossM);
+    double share = (acrossM - pointsM[left][0]) / (pointsM[left + 1][0] - pointsM[left][0]);
+    return pointsM[left][1] + share * (pointsM[left + 1][1] - pointsM[left][1]);
   }
 
   @Override

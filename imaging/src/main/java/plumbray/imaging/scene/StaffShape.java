@@ -105,6 +105,11 @@ public final class StaffShape implements Shape {
   }
 
   @Override
+  public boolean misses(Extent box) {
+    return false;
+  }
+
+  @Override
   public Paint paint(double pointAcrossM, double upM) {
     boolean dark = (bar(upM) % 2 == 0) == bars.firstBarDark();
     double reflectance = dark ? bars.darkReflectance() : bars.brightReflectance();

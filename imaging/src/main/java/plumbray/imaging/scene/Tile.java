@@ -15,6 +15,7 @@ final class Tile {
   private final double[] corner = new double[2];
   private final double[] apparentRad = new double[4];
   private final double[] tanAzimuth = new double[4];
+  private final double[] bounds = new double[2];
   private double left;
   private double top;
   private double width;
@@ -43,33 +44,32 @@ final class Tile {
     return between(tanAzimuth, (u - left) / width, v - top);
   }
 
-  double lowestRad() {
-    return least(apparentRad);
+  /** The directions of a part of the piece, wherever a sample is shifted by up to a reach. */
+  Window window(int u, int uEnd, double reachPx) {
+    double fromU = u - 0.5 - reachPx;
+    double toU = uEnd - 0.5 + reachPx;
+    spread(fromU, toU, reachPx, apparentRad, bounds);
+    double lowestRad = bounds[0];
+    double highestRad = bounds[1];
+    spread(fromU, toU, reachPx, tanAzimuth, bounds);
+    return new Window(lowestRad, highestRad, bounds[0], bounds[1]);
   }
 
-  double highestRad() {
-    return greatest(apparentRad);
-  }
-
-  double leastTanAzimuth() {
-    return least(tanAzimuth);
-  }
-
-  double greatestTanAzimuth() {
-    return greatest(tanAzimuth);
+  private void spread(
+      double fromU, double toU, double reachPx, double[] corners, double[] leastAndGreatest) {
+    double from = (fromU - left) / width;
+    double to = (toU - left) / width;
+    double a = between(corners, from, -reachPx);
+    double b = between(corners, to, -reachPx);
+    double c = between(corners, from, 1 + reachPx);
+    double d = between(corners, to, 1 + reachPx);
+    leastAndGreatest[0] = Math.min(Math.min(a, b), Math.min(c, d));
+    leastAndGreatest[1] = Math.max(Math.max(a, b), Math.max(c, d));
   }
 
   private static double between(double[] corners, double s, double t) {
     double upper = corners[0] + s * (corners[1] - corners[0]);
     double lower = corners[2] + s * (corners[3] - corners[2]);
     return upper + t * (lower - upper);
-  }
-
-  private static double least(double[] v) {
-    return Math.min(Math.min(v[0], v[1]), Math.min(v[2], v[3]));
-  }
-
-  private static double greatest(double[] v) {
-    return Math.max(Math.max(v[0], v[1]), Math.max(v[2], v[3]));
   }
 }

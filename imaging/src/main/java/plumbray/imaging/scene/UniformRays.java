@@ -44,9 +44,8 @@ record UniformRays(StraightRay ray, SightPath path, double reachM) implements Ra
 
     @Override
     public void evaluate(double apparentRad, double[] out) {
-      boolean stopped = groundDistanceM(apparentRad).orElse(Double.POSITIVE_INFINITY) < distanceM;
-      out[0] = stopped ? Double.NaN : ray.elevationM(apparentRad, distanceM);
-      out[1] = stopped ? Double.NaN : ray.pathSlope(apparentRad, distanceM);
+      out[0] = ray.elevationM(apparentRad, distanceM);
+      out[1] = ray.pathSlope(apparentRad, distanceM);
     }
   }
 }

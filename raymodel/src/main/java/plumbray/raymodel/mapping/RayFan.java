@@ -10,6 +10,9 @@ import plumbray.raymodel.ray.RayTracer;
 /** A fan of rays from one camera, and the mappings at all distances in use that follow from it. */
 public final class RayFan {
 
+  /** Two rays to either side of a distance end at it but for this share, if there is no jump. */
+  private static final double SAME_GROUND = 1e-3;
+
   private final List<SightMapping> mappings;
   private final GroundView ground;
   private final int rayCount;
@@ -76,23 +79,33 @@ public final class RayFan {
         t.apparentRad(), t.elevationM(d), t.sensitivity(d, 0), t.pathSlope(d), sensitivities);
   }
 
-  /** Runs of neighbouring rays that end in the ground ever farther out. */
+  /** Runs of neighbouring rays that end in the ground without a jump from one to the next. */
   private static List<List<double[]>> groundRuns(List<RayTrace> traces) {
     List<List<double[]>> runs = new ArrayList<>();
     List<double[]> run = new ArrayList<>();
+    RayTrace before = null;
     for (RayTrace t : traces) {
-      boolean goesOn =
-          t.ended() && (run.isEmpty() || t.endDistanceM() >= run.get(run.size() - 1)[1]);
-      if (!goesOn) {
+      if (!t.ended() || (!run.isEmpty() && jumps(before, t))) {
         runs.add(run);
         run = new ArrayList<>();
       }
       if (t.ended()) {
         run.add(new double[] {t.apparentRad(), t.endDistanceM()});
       }
+      before = t;
     }
     runs.add(run);
     return runs;
+  }
+
+  /**
+   * Whether the ground seen comes nearer by a jump. Under a ray that is bent back to the ground it
+   * comes nearer steadily as the ray starts higher; rays that pass equally many distances show
+   * that.
+   */
+  private static boolean jumps(RayTrace lower, RayTrace higher) {
+    return lower.reached() != higher.reached()
+        && higher.endDistanceM() < (1.0 - SAME_GROUND) * lower.endDistanceM();
   }
 
   /** The mappings by rising distance. */

@@ -47,11 +47,22 @@ final class RayState {
     xForce = new double[NystromPair.STAGES][components];
   }
 
-  /** Ground y = intercept + slope x holds from here on; forces are evaluated afresh. */
+  /**
+   * Ground y = intercept + slope x holds from here on; forces are evaluated afresh. A neighbouring
+   * ray comes to the bend sooner or later than this one and feels the other force for that while,
+   * which is a jump in the derivatives' rates.
+   */
   void enterSegment(double slope, double intercept) {
+    double before = xForce[0][0];
     groundSlope = slope;
     groundIntercept = intercept;
     force(0, u, x);
+    if (x[0] > 0.0) {
+      double jump = (xForce[0][0] - before) / xRate[0];
+      for (int j = 1; j < components; j++) {
+        xRate[j] += jump * x[j];
+      }
+    }
   }
 
   /** Puts the ray at the camera. */

@@ -3,34 +3,25 @@ package plumbray.imaging.scene;
 import java.util.ArrayList;
 import java.util.List;
 
-/** Which things can be seen in a tile, so that most pixels are drawn with a single sample. */
-final class TileContents {
+/** Which things can be seen in a window, so that most pixels are drawn with a single sample. */
+final class Contents {
   private final SeenScene seen;
-  private final List<Layer> layers = new ArrayList<>();
-  private final List<Layer.Placed> things = new ArrayList<>();
+  private final List<Placed> things = new ArrayList<>();
   private boolean even;
+  private Window window;
   private int firstNode;
   private int lastNode;
-  private double leastTan;
-  private double greatestTan;
 
-  TileContents(SeenScene seen) {
+  Contents(SeenScene seen) {
     this.seen = seen;
   }
 
-  int count() {
-    return things.size();
+  /** What can be seen, nearest first. */
+  List<Placed> things() {
+    return things;
   }
 
-  Layer layer(int i) {
-    return layers.get(i);
-  }
-
-  Layer.Placed thing(int i) {
-    return things.get(i);
-  }
-
-  /** Whether the tile shows one surface only. */
+  /** Whether the window shows one surface only. */
   boolean isEven() {
     return even;
   }
@@ -38,37 +29,32 @@ final class TileContents {
   /**
    * Finds what can be seen.
    *
-   * @param tile the tile
-   * @param reachRad how far beyond its corners it is sampled (rad)
+   * @param candidates the things that may be, nearest first
+   * @param where the directions
    */
-  void find(Tile tile, double reachRad) {
-    layers.clear();
+  void find(List<Placed> candidates, Window where) {
     things.clear();
-    firstNode = (int) seen.table().position(tile.lowestRad() - reachRad);
-    lastNode = 1 + (int) seen.table().position(tile.highestRad() + reachRad);
-    leastTan = tile.leastTanAzimuth() - 2 * reachRad;
-    greatestTan = tile.greatestTanAzimuth() + 2 * reachRad;
-    for (Layer layer : seen.layers()) {
-      if (addThings(layer)) {
-        even = things.size() == 1;
-        return;
-      }
-    }
-    even = things.isEmpty() && isBackdropEven();
+    window = where;
+    firstNode = (int) seen.table().position(where.lowestRad());
+    lastNode = 1 + (int) seen.table().position(where.highestRad());
+    even = findThings(candidates) ? things.size() == 1 : things.isEmpty() && isBackdropEven();
   }
 
-  /** Adds what the layer may show; true where it fills the tile, so that nothing farther shows. */
-  private boolean addThings(Layer layer) {
-    Extent box = box(layer.sheet());
-    if (box == null) {
-      return false;
-    }
-    boolean whole = isWhole(layer.sheet());
-    for (Layer.Placed placed : layer.things()) {
-      if (placed.extent().meets(box)) {
-        layers.add(layer);
+  /** Lists the things down to one that fills the window, and says whether there is such a one. */
+  private boolean findThings(List<Placed> candidates) {
+    ElevationTable.Sheet sheet = null;
+    Extent box = null;
+    boolean whole = false;
+    for (int i = 0; i < candidates.size(); i++) {
+      Placed placed = candidates.get(i);
+      if (placed.sheet() != sheet) {
+        sheet = placed.sheet();
+        box = box(sheet);
+        whole = isWhole(sheet);
+      }
+      if (box != null && placed.mayMeet(box)) {
         things.add(placed);
-        if (whole && placed.thing().shape().fills(box.loweredBy(placed.zeroM()))) {
+        if (whole && placed.fills(box)) {
           return true;
         }
       }
@@ -101,10 +87,13 @@ final class TileContents {
       return null;
     }
     double distanceM = sheet.distanceM();
-    double aside = Math.max(Math.abs(leastTan), Math.abs(greatestTan));
+    double aside = window.widestTan();
     double fartherM = steepest * distanceM * (Math.sqrt(1 + aside * aside) - 1);
     return new Extent(
-        distanceM * leastTan, distanceM * greatestTan, lowest - fartherM, highest + fartherM);
+        distanceM * window.leastTan(),
+        distanceM * window.greatestTan(),
+        lowest - fartherM,
+        highest + fartherM);
   }
 
   private boolean isBackdropEven() {
@@ -123,10 +112,15 @@ final class TileContents {
   }
 
   private boolean isGroundEven(double nearestM, double farthestM) {
-    double leftM = leastTan * (leastTan < 0 ? farthestM : nearestM);
-    double rightM = greatestTan * (greatestTan > 0 ? farthestM : nearestM);
-    double aside = Math.max(Math.abs(leastTan), Math.abs(greatestTan));
-    Extent box = new Extent(leftM, rightM, nearestM / Math.sqrt(1 + aside * aside), farthestM);
+    double left = window.leastTan();
+    double right = window.greatestTan();
+    double aside = window.widestTan();
+    Extent box =
+        new Extent(
+            left * (left < 0 ? farthestM : nearestM),
+            right * (right > 0 ? farthestM : nearestM),
+            nearestM / Math.sqrt(1 + aside * aside),
+            farthestM);
     for (Backdrop.Patch patch : seen.scene().backdrop().ground().patches()) {
       Extent area = new Extent(patch.leftM(), patch.rightM(), patch.fromM(), patch.toM());
       if (area.meets(box) && !area.holds(box)) {
