@@ -1,7 +1,7 @@
 package plumbray.raymodel.ray;
 
 /** A medium whose rays have a closed solution. */
-interface ClosedMedium extends Medium {
+public interface ClosedMedium extends Medium {
 
   /** ln n, without loss where n is close to 1. */
   double logIndex(double z);

@@ -1,5 +1,6 @@
 package plumbray.raymodel.ray;
 
+import java.util.Arrays;
 import java.util.function.DoubleUnaryOperator;
 
 /** Central differences for checking derivatives. */
@@ -9,9 +10,19 @@ public final class Difference {
 
   /** df/dx by seven points of spacing {@code h}; the error goes with h^6. */
   public static double sixthOrder(DoubleUnaryOperator f, double x, double h) {
-    double one = f.applyAsDouble(x + h) - f.applyAsDouble(x - h);
-    double two = f.applyAsDouble(x + 2 * h) - f.applyAsDouble(x - 2 * h);
-    double three = f.applyAsDouble(x + 3 * h) - f.applyAsDouble(x - 3 * h);
+    return slope(Arrays.stream(points(x, h)).map(f).toArray(), h);
+  }
+
+  /** The six points that count, by rising x. */
+  public static double[] points(double x, double h) {
+    return new double[] {x - 3 * h, x - 2 * h, x - h, x + h, x + 2 * h, x + 3 * h};
+  }
+
+  /** df/dx from the values at {@link #points}. */
+  public static double slope(double[] values, double h) {
+    double one = values[3] - values[2];
+    double two = values[4] - values[1];
+    double three = values[5] - values[0];
     return (45.0 * one - 9.0 * two + three) / (60.0 * h);
   }
 }

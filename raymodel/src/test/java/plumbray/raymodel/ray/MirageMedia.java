@@ -4,7 +4,7 @@ package plumbray.raymodel.ray;
  * Hot and cold ground in closed form. From n cos(t) = C over n^2 = N^2 -+ B exp(-z/h), by the
  * substitution w = exp(z/2h), in which the ray equation is linear.
  */
-final class MirageMedia {
+public final class MirageMedia {
 
   private MirageMedia() {}
 
@@ -17,7 +17,7 @@ final class MirageMedia {
    * n^2 = N^2 - B exp(-z/h): z = z_v + 2h ln cosh[T (x - x_v)/2h] with T^2 = tan^2 t + E/C^2, E = B
    * exp(-z0/h), x_v = -(2h/T) artanh(tan t/T), z_v = z0 - 2h ln cosh(T x_v/2h).
    */
-  record HotGround(double farIndex, double b, double h) implements ClosedMedium {
+  public record HotGround(double farIndex, double b, double h) implements ClosedMedium {
     private double square(double z) {
       return farIndex * farIndex - b * Math.exp(-z / h);
     }
@@ -43,7 +43,7 @@ final class MirageMedia {
     }
 
     /** Direction of the ray that just touches the ground, rad, from the height z0. */
-    double grazingRad(double z0) {
+    public double grazingRad(double z0) {
       return -Math.acos(Math.sqrt(square(0.0) / square(z0)));
     }
 
@@ -68,7 +68,7 @@ final class MirageMedia {
     }
 
     /** Where a descending ray meets the ground, m; NaN where it does not. */
-    double groundM(double z0, double t) {
+    public double groundM(double z0, double t) {
       double lowest = vertexM(z0, t);
       if (t >= 0.0 || lowest > 0.0) {
         return Double.NaN;
@@ -89,7 +89,7 @@ final class MirageMedia {
    * n^2 = N^2 + B exp(-z/h), K^2 = E/C^2 - tan^2 t: trapped rays, K^2 > 0, z = z_v + 2h ln cos[K (x
    * - x_v)/2h]; others, T^2 = -K^2, exp(z/2h) = (sqrt(B)/(C T)) |sinh[T (x - x_s)/2h]|.
    */
-  record ColdGround(double farIndex, double b, double h) implements ClosedMedium {
+  public record ColdGround(double farIndex, double b, double h) implements ClosedMedium {
     private double square(double z) {
       return farIndex * farIndex + b * Math.exp(-z / h);
     }
