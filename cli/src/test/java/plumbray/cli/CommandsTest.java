@@ -90,6 +90,7 @@ class CommandsTest {
         .content()
         .startsWith("distance_m,apparent_elevation_mrad,row_px,height_m,elevation_m,");
     assertThat(folder.resolve("out/open.temperature.csv")).isNotEmptyFile();
+    assertThat(folder.resolve("out/open.html")).content().contains("planned sight");
     assertThat(out.toString()).startsWith("at 500 m: lowest visible height ");
     assertThat(err.toString()).isEmpty();
   }

@@ -11,6 +11,7 @@ import java.util.concurrent.ExecutionException;
 import java.util.concurrent.ExecutorService;
 import java.util.concurrent.Executors;
 import java.util.concurrent.Future;
+import plumbray.cli.document.Digest;
 import plumbray.cli.document.FitDocument;
 import plumbray.cli.document.SummaryCsv;
 import plumbray.cli.document.WholeFile;
@@ -51,13 +52,22 @@ public final class BatchDriver {
   }
 
   /**
-   * Works through the photos and writes the log and the summary.
+   * Works through the photos and writes the log, the summary and the batch's page.
    *
+   * @param batch what the batch is called
+   * @param inputs digests of the batch's own files
    * @param tasks the photos
    * @return what came of each, in their order
-   * @throws IOException when the log or the summary cannot be written
+   * @throws IOException when the log, the summary or the page cannot be written
    */
-  public List<PhotoOutcome> run(List<PhotoTask> tasks) throws IOException {
+  public List<PhotoOutcome> run(String batch, List<Digest> inputs, List<PhotoTask> tasks)
+      throws IOException {
+    PhotoOutcome[] outcomes = worked(tasks);
+    new BatchIndex(folder).write(batch, inputs, outcomes);
+    return List.of(outcomes);
+  }
+
+  private PhotoOutcome[] worked(List<PhotoTask> tasks) throws IOException {
     Run run = new Run(tasks);
     ExecutorService pool = Executors.newFixedThreadPool(jobs);
     try {
@@ -129,7 +139,7 @@ public final class BatchDriver {
       }
     }
 
-    synchronized List<PhotoOutcome> end() throws IOException {
+    synchronized PhotoOutcome[] end() throws IOException {
       writeLog();
       SummaryCsv summary = new SummaryCsv();
       for (PhotoOutcome outcome : outcomes) {
@@ -141,7 +151,7 @@ public final class BatchDriver {
                     summary.addFailed(outcome.name(), outcome.photo(), outcome.error().orElse("")));
       }
       WholeFile.write(folder.resolve("summary.csv"), summary.text());
-      return List.of(outcomes);
+      return outcomes.clone();
     }
 
     private void writeLog() throws IOException {

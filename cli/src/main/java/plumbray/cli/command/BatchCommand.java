@@ -14,6 +14,7 @@ import picocli.CommandLine.Spec;
 import plumbray.cli.batch.BatchDriver;
 import plumbray.cli.batch.PhotoOutcome;
 import plumbray.cli.document.BatchReader;
+import plumbray.cli.document.Digest;
 import plumbray.cli.work.PhotoTask;
 import plumbray.cli.work.PhotoWorker;
 import plumbray.imaging.fit.SightFit;
@@ -53,7 +54,9 @@ final class BatchCommand implements Callable<Integer> {
     List<PhotoTask> tasks = BatchReader.read(batchFile).stream().map(PhotoTask::of).toList();
     ProgressLine progress = ProgressLine.of(parent.terminal());
     PhotoWorker worker = new PhotoWorker(new SightFit()::fit, true, 1);
-    List<PhotoOutcome> outcomes = new BatchDriver(worker, folder, side, progress).run(tasks);
+    BatchDriver driver = new BatchDriver(worker, folder, side, progress);
+    List<PhotoOutcome> outcomes =
+        driver.run(batchFile.getFileName().toString(), List.of(Digest.of(batchFile)), tasks);
     progress.close();
     return report(outcomes);
   }

@@ -6,12 +6,15 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
-import plumbray.calibration.sight.Sight;
 import plumbray.cli.document.Digest;
 import plumbray.cli.document.FitDocument;
 import plumbray.cli.document.FitWriter;
 import plumbray.cli.document.MappingCsv;
+import plumbray.cli.document.ProgramVersion;
 import plumbray.cli.document.WholeFile;
+import plumbray.cli.report.PhotoReport;
+import plumbray.cli.report.Provenance;
+import plumbray.cli.report.ReportInput;
 import plumbray.imaging.fit.FitResult;
 import plumbray.imaging.fit.FitStatus;
 import plumbray.imaging.fit.SightOptics;
@@ -19,6 +22,7 @@ import plumbray.imaging.measure.MappingRow;
 import plumbray.imaging.photo.Photo;
 import plumbray.imaging.photo.PhotoException;
 import plumbray.imaging.photo.PhotoReader;
+import plumbray.imaging.rectify.Rectified;
 
 /**
  * Fits one photo and writes all of its results. The fit file comes last and lists the digests of
@@ -56,7 +60,8 @@ public final class PhotoWorker {
     try {
       return work(task, photo(task), inputs, files);
     } catch (PhotoException e) {
-      return writeFailed(FitResult.failed(task.sight(), e.getMessage()), inputs, files);
+      FitResult failed = FitResult.failed(task.sight(), e.getMessage());
+      return writeFailed(new Fitted(task, Optional.empty(), failed, inputs), files);
     }
   }
 
@@ -69,10 +74,8 @@ public final class PhotoWorker {
         complaint
             .map(error -> FitResult.failed(task.sight(), error))
             .orElseGet(() -> fitting.fit(task.sight(), photo));
-    if (result.status() == FitStatus.FAILED) {
-      return writeFailed(result, inputs, files);
-    }
-    return write(new Fitted(task, photo, result), inputs, files);
+    Fitted fitted = new Fitted(task, photo, result, inputs);
+    return result.status() == FitStatus.FAILED ? writeFailed(fitted, files) : write(fitted, files);
   }
 
   private static Optional<Photo> photo(PhotoTask task) throws PhotoException {
@@ -82,37 +85,47 @@ public final class PhotoWorker {
     return Optional.of(PhotoReader.read(task.photo().get()));
   }
 
-  private FitDocument writeFailed(FitResult result, List<Digest> inputs, ResultFiles files)
-      throws IOException {
+  private FitDocument writeFailed(Fitted fitted, ResultFiles files) throws IOException {
     for (Path stale : files.rectifiedOfAnyEnding()) {
       Files.deleteIfExists(stale);
     }
     Files.deleteIfExists(files.mask());
     Files.deleteIfExists(files.mapping());
-    FitDocument fit = FitDocument.failed(result, inputs);
+    writePage(fitted, Optional.empty(), files);
+    FitDocument fit =
+        FitDocument.failed(fitted.result(), fitted.inputs())
+            .withOutputs(digests(List.of(files.page())));
     WholeFile.write(files.fit(), FitWriter.text(fit));
     return fit;
   }
 
-  private record Fitted(PhotoTask task, Optional<Photo> photo, FitResult result) {}
-
-  private FitDocument write(Fitted fitted, List<Digest> inputs, ResultFiles files)
-      throws IOException {
-    Sight sight = fitted.result().sight();
-    List<String> names = fitted.result().estimates().names();
-    SightOptics optics = SightOptics.of(sight, names);
-    List<Path> outputs = new ArrayList<>();
-    WholeFile.write(
-        files.mapping(), MappingCsv.text(MappingRow.of(optics, fitted.result().estimates())));
-    outputs.add(files.mapping());
-    if (redraw && fitted.photo().isPresent()) {
-      Redrawing redrawing = new Redrawing(optics, threads);
-      outputs.addAll(redrawing.write(fitted.photo().get(), fitted.task().photo().get(), files));
+  private FitDocument write(Fitted fitted, ResultFiles files) throws IOException {
+    FitResult result = fitted.result();
+    SightOptics optics = SightOptics.of(result.sight(), result.estimates().names());
+    WholeFile.write(files.mapping(), MappingCsv.text(MappingRow.of(optics, result.estimates())));
+    List<Path> outputs = new ArrayList<>(List.of(files.mapping(), files.page()));
+    Optional<Rectified> redrawn =
+        fitted.photo().filter(p -> redraw).map(new Redrawing(optics, threads)::redraw);
+    if (redrawn.isPresent()) {
+      outputs.addAll(Redrawing.write(redrawn.get(), fitted.task().photo().get(), files));
     }
-    FitDocument fit = FitDocument.of(fitted.result(), optics, inputs).withOutputs(digests(outputs));
+    writePage(fitted, redrawn, files);
+    FitDocument fit = FitDocument.of(result, optics, fitted.inputs()).withOutputs(digests(outputs));
     WholeFile.write(files.fit(), FitWriter.text(fit));
     return fit;
   }
+
+  private static void writePage(Fitted fitted, Optional<Rectified> redrawn, ResultFiles files)
+      throws IOException {
+    Provenance provenance = new Provenance(fitted.inputs(), ProgramVersion.name());
+    ReportInput input =
+        new ReportInput(
+            fitted.task().label(), fitted.result(), fitted.photo(), redrawn, provenance);
+    WholeFile.write(files.page(), new PhotoReport(input).html());
+  }
+
+  private record Fitted(
+      PhotoTask task, Optional<Photo> photo, FitResult result, List<Digest> inputs) {}
 
   private static List<Digest> digests(List<Path> files) throws IOException {
     List<Digest> digests = new ArrayList<>();

@@ -14,6 +14,7 @@ import plumbray.imaging.measure.MappingRow;
 import plumbray.imaging.photo.Photo;
 import plumbray.imaging.photo.PhotoException;
 import plumbray.imaging.photo.PhotoReader;
+import plumbray.imaging.rectify.Rectified;
 
 /** Redraws a photo with a sight of which all is known. */
 public final class RectifyWorker {
@@ -34,8 +35,8 @@ public final class RectifyWorker {
     HeldSight held = HeldSight.read(heldFile);
     SightOptics optics = Tracing.optics(heldFile, held.sight(), held.estimates().names());
     ResultFiles files = new ResultFiles(folder, BatchPhoto.resultName(photoFile));
-    List<Path> written =
-        new Redrawing(optics, threads).write(photo(held, photoFile), photoFile, files);
+    Rectified rectified = new Redrawing(optics, threads).redraw(photo(held, photoFile));
+    List<Path> written = Redrawing.write(rectified, photoFile, files);
     WholeFile.write(files.mapping(), MappingCsv.text(MappingRow.of(optics, held.estimates())));
     return written.get(0);
   }

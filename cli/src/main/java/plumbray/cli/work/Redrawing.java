@@ -29,17 +29,26 @@ final class Redrawing {
     this.threads = threads;
   }
 
+  /** The photo as the sight's straight rays would show it, each colour by its own wavelength. */
+  Rectified redraw(Photo photo) {
+    Sight sight = optics.sight();
+    boolean colours =
+        photo.shape().lightChannels() == COLOURS
+            && sight.air().channelWavelengthsM().size() == COLOURS;
+    return colours ? byColours(photo) : Rectifier.rectify(photo, map(optics), threads);
+  }
+
   /**
-   * Redraws a photo.
+   * Writes a redrawn photo and its mask.
    *
-   * @param photo the photo
-   * @param photoFile its file, whose ending the redrawn one keeps where it can
+   * @param rectified the redrawn photo
+   * @param photoFile the photo's file, whose ending the redrawn one keeps where it can
    * @param files where the results go
    * @return the files written
    * @throws IOException when one cannot be written
    */
-  List<Path> write(Photo photo, Path photoFile, ResultFiles files) throws IOException {
-    Rectified rectified = redrawn(photo);
+  static List<Path> write(Rectified rectified, Path photoFile, ResultFiles files)
+      throws IOException {
     String name = photoFile.getFileName().toString();
     Path picture = files.rectified(PhotoFormat.extensionFor(name, rectified.picture().shape()));
     Files.createDirectories(files.folder());
@@ -50,14 +59,6 @@ final class Redrawing {
       throw new IOException(e.getMessage(), e);
     }
     return List.of(picture, files.mask());
-  }
-
-  private Rectified redrawn(Photo photo) {
-    Sight sight = optics.sight();
-    boolean colours =
-        photo.shape().lightChannels() == COLOURS
-            && sight.air().channelWavelengthsM().size() == COLOURS;
-    return colours ? byColours(photo) : Rectifier.rectify(photo, map(optics), threads);
   }
 
   /** Each colour through the air as it is for its own wavelength; the mask is that of green. */

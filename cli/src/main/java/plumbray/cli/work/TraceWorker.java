@@ -6,10 +6,14 @@ import java.util.List;
 import plumbray.calibration.quantity.Parameter;
 import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.SightParameters;
+import plumbray.cli.document.Digest;
 import plumbray.cli.document.MappingCsv;
+import plumbray.cli.document.ProgramVersion;
 import plumbray.cli.document.SightReader;
 import plumbray.cli.document.TemperatureCsv;
 import plumbray.cli.document.WholeFile;
+import plumbray.cli.report.Provenance;
+import plumbray.cli.report.SightReport;
 import plumbray.imaging.fit.Estimates;
 import plumbray.imaging.fit.SightLine;
 import plumbray.imaging.fit.SightOptics;
@@ -24,7 +28,7 @@ public final class TraceWorker {
   private TraceWorker() {}
 
   /**
-   * Writes the mapping, and the temperature against height.
+   * Writes the mapping, the temperature against height, and the page that shows both.
    *
    * @param sightFile the sight file
    * @param files where the results go
@@ -32,11 +36,15 @@ public final class TraceWorker {
    * @throws IOException when a file cannot be written
    */
   public static List<SightLine> trace(Path sightFile, ResultFiles files) throws IOException {
-    Sight sight = SightReader.read(sightFile);
+    byte[] text = SightReader.bytes(sightFile);
+    Sight sight = SightReader.read(sightFile.toString(), text);
     Estimates known = knownBeforehand(sight);
     SightOptics optics = Tracing.optics(sightFile, sight, known.names());
     WholeFile.write(files.mapping(), MappingCsv.text(MappingRow.of(optics, known)));
     WholeFile.write(files.temperatures(), TemperatureCsv.text(TemperatureRow.of(sight, known)));
+    Digest input = Digest.of(sightFile.getFileName().toString(), text);
+    Provenance provenance = new Provenance(List.of(input), ProgramVersion.name());
+    WholeFile.write(files.page(), new SightReport(files.name(), sight, known, provenance).html());
     return SightLine.of(optics);
   }
 

@@ -102,7 +102,8 @@ class BatchDriverTest {
   private List<PhotoOutcome> run(Fitting fitting, int jobs, Path folder, List<PhotoTask> tasks)
       throws IOException {
     PhotoWorker worker = new PhotoWorker(fitting, true, 1);
-    return new BatchDriver(worker, folder, jobs, (outcome, finished, total) -> {}).run(tasks);
+    return new BatchDriver(worker, folder, jobs, (outcome, finished, total) -> {})
+        .run("day", List.of(), tasks);
   }
 
   private List<PhotoOutcome> run(List<PhotoTask> tasks) throws IOException {
@@ -125,7 +126,7 @@ class BatchDriverTest {
     assertThat(outcomes).hasSize(4).noneMatch(PhotoOutcome::failed);
     assertThat(digests(out).keySet())
         .contains("p0.fit.json", "p0.rectified.png", "p0.mask.png", "p0.mapping.csv")
-        .contains("p3.fit.json", "summary.csv", "batch.log")
+        .contains("p3.fit.json", "summary.csv", "batch.log", "index.html", "p0.html")
         .noneMatch(name -> name.endsWith(".part"));
     assertThat(Files.readAllLines(out.resolve("summary.csv"))).hasSize(5);
     assertThat(Files.readString(out.resolve("batch.log"))).endsWith("4 of 4 photos are finished\n");
@@ -168,7 +169,8 @@ class BatchDriverTest {
   }
 
   @ParameterizedTest
-  @ValueSource(strings = {"p2.fit.json", "p2.rectified.png", "p2.mask.png", "p2.mapping.csv"})
+  @ValueSource(
+      strings = {"p2.fit.json", "p2.rectified.png", "p2.mask.png", "p2.mapping.csv", "p2.html"})
   void aMissingOrDamagedFileIsMadeAgain(String name) throws IOException {
     List<PhotoTask> tasks = tasks("{\"file\": \"p*.png\"}");
     run(tasks);
@@ -223,7 +225,7 @@ class BatchDriverTest {
     List<Integer> counts = new ArrayList<>();
     PhotoWorker worker = new PhotoWorker(BatchDriverTest::agreeing, true, 1);
     new BatchDriver(worker, out, 2, (outcome, finished, total) -> counts.add(finished))
-        .run(tasks("{\"file\": \"p*.png\"}"));
+        .run("day", List.of(), tasks("{\"file\": \"p*.png\"}"));
     assertThat(counts).containsExactly(1, 2, 3, 4);
   }
 }
