@@ -13,7 +13,9 @@ public enum DocumentFormat {
   /** The photos of a batch. */
   BATCH,
   /** What a fit found. */
-  FIT;
+  FIT,
+  /** A place to be drawn. */
+  SCENE;
 
   /** The schema's text. */
   public String schema() {
