@@ -5,6 +5,7 @@ import java.io.IOException;
 import java.io.OutputStream;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.AtomicMoveNotSupportedException;
+import java.nio.file.FileAlreadyExistsException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.nio.file.StandardCopyOption;
@@ -14,6 +15,8 @@ import java.nio.file.StandardCopyOption;
  * which then takes the file's place in one step.
  */
 public final class WholeFile {
+  private static final int NAMES_TRIED = 1000;
+
   private WholeFile() {}
 
   /** What puts the bytes into the stream; it need not close it. */
@@ -49,7 +52,7 @@ public final class WholeFile {
   public static void write(Path target, Content content) throws IOException {
     Path folder = target.toAbsolutePath().getParent();
     Files.createDirectories(folder);
-    Path part = Files.createTempFile(folder, "." + target.getFileName(), ".part");
+    Path part = newPart(folder, target.getFileName().toString());
     try {
       try (OutputStream out = new BufferedOutputStream(Files.newOutputStream(part))) {
         content.writeTo(out);
@@ -58,6 +61,19 @@ public final class WholeFile {
     } finally {
       Files.deleteIfExists(part);
     }
+  }
+
+  /** An empty file beside the target, with the rights new files get there. */
+  private static Path newPart(Path folder, String name) throws IOException {
+    for (int i = 0; i < NAMES_TRIED; i++) {
+      try {
+        return Files.createFile(folder.resolve("." + name + "." + i + ".part"));
+      } catch (FileAlreadyExistsException e) {
+        // another writer's, or left behind by a crash: take the next name
+        continue;
+      }
+    }
+    throw new IOException("too many unfinished files beside " + folder.resolve(name));
   }
 
   private static void takePlace(Path part, Path target) throws IOException {
