@@ -22,7 +22,11 @@ final class PublishedChecks {
             SurveyorsCoefficient.checks(),
             SightSag.checks(),
             SeaHorizon.checks(),
-            GrazingAngles.checks())
+            GrazingAngles.checks(),
+            SurfaceLayer.checks(),
+            SlopingLevelling.checks(),
+            StandardAtmosphere.checks(),
+            TwoLayerAtmosphere.checks())
         .flatMap(List::stream);
   }
 }
