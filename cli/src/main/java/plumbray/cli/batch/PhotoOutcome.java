@@ -2,8 +2,10 @@ package plumbray.cli.batch;
 
 import java.util.Objects;
 import java.util.Optional;
+import java.util.stream.Collectors;
 import plumbray.cli.document.FitDocument;
 import plumbray.imaging.fit.FitStatus;
+import plumbray.imaging.fit.Warning;
 
 /**
  * What came of one photo of a batch.
@@ -43,9 +45,12 @@ public record PhotoOutcome(
     line.append(fit.map(FitDocument::status).orElse(FitStatus.FAILED).key());
     line.append(kept ? " (kept, nothing has changed)" : "");
     error.ifPresent(text -> line.append(": ").append(text));
-    fit.ifPresent(
-        document ->
-            document.warnings().forEach(warning -> line.append("; ").append(warning.message())));
+    String warnings =
+        fit.stream()
+            .flatMap(document -> document.warnings().stream())
+            .map(Warning::message)
+            .collect(Collectors.joining(" "));
+    line.append(warnings.isEmpty() ? "" : ": " + warnings);
     return line.toString();
   }
 }

@@ -3,6 +3,7 @@ package plumbray.cli.document;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.stream.Collectors;
 import plumbray.calibration.quantity.Quantity;
 import plumbray.imaging.fit.Estimates;
@@ -35,6 +36,8 @@ public final class SummaryCsv {
           "hidden_below_m",
           "images_most");
   private static final int DIGITS = 7;
+  private static final int ROW = 2;
+  private static final int METRE = 4;
 
   private final CsvTable table = new CsvTable(HEADER);
 
@@ -63,9 +66,9 @@ public final class SummaryCsv {
         failed ? "" : digits(Unit.MILLIRADIAN.spanFromSi(sigmaPitchRad(fit.estimates()))),
         far.map(line -> digits(line.localRefractionCoefficient())).orElse(""),
         far.map(line -> Numbers.shortest(line.distanceM())).orElse(""),
-        far.map(line -> digits(line.vanishingLineRowPx().orElse(Double.NaN))).orElse(""),
-        far.map(line -> digits(line.lowestVisibleHeightM().orElse(Double.NaN))).orElse(""),
-        far.map(line -> digits(line.hiddenBelowM().orElse(Double.NaN))).orElse(""),
+        far.map(line -> fixed(line.vanishingLineRowPx(), ROW)).orElse(""),
+        far.map(line -> fixed(line.lowestVisibleHeightM(), METRE)).orElse(""),
+        far.map(line -> fixed(line.hiddenBelowM(), METRE)).orElse(""),
         far.map(line -> String.valueOf(line.imagesMost())).orElse(""));
   }
 
@@ -89,6 +92,10 @@ public final class SummaryCsv {
   private static double sigmaPitchRad(Estimates estimates) {
     int index = estimates.indexOf("camera.pitchRad");
     return index < 0 ? 0.0 : estimates.sigmas()[index];
+  }
+
+  private static String fixed(OptionalDouble value, int decimals) {
+    return Numbers.fixed(value.orElse(Double.NaN), decimals);
   }
 
   private static String digits(double value) {

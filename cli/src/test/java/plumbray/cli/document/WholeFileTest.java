@@ -37,6 +37,15 @@ class WholeFileTest {
     assertThat(names(folder)).containsExactly("a.txt");
   }
 
+  @Test
+  void theFileMayBeReadByWhomAnyNewFileMay(@TempDir Path folder) throws IOException {
+    Path plain = Files.createFile(folder.resolve("plain.txt"));
+    Path target = folder.resolve("a.txt");
+    WholeFile.write(target, "text");
+    assertThat(Files.getPosixFilePermissions(target))
+        .isEqualTo(Files.getPosixFilePermissions(plain));
+  }
+
   private static String[] names(Path folder) throws IOException {
     try (Stream<Path> files = Files.list(folder)) {
       return files.map(file -> file.getFileName().toString()).toArray(String[]::new);
