@@ -175,7 +175,7 @@ class CommandsTest {
   }
 
   @ParameterizedTest
-  @ValueSource(strings = {"sight", "batch", "fit"})
+  @ValueSource(strings = {"sight", "batch", "fit", "scene"})
   void schemaPrintsTheSchemaOfAFormat(String format) {
     assertThat(run("schema", format, "--quiet")).isZero();
     assertThat(out.toString()).contains("https://json-schema.org/draft/2020-12/schema");

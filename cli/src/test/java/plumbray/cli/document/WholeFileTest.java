@@ -8,6 +8,8 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.condition.DisabledOnOs;
+import org.junit.jupiter.api.condition.OS;
 import org.junit.jupiter.api.io.TempDir;
 
 class WholeFileTest {
@@ -38,6 +40,7 @@ class WholeFileTest {
   }
 
   @Test
+  @DisabledOnOs(OS.WINDOWS)
   void theFileMayBeReadByWhomAnyNewFileMay(@TempDir Path folder) throws IOException {
     Path plain = Files.createFile(folder.resolve("plain.txt"));
     Path target = folder.resolve("a.txt");
