@@ -58,22 +58,32 @@ public final class PolygonShape implements Shape {
     return noEdgeNear(box) && !holds(box.leftM(), box.bottomM());
   }
 
-  /** Whether no edge's own rectangle touches the box: enough to know that no edge crosses it. */
+  /** Whether no edge of the polygon touches the rectangle. */
   private boolean noEdgeNear(Extent box) {
     for (int i = 0, j = cornersM.length - 1; i < cornersM.length; j = i++) {
-      double[] a = cornersM[i];
-      double[] b = cornersM[j];
-      Extent edge =
-          new Extent(
-              Math.min(a[0], b[0]),
-              Math.max(a[0], b[0]),
-              Math.min(a[1], b[1]),
-              Math.max(a[1], b[1]));
-      if (edge.meets(box)) {
+      if (touches(cornersM[i], cornersM[j], box)) {
         return false;
       }
     }
     return true;
+  }
+
+  /** Whether the line from a to b touches the rectangle: their shadows overlap on all axes. */
+  private static boolean touches(double[] a, double[] b, Extent box) {
+    Extent around =
+        new Extent(
+            Math.min(a[0], b[0]), Math.max(a[0], b[0]), Math.min(a[1], b[1]), Math.max(a[1], b[1]));
+    if (!around.meets(box)) {
+      return false;
+    }
+    double across = b[0] - a[0];
+    double up = b[1] - a[1];
+    double middle = up * (box.leftM() + box.rightM() - 2 * a[0]);
+    double side = middle - across * (box.bottomM() + box.topM() - 2 * a[1]);
+    double reach =
+        Math.abs(up) * (box.rightM() - box.leftM())
+            + Math.abs(across) * (box.topM() - box.bottomM());
+    return Math.abs(side) <= reach;
   }
 
   @Override
