@@ -21,6 +21,9 @@ final class DisplacementSection implements Section {
   };
   private static final double MM_PER_M = 1e3;
 
+  /** Beyond this a height is not determined at all, and digits would only pretend. */
+  private static final double MOST_SIGMA_M = 10.0;
+
   private final SightOptics optics;
   private final HeightReader reader;
   private final boolean spread;
@@ -44,7 +47,9 @@ final class DisplacementSection implements Section {
                 ? " The last column is the standard deviation of a height read there, from"
                     + " what is not known exactly of the air and the camera, without the pointing."
                 : ""));
+    page.open("div", "class", "pair");
     for (SightMapping mapping : optics.mappings()) {
+      page.open("div");
       page.leaf("h3", "At " + Metres.text(mapping.distanceM()));
       Table table =
           spread
@@ -55,8 +60,9 @@ final class DisplacementSection implements Section {
       double top = MappingSection.topM(optics.sight(), mapping.distanceM());
       DoubleStream.of(HEIGHTS_M).filter(h -> h <= top).forEach(h -> addRows(table, mapping, h));
       table.addTo(page);
+      page.close();
     }
-    page.close();
+    page.close().close();
   }
 
   private void addRows(Table table, SightMapping mapping, double heightM) {
@@ -86,7 +92,9 @@ final class DisplacementSection implements Section {
 
   private String sigma(double row, double distanceM) {
     HeightReading reading = reader.read(optics.camera().principalU(), row, distanceM, 0.0);
-    return NumberText.sigma(reading.sigmaM() * MM_PER_M);
+    return reading.sigmaM() > MOST_SIGMA_M
+        ? "over " + NumberText.fixed(MOST_SIGMA_M * MM_PER_M, 0)
+        : NumberText.sigma(reading.sigmaM() * MM_PER_M);
   }
 
   private static String height(double heightM) {

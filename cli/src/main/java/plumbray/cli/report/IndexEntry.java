@@ -1,7 +1,7 @@
 package plumbray.cli.report;
 
+import java.util.List;
 import java.util.Optional;
-import java.util.stream.Collectors;
 import plumbray.cli.document.FitDocument;
 import plumbray.imaging.fit.FitStatus;
 import plumbray.imaging.fit.Warning;
@@ -39,13 +39,22 @@ public record IndexEntry(
     if (fit.status() == FitStatus.FAILED) {
       return failed(name, page, fit.error().orElse(""));
     }
-    String reasons = fit.warnings().stream().map(Warning::message).collect(Collectors.joining(" "));
     return new IndexEntry(
         name,
         page,
-        new Reason(fit.status(), reasons),
+        new Reason(fit.status(), reason(fit.warnings())),
         fit.residuals().rmsPx(),
         KeyNumbers.of(fit.sight(), fit.estimates(), fit.sightLines()));
+  }
+
+  /** The first reason; the others are on the photo's own page. */
+  private static String reason(List<Warning> warnings) {
+    List<String> messages = warnings.stream().map(Warning::message).distinct().toList();
+    return switch (messages.size()) {
+      case 0 -> "";
+      case 1 -> messages.get(0);
+      default -> messages.get(0) + " (and " + (messages.size() - 1) + " more)";
+    };
   }
 
   /** The entry of a photo that failed. */

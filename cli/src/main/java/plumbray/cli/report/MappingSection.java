@@ -32,6 +32,8 @@ final class MappingSection implements Section {
   private static final double MRAD_PER_RAD = 1e3;
   private static final double WIDTH_PX = 500;
   private static final double HEIGHT_PX = 400;
+  private static final double SMALL_WIDTH_PX = 430;
+  private static final double SMALL_HEIGHT_PX = 300;
 
   /** Heights of interest reach so many times as high as the camera. */
   private static final double REACH = 2.0;
@@ -50,28 +52,54 @@ final class MappingSection implements Section {
         "p",
         "Each height above the ground is seen in the direction that the curve gives. Where two"
             + " branches show one height, it is seen twice; below the lowest point of the curves"
-            + " nothing is seen. Beside each plot, on its scale of elevations, stands a striped"
+            + " nothing is seen. Beside the large plots, on its scale of elevations, stands a striped"
             + " staff: at the left as it is, at the right as the camera sees it.");
-    optics.mappings().forEach(mapping -> addMapping(page, mapping));
-    page.close();
+    List<SightMapping> all = optics.mappings();
+    List<SightMapping> large = all.stream().filter(m -> all.size() <= 2 || holds(m)).toList();
+    List<SightMapping> small = all.stream().filter(m -> !large.contains(m)).toList();
+    large.forEach(mapping -> addLarge(page, mapping));
+    page.open("div", "class", "pair");
+    small.forEach(mapping -> addSmall(page, mapping));
+    page.close().close();
   }
 
-  private void addMapping(Markup page, SightMapping mapping) {
+  /** Whether a reference stands at the distance. */
+  private boolean holds(SightMapping mapping) {
+    return optics.sight().references().stream()
+        .anyMatch(reference -> reference.distanceM() == mapping.distanceM());
+  }
+
+  private void addLarge(Markup page, SightMapping mapping) {
     double top = topM(optics.sight(), mapping.distanceM());
     List<Line> lines = lines(mapping, top);
-    Axis y =
-        Axis.around(
-            "Apparent elevation (mrad)",
-            lines.stream().flatMapToDouble(line -> DoubleStream.of(line.ys())));
+    Axis y = apparentAxis(lines);
     page.open("div", "class", "mapping");
     page.leaf("h3", "At " + Metres.text(mapping.distanceM()));
     page.open("div", "class", "beside");
-    page.add(
-        plot(mapping, lines, new Axis("Height above ground (m)", AxisKind.LINEAR, 0.0, top), y));
+    page.add(plot(mapping, lines, heightAxis(top), y).svg(WIDTH_PX, HEIGHT_PX));
     StaffSketch sketch =
         new StaffSketch(
             mapping, optics.straight(), top, y.low() / MRAD_PER_RAD, y.high() / MRAD_PER_RAD);
     page.add(sketch.svg()).close().close();
+  }
+
+  private void addSmall(Markup page, SightMapping mapping) {
+    double top = topM(optics.sight(), mapping.distanceM());
+    List<Line> lines = lines(mapping, top);
+    page.open("div", "class", "mapping");
+    page.leaf("h3", "At " + Metres.text(mapping.distanceM()));
+    Plot plot = plot(mapping, lines, heightAxis(top), apparentAxis(lines));
+    page.add(plot.svg(SMALL_WIDTH_PX, SMALL_HEIGHT_PX)).close();
+  }
+
+  private static Axis heightAxis(double topM) {
+    return new Axis("Height above ground (m)", AxisKind.LINEAR, 0.0, topM);
+  }
+
+  private static Axis apparentAxis(List<Line> lines) {
+    return Axis.around(
+        "Apparent elevation (mrad)",
+        lines.stream().flatMapToDouble(line -> DoubleStream.of(line.ys())));
   }
 
   /** Greatest height above the ground that is of interest at a distance, m. */
@@ -99,7 +127,7 @@ final class MappingSection implements Section {
     return lines;
   }
 
-  private static Markup plot(SightMapping mapping, List<Line> lines, Axis x, Axis y) {
+  private static Plot plot(SightMapping mapping, List<Line> lines, Axis x, Axis y) {
     String distance = Metres.text(mapping.distanceM());
     Plot plot = new Plot("Apparent elevation against height at " + distance, x, y);
     OptionalDouble vanishing = mapping.vanishingLineRad();
@@ -112,7 +140,7 @@ final class MappingSection implements Section {
               new Stroke(Ink.GREEN, Dash.DOTTED, 1.6)));
     }
     lines.forEach(plot::add);
-    return plot.svg(WIDTH_PX, HEIGHT_PX);
+    return plot;
   }
 
   private static Line curve(Branch branch, double groundM, double topM, boolean named) {

@@ -20,15 +20,18 @@ enum MaskTint {
       return Math.floorMod(y, 6) < 1;
     }
   },
-  /** Beyond the photo: plain. */
-  OUTSIDE(MaskPlane.OUTSIDE, 0x66727a, "outside the photo") {
+  /** Beyond the photo, where there is nothing to shine through: plain. */
+  OUTSIDE(MaskPlane.OUTSIDE, 0xc3cad0, "outside the photo") {
     @Override
     boolean line(int x, int y) {
-      return false;
+      return true;
     }
   };
 
   private static final double WASH = 0.30;
+
+  /** Width at which pages show a picture, px: the lines are as wide as they look there. */
+  private static final int SHOWN_PX = 560;
 
   private final int code;
   private final int rgb;
@@ -50,13 +53,14 @@ enum MaskTint {
   /** A picture scaled down from one with that mask, with the tints over it. */
   static Raster over(Raster picture, MaskPlane mask) {
     Raster tinted = Raster.blank(picture.width(), picture.height());
+    int step = Math.max(1, picture.width() / SHOWN_PX);
     for (int y = 0; y < picture.height(); y++) {
       int v = (int) ((y + 0.5) * mask.heightPx() / picture.height());
       for (int x = 0; x < picture.width(); x++) {
         int u = (int) ((x + 0.5) * mask.widthPx() / picture.width());
         int rgb = picture.at(x, y);
         Optional<MaskTint> tint = ofCode(mask.at(u, v));
-        tinted.set(x, y, tint.isPresent() ? tint.get().over(rgb, x, y) : rgb);
+        tinted.set(x, y, tint.isPresent() ? tint.get().over(rgb, x / step, y / step) : rgb);
       }
     }
     return tinted;

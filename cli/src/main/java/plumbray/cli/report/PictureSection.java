@@ -97,7 +97,7 @@ final class PictureSection implements Section {
       words.add("framed: the references");
     }
     if (lines.stream().anyMatch(line -> line.vanishingLineRowPx().isPresent())) {
-      words.add("dashed: vanishing lines");
+      words.add("dashed: vanishing lines, with their distances");
     }
     String all = String.join("; ", words);
     return all.isEmpty() ? "" : " " + Character.toUpperCase(all.charAt(0)) + all.substring(1) + ".";
@@ -108,15 +108,30 @@ final class PictureSection implements Section {
     for (Reference reference : sight.references()) {
       reference.imageBox().ifPresent(box -> frame(page, box, stroke));
     }
-    for (SightLine line : lines) {
-      if (line.vanishingLineRowPx().isPresent()) {
-        double v = line.vanishingLineRowPx().getAsDouble() + 0.5;
-        String path = "M0 " + coordinate(v) + "H" + source.width();
-        stroked(page, path, "#ffffff", stroke, "none");
-        stroked(
-            page, path, "#1c2a33", stroke, coordinate(6 * stroke) + " " + coordinate(4 * stroke));
-      }
-    }
+    lines.stream()
+        .filter(line -> line.vanishingLineRowPx().isPresent())
+        .forEach(line -> vanishingLine(page, line, source.width()));
+  }
+
+  private static void vanishingLine(Markup page, SightLine line, int width) {
+    double stroke = width / 400.0;
+    double v = line.vanishingLineRowPx().orElseThrow() + 0.5;
+    String path = "M0 " + coordinate(v) + "H" + width;
+    stroked(page, path, "#ffffff", stroke, "none");
+    stroked(page, path, "#1c2a33", stroke, coordinate(6 * stroke) + " " + coordinate(4 * stroke));
+    page.leaf(
+        "text",
+        Metres.text(line.distanceM()),
+        "x",
+        coordinate(width - 3 * stroke),
+        "y",
+        coordinate(v - 2 * stroke),
+        "font-size",
+        coordinate(9 * stroke),
+        "text-anchor",
+        "end",
+        "class",
+        "over");
   }
 
   private static void frame(Markup page, ImageBox box, double stroke) {

@@ -1,5 +1,6 @@
 package plumbray.cli.report;
 
+import java.util.LinkedHashSet;
 import java.util.List;
 import plumbray.cli.report.markup.Markup;
 import plumbray.cli.report.markup.NumberText;
@@ -10,6 +11,9 @@ import plumbray.imaging.fit.Warning;
 
 /** Whether the result can be trusted, why not, and the numbers that matter most. */
 final class VerdictSection implements Section {
+
+  /** What is hidden below this height is not worth a word. */
+  private static final double LEAST_HIDDEN_M = 0.005;
 
   private final FitResult result;
   private final KeyNumbers key;
@@ -31,9 +35,9 @@ final class VerdictSection implements Section {
     page.leaf("p", verdict.meaning());
     result.error().ifPresent(error -> page.leaf("p", error, "class", "error"));
     if (!result.warnings().isEmpty()) {
-      page.leaf("h2", result.warnings().size() == 1 ? "The reason" : "The reasons");
+      page.leaf("h2", verdict == Verdict.GOOD ? "To keep in mind" : "Why");
       page.open("ul");
-      for (Warning warning : result.warnings()) {
+      for (Warning warning : new LinkedHashSet<>(result.warnings())) {
         page.open("li").text(warning.message() + " ");
         page.leaf("code", warning.code()).close();
       }
@@ -44,39 +48,38 @@ final class VerdictSection implements Section {
   }
 
   private void figures(Markup page) {
-    Residuals residuals = result.residuals();
     page.open("dl", "class", "figures");
     if (Double.isFinite(key.groundExcessK())) {
-      String sigma = key.groundExcessSigmaK() > 0.0 ? spread(key.groundExcessSigmaK()) : "";
-      figure(
-          page,
-          key.groundExcessK() >= 0.0 ? "Ground warmer than camera" : "Ground colder than camera",
-          NumberText.within(Math.abs(key.groundExcessK()), key.groundExcessSigmaK())
-              + sigma
-              + " K");
-      figure(page, "Gradient at the camera", NumberText.fixed(key.gradientKPerM(), 3) + " K/m");
-      figure(
-          page, "Refraction coefficient there", NumberText.fixed(key.refractionCoefficient(), 2));
+      air(page);
     }
     if (Double.isFinite(key.hiddenBelowM())) {
       figure(
           page,
           "Hidden at " + Metres.text(lines.get(lines.size() - 1).distanceM()),
-          "below " + NumberText.fixed(key.hiddenBelowM(), 2) + " m");
+          key.hiddenBelowM() < LEAST_HIDDEN_M
+              ? "nothing"
+              : "below " + NumberText.fixed(key.hiddenBelowM(), 2) + " m");
     }
+    Residuals residuals = result.residuals();
     if (residuals.count() > 0) {
-      figure(
-          page,
-          "Left unexplained",
-          NumberText.significant(residuals.rmsPx(), 2)
-              + " px rms in "
-              + residuals.count()
-              + " rows");
+      String rms = NumberText.significant(residuals.rmsPx(), 2);
+      figure(page, "Left unexplained", rms + " px rms in " + residuals.count() + " rows");
     }
     if (result.jitterPx() > 0.0) {
       figure(page, "Shimmer", NumberText.significant(result.jitterPx(), 2) + " px");
     }
     page.close();
+  }
+
+  private void air(Markup page) {
+    double excess = key.groundExcessK();
+    double sigma = key.groundExcessSigmaK();
+    figure(
+        page,
+        excess >= 0.0 ? "Ground warmer than camera" : "Ground colder than camera",
+        NumberText.within(Math.abs(excess), sigma) + (sigma > 0.0 ? spread(sigma) : "") + " K");
+    figure(page, "Gradient at the camera", NumberText.fixed(key.gradientKPerM(), 3) + " K/m");
+    figure(page, "Refraction coefficient there", NumberText.fixed(key.refractionCoefficient(), 2));
   }
 
   private static String spread(double sigma) {

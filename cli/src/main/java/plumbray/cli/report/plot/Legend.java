@@ -11,7 +11,7 @@ final class Legend {
 
   private static final double KEY_PX = 26.0;
   private static final double GAP_PX = 6.0;
-  private static final double BETWEEN_PX = 16.0;
+  private static final double BETWEEN_PX = 12.0;
   private static final double LINE_PX = 17.0;
 
   private record Entry(Mark mark, double x, int line) {}
