@@ -153,6 +153,34 @@ class CommandsTest {
   }
 
   @Test
+  void measureDoesNotWriteOverItsPoints() throws IOException {
+    Files.writeString(folder.resolve("points.csv"), "name,u,v\ntop,20,19.5\n");
+    String[] measure = {
+      "measure", path("held.sight.json"), path("points.csv"), "--out", path("points.csv")
+    };
+    assertThat(run(measure)).isEqualTo(2);
+    assertThat(err.toString()).contains("is the file of the points, must be another");
+    assertThat(folder.resolve("points.csv")).content().startsWith("name,u,v\ntop");
+  }
+
+  @Test
+  void measureReadsTheDistanceOfTheRegionOrOfThePoint() throws IOException {
+    Files.writeString(
+        folder.resolve("points.csv"), "name,u,v,distance_m\na,20,19.5,\nb,20,19.5,250\n");
+    assertThat(
+            run(
+                "measure",
+                path("held.sight.json"),
+                path("points.csv"),
+                "--out",
+                path("heights.csv")))
+        .isZero();
+    var lines = Files.readAllLines(folder.resolve("heights.csv"));
+    assertThat(lines.get(1)).startsWith("a,20,19.5,500,upright,");
+    assertThat(lines.get(2)).startsWith("b,20,19.5,250,upright,");
+  }
+
+  @Test
   void batchGoesOnAndSaysThatAPhotoFailed() throws IOException {
     Files.writeString(folder.resolve("q.png"), "this is no picture");
     Files.writeString(

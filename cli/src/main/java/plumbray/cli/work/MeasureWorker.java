@@ -1,6 +1,7 @@
 package plumbray.cli.work;
 
 import java.io.IOException;
+import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Optional;
@@ -36,6 +37,12 @@ public final class MeasureWorker {
    * @throws IOException when the file cannot be written
    */
   public static int measure(Path fitFile, Path pointsFile, Path outFile) throws IOException {
+    if (Files.exists(pointsFile)
+        && Files.exists(outFile)
+        && Files.isSameFile(pointsFile, outFile)) {
+      throw new InputException(
+          outFile + ": is the file of the points, must be another (where the heights go)");
+    }
     MeasureWorker worker = new MeasureWorker(HeldSight.read(fitFile), pointsFile);
     List<Point> points = PointsReader.read(pointsFile);
     WholeFile.write(outFile, worker.heights(points));
