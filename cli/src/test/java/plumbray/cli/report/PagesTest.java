@@ -7,20 +7,26 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.regex.Pattern;
+import java.util.stream.DoubleStream;
 import java.util.stream.IntStream;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.w3c.dom.Document;
 import org.w3c.dom.Element;
 import org.w3c.dom.NodeList;
+import plumbray.calibration.sight.Region;
 import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.SightParameters;
 import plumbray.cli.document.FitDocument;
 import plumbray.cli.report.IndexEntry.PageLink;
+import plumbray.cli.report.markup.NumberText;
 import plumbray.imaging.fit.Estimates;
 import plumbray.imaging.fit.FitResult;
 import plumbray.imaging.fit.FitStatus;
 import plumbray.imaging.fit.SightOptics;
+import plumbray.imaging.fit.Warning;
+import plumbray.raymodel.mapping.Branch;
+import plumbray.raymodel.mapping.Sense;
 
 class PagesTest {
 
@@ -169,6 +175,78 @@ class PagesTest {
     String page = new SightReport("plan", sight, known, ReportSamples.provenance()).html();
     assertThat(page).contains("\u03c3 of a height (mm)");
     assertThat(sightPage()).doesNotContain("\u03c3 of a height (mm)");
+  }
+
+  @Test
+  void distancesWithoutAReferenceGetAPlotEachButNoStaffSketch() {
+    Sight one = ReportSamples.asked(15.0);
+    List<Region> regions =
+        DoubleStream.of(300.0, 900.0, 1500.0)
+            .mapToObj(d -> new Region("at " + d, false, d, Optional.empty()))
+            .toList();
+    Sight many =
+        new Sight(
+            one.name(),
+            one.camera(),
+            one.path(),
+            one.air(),
+            one.profile(),
+            one.references(),
+            regions,
+            0.13);
+    String page =
+        new SightReport("plan", many, Estimates.none(), ReportSamples.provenance()).html();
+    List<String> titles = titles(WellFormed.parse(page));
+    assertThat(titles)
+        .contains(
+            "Apparent elevation against height at 300 m",
+            "Apparent elevation against height at 640 m",
+            "Apparent elevation against height at 1500 m");
+    assertThat(titles).containsOnlyOnce("A staff as it stands and as it is seen");
+    assertThat(page).contains("rays of k = 0.13");
+  }
+
+  /** The straight-line mapping of the page must agree with the numbers behind it. */
+  @Test
+  void theDisplacementIsSeemingLessTrueHeight() {
+    SightOptics optics = SightOptics.of(input.result().sight());
+    double distance = ReportSamples.DISTANCE_M;
+    Branch upright =
+        optics.mapping(distance).branches().stream()
+            .filter(b -> b.sense() == Sense.UPRIGHT && b.holdsElevation(0.2))
+            .findFirst()
+            .orElseThrow();
+    double apparent = upright.apparentRad(0.2);
+    double millimetres = 1e3 * (optics.straight().elevationM(apparent, distance) - 0.2);
+    assertThat(photoPage)
+        .containsPattern(
+            "0\\.20</td>\\s*<td class=\"word\">upright</td>\\s*<td class=\"number\">"
+                + Pattern.quote(NumberText.fixed(optics.camera().rowAt(apparent), 1))
+                + "</td>\\s*<td class=\"number\">"
+                + Pattern.quote(NumberText.fixed(millimetres, 0))
+                + "</td>");
+  }
+
+  @Test
+  void theIndexNamesTheFirstReasonAndCountsTheOthers() {
+    FitResult doubtful = input.result();
+    List<Warning> warnings =
+        List.of(
+            new Warning("a", "First."), new Warning("b", "Second."), new Warning("b", "Second."));
+    FitResult more =
+        new FitResult(
+            doubtful.status(),
+            doubtful.error(),
+            warnings,
+            doubtful.asked(),
+            doubtful.sight(),
+            doubtful.estimates(),
+            doubtful.residuals(),
+            doubtful.alternatives(),
+            doubtful.readings(),
+            doubtful.jitterPx());
+    assertThat(IndexEntry.of("x", Optional.empty(), document(more)).verdict().text())
+        .isEqualTo("First. (and 1 more)");
   }
 
   @Test
