@@ -41,14 +41,15 @@ public final class RayFan {
               + path.blockedBelowM()
               + " m (height under which rays are stopped)");
     }
-    List<RayTrace> traces = new FanTracer(medium, path, request, traceToleranceM).trace();
+    FanTracer tracer = new FanTracer(medium, path, request, traceToleranceM);
+    List<RayTrace> traces = tracer.trace();
     double[] distances = request.distancesM();
     List<SightMapping> mappings = new ArrayList<>();
     for (int d = 0; d < distances.length; d++) {
       mappings.add(
           new SightMapping(distances[d], path.ground().elevationM(distances[d]), runs(traces, d)));
     }
-    boolean accurate = traces.stream().allMatch(RayTrace::accurate);
+    boolean accurate = !tracer.exhausted() && traces.stream().allMatch(RayTrace::accurate);
     return new RayFan(mappings, GroundView.of(groundRuns(traces)), traces.size(), accurate);
   }
 
@@ -132,7 +133,10 @@ public final class RayFan {
     return rayCount;
   }
 
-  /** Whether every ray reached the demanded accuracy. */
+  /**
+   * Whether every ray reached the demanded accuracy, and the rays allowed were enough for the
+   * mapping's.
+   */
   public boolean accurate() {
     return accurate;
   }

@@ -8,6 +8,8 @@ import java.util.List;
  */
 final class SumProfile implements TemperatureProfile {
 
+  private static final double CORNER_M = 0.1;
+
   private final ProfileTerm[] terms;
   private final int parameterCount;
 
@@ -52,6 +54,8 @@ final class SumProfile implements TemperatureProfile {
     for (ProfileTerm term : terms) {
       scale = Math.min(scale, term.scaleM(z));
     }
+    // an integrator's own error estimate can miss the corner where the straight line begins
+    scale = Math.min(scale, 0.5 * Math.abs(heightM - LINEAR_ABOVE_M) + CORNER_M);
     // below the ground the line is straight: only the way back up to it counts
     return heightM < 0.0 ? scale - 0.5 * heightM : scale;
   }
