@@ -22,7 +22,7 @@ import plumbray.raymodel.ray.TabulatedMedium;
 public final class SightOptics {
 
   /** Mappings are good to this part of a pixel. */
-  public static final double TOLERANCE_PX = 0.01;
+  public static final double TOLERANCE_PX = 0.005;
 
   private static final double MARGIN = 0.05;
 
