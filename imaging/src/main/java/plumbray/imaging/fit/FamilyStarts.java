@@ -26,33 +26,40 @@ final class FamilyStarts {
   /** Sets of values in the family's order. */
   static List<double[]> of(ProfileSetup profile) {
     ProfileFamily family = profile.family().orElseThrow();
-    double[][] grid =
-        switch (family) {
-          case UNIFORM -> new double[][] {{-3, -1, -0.4, -0.15, -0.0098, 0.1, 0.3, 1}};
-          case EXPONENTIAL -> new double[][] {EXCESS, SCALES, {}};
-          case TWO_SCALE ->
-              new double[][] {
-                {-8, 0, 8, 20}, {0.005, 0.02}, {-15, -5, -2, 2, 5, 12, 25}, {0.05, 0.2, 0.8}, {}
-              };
-          case LOGARITHMIC ->
-              new double[][] {
-                {-4, -2.5, -1.5, -0.8, -0.3, 0.3, 0.8, 2}, {1e-4, 1e-3, 1e-2, 5e-2}, {}
-              };
-          case POWER ->
-              new double[][] {
-                {-8, -3, -1, 0.5, 1, 2, 4, 8, 15}, {-0.5, -0.33, -0.15, 0.2}, {1e-3, 1e-2}, {}
-              };
-          case SIMILARITY ->
-              new double[][] {
-                {-3, -1.5, -0.7, -0.2, 0.1, 0.3, 1}, {-100, -20, -4, -1, 5, 30, 150}, ROUGHNESS
-              };
-          case STEP ->
-              new double[][] {{-8, 3, 8, 15, 25}, {0.5, 1, 2, 4, 7, 12, 20, 30}, {0.3, 1, 3}, {}};
-        };
+    double[][] grid = grid(family);
     List<double[]> starts = new ArrayList<>();
     starts.add(profile.values());
     combine(family, grid, profile, new double[grid.length], 0, starts);
     return starts;
+  }
+
+  /** Values to try for each parameter; none where the value given is the one to start from. */
+  private static double[][] grid(ProfileFamily family) {
+    return switch (family) {
+      case UNIFORM -> new double[][] {{-3, -1, -0.4, -0.15, -0.0098, 0.1, 0.3, 1}};
+      case EXPONENTIAL -> new double[][] {EXCESS, SCALES, {}};
+      case TWO_SCALE ->
+          new double[][] {
+            {-8, 0, 8, 20}, {0.005, 0.02}, {-15, -5, -2, 2, 5, 12, 25}, {0.05, 0.2, 0.8}, {}
+          };
+      case LOGARITHMIC ->
+          new double[][] {{-4, -2.5, -1.5, -0.8, -0.3, 0.3, 0.8, 2}, {1e-4, 1e-3, 1e-2, 5e-2}, {}};
+      case POWER ->
+          new double[][] {
+            {-8, -3, -1, 0.5, 1, 2, 4, 8, 15}, {-0.5, -0.33, -0.15, 0.2}, {1e-3, 1e-2}, {}
+          };
+      case SIMILARITY ->
+          new double[][] {
+            {-3, -1.5, -0.7, -0.2, 0.1, 0.3, 1}, {-100, -20, -4, -1, 5, 30, 150}, ROUGHNESS
+          };
+      case STEP ->
+          new double[][] {
+            {-6, 2, 4, 6, 9, 14, 22},
+            {0.7, 1.5, 3, 5, 7, 9, 12, 16, 22, 30},
+            {0.4, 0.8, 1.5, 3},
+            {}
+          };
+    };
   }
 
   /** An ordinary value of a quantity, on which nothing but the first look depends. */

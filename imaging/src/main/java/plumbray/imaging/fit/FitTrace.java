@@ -11,6 +11,7 @@ import plumbray.raymodel.mapping.Branch;
 import plumbray.raymodel.mapping.FanRequest;
 import plumbray.raymodel.mapping.RayFan;
 import plumbray.raymodel.mapping.SightMapping;
+import plumbray.raymodel.ray.RayTracer;
 import plumbray.raymodel.ray.TabulatedMedium;
 
 /** A sight traced to its references' distances, for one evaluation of a fit. */
@@ -18,6 +19,9 @@ final class FitTrace implements TracedSight {
 
   /** Near the vanishing line the row of an edge runs away; its derivative is cut off here. */
   private static final double LEAST_SLOPE_SHARE = 1e-3;
+
+  /** Local errors of the integration, as a part of what the mapping tolerates. */
+  private static final double TRACE_SHARE = 1e-3;
 
   private final Sight sight;
   private final Camera camera;
@@ -43,6 +47,7 @@ final class FitTrace implements TracedSight {
     Camera camera = sight.camera().camera();
     TreeSet<Double> distances = new TreeSet<>();
     sight.references().stream().map(Reference::distanceM).forEach(distances::add);
+    double farthest = distances.last();
     FanRequest request =
         new FanRequest(
             sight.camera().heightM().value(),
@@ -55,7 +60,9 @@ final class FitTrace implements TracedSight {
         RayFan.trace(
             new TabulatedMedium(SightOptics.column(sight, estimated)),
             sight.path().path(),
-            request);
+            request,
+            Math.max(
+                RayTracer.DEFAULT_TOLERANCE_M, TRACE_SHARE * request.toleranceRad() * farthest));
     return new FitTrace(sight, camera, EstimateLayout.of(sight, estimated), fan);
   }
 

@@ -5,16 +5,23 @@ import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
 import plumbray.calibration.camera.Camera;
+import plumbray.calibration.camera.PixelPoint;
+import plumbray.calibration.quantity.Quantity;
+import plumbray.calibration.sight.CameraSetup;
 import plumbray.calibration.sight.ImageBox;
+import plumbray.calibration.sight.PointMark;
 import plumbray.calibration.sight.PointTarget;
 import plumbray.calibration.sight.Reference;
+import plumbray.calibration.sight.SenseWanted;
 import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.StaffTarget;
 import plumbray.imaging.photo.Photo;
+import plumbray.imaging.reading.EdgeImage;
 import plumbray.imaging.reading.PointObservation;
 import plumbray.imaging.reading.ReferenceObservation;
 import plumbray.imaging.reading.StaffScene;
 import plumbray.imaging.reading.StaffStrip;
+import plumbray.raymodel.mapping.Sense;
 
 /**
  * The references of a sight, read from the photo where they need one.
@@ -23,6 +30,9 @@ import plumbray.imaging.reading.StaffStrip;
  * @param points sets of points
  */
 record References(List<StaffScene> staffs, List<PointObservation> points) {
+
+  private static final double TRACKED_FREE_PX = 15.0;
+  private static final double TRACKED_SIGMA_PX = 1.5;
 
   /** Reads the references. */
   static References read(Sight sight, Optional<Photo> photo) {
@@ -73,6 +83,66 @@ record References(List<StaffScene> staffs, List<PointObservation> points) {
     camera.pixel(direction[0], direction[1] - step, left);
     camera.pixel(direction[0], direction[1] + step, right);
     return (right[1] - left[1]) / (right[0] - left[0]);
+  }
+
+  /** A camera turned, and free to turn on by some pixels at most where its pitch is estimated. */
+  static CameraSetup turned(CameraSetup camera, double byRad, double freePx) {
+    Quantity pitch = camera.pitchRad();
+    double at = pitch.value() + byRad;
+    double free = freePx * camera.camera().radPerPx();
+    Quantity turned = pitch.estimated() ? Quantity.free(at).within(at - free, at + free) : pitch;
+    return new CameraSetup(
+        camera.widthPx(),
+        camera.heightPx(),
+        camera.focalLengthM(),
+        camera.pixelPitchM(),
+        camera.principalPoint(),
+        camera.k1(),
+        camera.k2(),
+        camera.heightM(),
+        turned,
+        camera.rollRad());
+  }
+
+  /** The edges of the staffs as points, where a start puts them; points stay as they are. */
+  References tracked(Sight sight, SlideScore.Start start) {
+    Sight at =
+        sight
+            .withProfile(start.profile())
+            .withCamera(turned(sight.camera(), start.pitchShiftRad(), TRACKED_FREE_PX));
+    FitTrace trace =
+        FitTrace.of(at, List.of(), SightOptics.elevationRange(at.camera().camera()), 0.3);
+    List<PointObservation> all = new ArrayList<>(points);
+    for (StaffScene staff : staffs) {
+      List<PointMark> marks = new ArrayList<>();
+      for (EdgeImage edge : staff.edges(trace)) {
+        marks.add(
+            new PointMark(
+                edge.heightM(),
+                new PixelPoint(staff.strip().columnPx(), edge.row()),
+                TRACKED_SIGMA_PX,
+                edge.sense() == Sense.UPRIGHT ? SenseWanted.UPRIGHT : SenseWanted.INVERTED));
+      }
+      all.add(
+          new PointObservation(
+              staff.reference(),
+              sight.references().get(staff.reference()),
+              new PointTarget(marks)));
+    }
+    return new References(List.of(), all);
+  }
+
+  /** The staffs' edges that the strips show near where a traced sight puts them, and the points. */
+  List<ReferenceObservation> matched(Sight sight, FitTrace trace) {
+    List<ReferenceObservation> all = new ArrayList<>(points);
+    for (StaffScene staff : staffs) {
+      List<PointMark> marks = staff.matched(trace, TRACKED_SIGMA_PX);
+      if (!marks.isEmpty()) {
+        Reference reference = sight.references().get(staff.reference());
+        all.add(new PointObservation(staff.reference(), reference, new PointTarget(marks)));
+      }
+    }
+    return all;
   }
 
   /** What each reference shows, staffs made into observations by {@code of}, then the points. */

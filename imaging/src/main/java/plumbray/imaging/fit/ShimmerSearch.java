@@ -181,7 +181,7 @@ final class ShimmerSearch {
       int at = edgeColumns.get(s);
       for (int i = 0; i < precision.length; i++) {
         for (int j = 0; j < precision.length; j++) {
-          a[at + i][at + j] += precision[i][j];
+          a[at + i][at + j] += 0.5 * (precision[i][j] + precision[j][i]);
         }
       }
       sum += logDeterminant(k);

@@ -34,7 +34,7 @@ public final class SightFit {
     References references = References.read(sight, photo);
     if (sight.profile().family().isPresent()) {
       FamilyFit fit = new FamilyFit(sight, references);
-      return fit.first()
+      return fit.first(locks(sight, references))
           .map(fit::refine)
           .map(adjusted -> FitReport.of(sight, adjusted, List.of()))
           .orElseGet(() -> FitResult.failed(sight, noStart()));
@@ -81,12 +81,20 @@ public final class SightFit {
    */
   private record Candidate(ProfileFamily family, Sight sight, FamilyFit fit, Adjusted adjusted) {}
 
+  private static List<SlideScore.Start> locks(Sight sight, References references) {
+    return references.staffs().isEmpty()
+            || sight.profile().family().filter(ProfileFamily.STEP::equals).isPresent()
+        ? List.of()
+        : new StartSearch(sight, references).exponential();
+  }
+
   private FitResult best(Sight sight, References references) {
+    List<SlideScore.Start> locks = locks(sight, references);
     List<Candidate> first = new ArrayList<>();
     for (ProfileFamily family : ProfileFamily.values()) {
       Sight open = sight.withProfile(open(family));
       FamilyFit fit = new FamilyFit(open, references);
-      fit.first().ifPresent(a -> first.add(new Candidate(family, open, fit, a)));
+      fit.first(locks).ifPresent(a -> first.add(new Candidate(family, open, fit, a)));
     }
     if (first.isEmpty()) {
       return FitResult.failed(sight, noStart());

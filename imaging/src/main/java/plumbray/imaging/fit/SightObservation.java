@@ -18,14 +18,22 @@ import plumbray.imaging.reading.StaffObservation;
  */
 final class SightObservation implements Observation {
 
-  private static final double TOLERANCE_PX = 0.02;
+  /** How good mappings are for a first look, px. */
+  static final double ROUGH_PX = 0.02;
+
+  /** How good mappings are for the last word: well below what a staff tells, px. */
+  static final double FINE_PX = 0.001;
+
   private static final double MARGIN_PX = 60.0;
 
   private final SightParameters parameters;
   private final List<ReferenceObservation> references;
+  private final double tolerancePx;
 
-  SightObservation(SightParameters parameters, List<ReferenceObservation> references) {
+  SightObservation(
+      SightParameters parameters, List<ReferenceObservation> references, double tolerancePx) {
     this.parameters = parameters;
+    this.tolerancePx = tolerancePx;
     this.references = List.copyOf(references);
   }
 
@@ -85,7 +93,7 @@ final class SightObservation implements Observation {
         sight,
         derivatives ? parameters.names() : List.of(),
         range(sight.camera().camera()),
-        TOLERANCE_PX);
+        tolerancePx);
   }
 
   /** A reference's own values among all. */

@@ -2,176 +2,154 @@ package plumbray.imaging.fit;
 
 import java.util.ArrayList;
 import java.util.Comparator;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import plumbray.calibration.camera.Camera;
 import plumbray.calibration.quantity.Quantity;
-import plumbray.calibration.sight.PointMark;
 import plumbray.calibration.sight.ProfileSetup;
 import plumbray.calibration.sight.Sight;
-import plumbray.imaging.reading.PointObservation;
-import plumbray.imaging.reading.StaffScene;
+import plumbray.imaging.fit.SlideScore.Slide;
+import plumbray.imaging.fit.SlideScore.Start;
+import plumbray.raymodel.profile.ProfileFamily;
 
 /**
- * Looks for starts: for each profile of a coarse grid the staffs' pattern is traced once, and slid
- * along the strips; a change of pitch moves it as a whole.
+ * Looks for starts without any hint: a coarse grid of profiles at every pitch in question gives a
+ * few pitches; a fine grid of simple profiles near those, climbed to the top, finds the staffs'
+ * pattern, whatever family the fit is to be of.
  */
 final class StartSearch {
 
-  private static final double TOLERANCE_PX = 0.3;
-  private static final double PRIOR_REACH = 4.0;
-  private static final double POINT_SPREAD_PX = 1.5;
-  private static final double POINT_CAP = 25.0;
+  private static final int PITCHES = 4;
+  private static final int NEAR_ROWS = 12;
+  private static final int CLIMBS = 4;
+  private static final double RATIO = 1.3;
+
+  /** Profiles whose numbers differ by less than this, in logarithms, lead to the same top. */
+  private static final double CLOSE = 0.6;
+
+  private static final double[] EXCESS_FROM_TO = {1.2, 75.0};
+  private static final double[] SCALE_FROM_TO = {0.006, 4.0};
 
   private final Sight sight;
-  private final References references;
-  private final Camera camera;
-  private final int reachRows;
-  private final int step;
+  private final SlideScore score;
 
   StartSearch(Sight sight, References references) {
-    this.sight = sight;
-    this.references = references;
-    camera = sight.camera().camera();
-    reachRows = reachRows();
-    step = step();
+    this(sight, new SlideScore(sight, references));
   }
 
-  /**
-   * A start.
-   *
-   * @param profile values of the profile, in its family's order
-   * @param pitchShiftRad what to add to the pitch, rad
-   * @param score smaller is better
-   */
-  record Start(double[] profile, double pitchShiftRad, double score) {}
+  StartSearch(Sight sight, SlideScore score) {
+    this.sight = sight;
+    this.score = score;
+  }
 
-  /** The best starts, best first, at most {@code count}. */
-  List<Start> best(int count) {
-    List<Start> starts = new ArrayList<>();
-    for (double[] values : FamilyStarts.of(sight.profile())) {
-      try {
-        starts.addAll(slide(values));
-      } catch (IllegalArgumentException impossible) {
-        // a profile that air cannot have is no start
-        continue;
+  /** Starts of the sight's own family, best first. */
+  List<Start> ofOwnFamily(int count) {
+    ProfileFamily family = sight.profile().family().orElseThrow();
+    List<Start> coarse = coarse(family, FamilyStarts.of(sight.profile()));
+    return climbed(coarse, sight.profile(), count);
+  }
+
+  /** Starts of the family of single exponentials, best first. */
+  List<Start> exponential() {
+    double gradient = gradient();
+    ProfileSetup open = open(gradient);
+    List<Start> coarse = coarse(ProfileFamily.EXPONENTIAL, FamilyStarts.of(open));
+    List<Slide> near = pitches(coarse).stream().map(p -> score.near(p, NEAR_ROWS)).toList();
+    List<Start> fine = new ArrayList<>(coarse);
+    for (double size : range(EXCESS_FROM_TO)) {
+      for (double scale : range(SCALE_FROM_TO)) {
+        for (double excess : new double[] {size, -size}) {
+          double[] values = {excess, scale, gradient};
+          fine.addAll(score.starts(score.profile(ProfileFamily.EXPONENTIAL, values), near));
+        }
       }
+    }
+    fine.sort(Comparator.comparingDouble(Start::score));
+    return climbed(fine, open, CLIMBS);
+  }
+
+  private double gradient() {
+    Quantity q = sight.profile().quantities().get("gradientKPerM");
+    return q == null || sight.profile().quantities().size() == 1 ? -0.0098 : q.value();
+  }
+
+  private ProfileSetup open(double gradient) {
+    return new ProfileSetup(
+        Optional.of(ProfileFamily.EXPONENTIAL),
+        Map.of(
+            "surfaceExcessK", Quantity.free(1.0).within(-200.0, 200.0),
+            "scaleHeightM", Quantity.free(0.1).within(1e-3, 20.0),
+            "gradientKPerM", Quantity.held(gradient)),
+        sight.profile().stability());
+  }
+
+  /** Leaves out profiles close to a better one; the list is sorted. */
+  private static List<Start> distinct(List<Start> sorted, int count) {
+    List<Start> kept = new ArrayList<>();
+    for (Start start : sorted) {
+      if (kept.size() < count && kept.stream().noneMatch(k -> close(k, start))) {
+        kept.add(start);
+      }
+    }
+    return kept;
+  }
+
+  private static boolean close(Start a, Start b) {
+    double[] p = a.profile().values();
+    double[] q = b.profile().values();
+    boolean close = true;
+    for (int i = 0; i < p.length; i++) {
+      close &= p[i] == q[i] || p[i] * q[i] > 0.0 && Math.abs(Math.log(p[i] / q[i])) < CLOSE;
+    }
+    return close;
+  }
+
+  private static List<Double> range(double[] fromTo) {
+    List<Double> values = new ArrayList<>();
+    for (double v = fromTo[0]; v <= fromTo[1]; v *= RATIO) {
+      values.add(v);
+    }
+    return values;
+  }
+
+  private List<Start> coarse(ProfileFamily family, List<double[]> grid) {
+    List<Start> starts = new ArrayList<>();
+    for (double[] values : grid) {
+      starts.addAll(score.starts(score.profile(family, values), List.of(score.everywhere())));
     }
     starts.sort(Comparator.comparingDouble(Start::score));
-    return starts.subList(0, Math.min(count, starts.size()));
+    return starts;
   }
 
-  private int reachRows() {
-    Quantity pitch = sight.camera().pitchRad();
-    if (!pitch.estimated()) {
-      return 0;
-    }
-    double reach =
-        pitch.hasPrior() ? PRIOR_REACH * pitch.sigma() : camera.heightPx() * camera.radPerPx();
-    double bounded =
-        Math.max(
-            Math.min(reach, pitch.value() - pitch.lowest()),
-            Math.min(reach, pitch.highest() - pitch.value()));
-    return (int) Math.ceil(Math.min(bounded / camera.radPerPx(), 2.0 * camera.heightPx()));
-  }
-
-  /** Rows per step of the slide: coarse for long strips, but fine enough to see the bars. */
-  private int step() {
-    int wanted = 1 + reachRows / 600;
-    double finest = 12.0;
-    for (StaffScene staff : references.staffs()) {
-      wanted = Math.max(wanted, 1 + staff.strip().rows() / 400);
-      double distance = sight.references().get(staff.reference()).distanceM();
-      finest = Math.min(finest, 0.3 * staff.meanBarM() / distance / camera.radPerPx());
-    }
-    return (int) Math.max(1, Math.min(wanted, finest));
-  }
-
-  private List<Start> slide(double[] values) {
-    FitTrace trace = FitTrace.of(at(values), List.of(), range(), TOLERANCE_PX);
-    int steps = reachRows / step;
-    double[] score = new double[2 * steps + 1];
-    for (StaffScene staff : references.staffs()) {
-      StripSlide slide = new StripSlide(staff, trace, steps, step);
-      for (int i = 0; i < score.length; i++) {
-        score[i] += slide.score(i - steps);
+  /** The pitches of the best starts, each once. */
+  private List<Double> pitches(List<Start> sorted) {
+    List<Double> pitches = new ArrayList<>();
+    double apart = NEAR_ROWS * sight.camera().camera().radPerPx();
+    for (Start start : sorted) {
+      boolean known = pitches.stream().anyMatch(p -> Math.abs(p - start.pitchShiftRad()) < apart);
+      if (!known && pitches.size() < PITCHES) {
+        pitches.add(start.pitchShiftRad());
       }
     }
-    for (PointObservation points : references.points()) {
-      addPoints(points, trace, score, steps);
-    }
-    Quantity pitch = sight.camera().pitchRad();
-    for (int i = 0; i < score.length; i++) {
-      double shift = (i - steps) * step * camera.radPerPx();
-      double at = pitch.value() + shift;
-      if (at < pitch.lowest() || at > pitch.highest()) {
-        score[i] = Double.POSITIVE_INFINITY;
-      } else if (pitch.hasPrior()) {
-        score[i] += shift * shift / (pitch.sigma() * pitch.sigma());
-      }
-    }
-    return twoBest(values, score, steps);
+    return pitches;
   }
 
-  private List<Start> twoBest(double[] values, double[] score, int steps) {
-    int first = lowest(score, -1);
-    int second = lowest(score, first);
-    List<Start> found = new ArrayList<>();
-    for (int i : new int[] {first, second}) {
-      if (i >= 0 && Double.isFinite(score[i])) {
-        found.add(new Start(values, (i - steps) * step * camera.radPerPx(), score[i]));
-      }
+  private List<Start> climbed(List<Start> sorted, ProfileSetup open, int count) {
+    StartClimb climb =
+        new StartClimb(
+            open,
+            (values, pitch) ->
+                score
+                    .starts(
+                        score.profile(open.family().orElseThrow(), values),
+                        List.of(score.near(pitch, NEAR_ROWS)))
+                    .stream()
+                    .findFirst());
+    List<Start> best = new ArrayList<>();
+    for (Start start : distinct(sorted, count)) {
+      best.add(climb.from(start));
     }
-    return found;
-  }
-
-  /** Index of the lowest score that is not next to {@code not}. */
-  private static int lowest(double[] score, int not) {
-    int best = -1;
-    for (int i = 0; i < score.length; i++) {
-      boolean free = not < 0 || Math.abs(i - not) > 3;
-      if (free && (best < 0 || score[i] < score[best])) {
-        best = i;
-      }
-    }
+    best.sort(Comparator.comparingDouble(Start::score));
     return best;
-  }
-
-  private Sight at(double[] values) {
-    Map<String, Quantity> quantities = new LinkedHashMap<>();
-    int i = 0;
-    for (Map.Entry<String, Quantity> e : sight.profile().quantities().entrySet()) {
-      quantities.put(e.getKey(), Quantity.held(values[i++]));
-    }
-    return sight.withProfile(
-        new ProfileSetup(sight.profile().family(), quantities, sight.profile().stability()));
-  }
-
-  private double[] range() {
-    double[] range = SightOptics.elevationRange(camera);
-    double reach = (reachRows + 100) * camera.radPerPx();
-    return new double[] {Math.max(-1.5, range[0] - reach), Math.min(1.5, range[1] + reach)};
-  }
-
-  private void addPoints(PointObservation points, FitTrace trace, double[] score, int steps) {
-    List<PointMark> marks = points.marks();
-    List<Optional<PointObservation.Seen>> seen = points.seen(trace);
-    for (int m = 0; m < marks.size(); m++) {
-      double variance =
-          marks.get(m).sigmaPx() * marks.get(m).sigmaPx()
-              + POINT_SPREAD_PX * POINT_SPREAD_PX
-              + step * step / 3.0;
-      for (int i = 0; i < score.length; i++) {
-        double add = POINT_CAP;
-        if (seen.get(m).isPresent()) {
-          double miss =
-              marks.get(m).pixel().v() - seen.get(m).get().row() - (i - steps) * (double) step;
-          add = Math.min(POINT_CAP, miss * miss / variance);
-        }
-        score[i] += add;
-      }
-    }
   }
 }

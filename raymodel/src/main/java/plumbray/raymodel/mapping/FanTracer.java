@@ -48,13 +48,16 @@ final class FanTracer {
   /** Intervals narrower than this part of the tolerance are left as they are. */
   private static final double NARROWEST = 0.01;
 
-  private static final double GRAZING_RAD = 1e-13;
-  private static final double TURNING_RAD = 1e-13;
+  /** Grazing and turning rays are found to this part of the mapping's tolerance. */
+  private static final double END_SHARE = 1e-5;
+
+  private static final double FINEST_RAD = 1e-13;
   private static final int ITERATIONS = 60;
 
   private final FanRequest request;
   private final double[] distancesM;
   private final RayTracer tracer;
+  private final double endRad;
 
   /** Largest derivatives so far, by distance and quantity. */
   private final double[][] largest;
@@ -66,6 +69,7 @@ final class FanTracer {
   FanTracer(Medium medium, SightPath path, FanRequest request, double traceToleranceM) {
     this.request = request;
     this.distancesM = request.distancesM();
+    endRad = Math.max(FINEST_RAD, END_SHARE * request.toleranceRad());
     largest = new double[distancesM.length][2 + medium.parameterCount()];
     tracer = new RayTracer(medium, path, distancesM, true, traceToleranceM);
   }
@@ -107,7 +111,7 @@ final class FanTracer {
   /** Appends the rays after {@code a} up to and with {@code b}. */
   private void refine(RayTrace a, RayTrace b, int depth) {
     double width = b.apparentRad() - a.apparentRad();
-    if (depth >= DEEPEST || width <= 4.0 * GRAZING_RAD || budget <= 0) {
+    if (depth >= DEEPEST || width <= 4.0 * endRad || budget <= 0) {
       exhausted |= budget <= 0;
       traces.add(b);
       return;
@@ -138,7 +142,7 @@ final class FanTracer {
     double fLow = clearance(low, target);
     double fHigh = clearance(high, target);
     int kept = 0;
-    for (int i = 0; i < ITERATIONS && high - low > GRAZING_RAD; i++) {
+    for (int i = 0; i < ITERATIONS && high - low > endRad; i++) {
       double mid = falsePosition(low, fLow, high, fHigh, i);
       double f = clearance(mid, target);
       if (f >= 0.0 == rightArrives) {
@@ -161,10 +165,10 @@ final class FanTracer {
   }
 
   /** Illinois step, kept off the ends; every third step halves, so that it cannot stall. */
-  private static double falsePosition(
+  private double falsePosition(
       double low, double fLow, double high, double fHigh, int iteration) {
     double mid = (low * fHigh - high * fLow) / (fHigh - fLow);
-    double margin = 0.25 * GRAZING_RAD;
+    double margin = 0.25 * endRad;
     if (iteration % 4 == 3 || !(mid > low && mid < high)) {
       return 0.5 * (low + high);
     }
@@ -200,7 +204,7 @@ final class FanTracer {
     double fHigh = b.sensitivity(d, 0);
     RayTrace best = a;
     int kept = 0;
-    for (int i = 0; i < ITERATIONS && high - low > TURNING_RAD; i++) {
+    for (int i = 0; i < ITERATIONS && high - low > endRad; i++) {
       best = ray(falsePosition(low, fLow, high, fHigh, i));
       if (best.reached() <= d) {
         return best;
