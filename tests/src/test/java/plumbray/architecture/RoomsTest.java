@@ -77,10 +77,11 @@ class RoomsTest {
           .resideInAnyPackage("boofcv..", "georegression..", "org.ddogleg..", "org.ejml..");
 
   @ArchTest
-  static final ArchRule THE_MATHEMATICS_LIBRARY_STAYS_IN_CALIBRATION =
+  static final ArchRule THE_MATHEMATICS_LIBRARY_STAYS_IN_CALIBRATION_AND_FITTING =
       noClasses()
           .that()
-          .resideOutsideOfPackage("plumbray.calibration..")
+          .resideOutsideOfPackages(
+              "plumbray.calibration..", "plumbray.imaging.fit..", "plumbray.imaging.reading..")
           .should()
           .dependOnClassesThat()
           .resideInAPackage("org.apache.commons.math3..");

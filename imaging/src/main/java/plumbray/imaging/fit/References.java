@@ -132,11 +132,14 @@ record References(List<StaffScene> staffs, List<PointObservation> points) {
     return new References(List.of(), all);
   }
 
-  /** The staffs' edges that the strips show near where a traced sight puts them, and the points. */
-  List<ReferenceObservation> matched(Sight sight, FitTrace trace) {
+  /**
+   * The staffs' edges that the strips show near where a traced sight puts them, taken to be {@code
+   * relabel} edges higher than that, and the points.
+   */
+  List<ReferenceObservation> matched(Sight sight, FitTrace trace, int relabel, double reachPx) {
     List<ReferenceObservation> all = new ArrayList<>(points);
     for (StaffScene staff : staffs) {
-      List<PointMark> marks = staff.matched(trace, TRACKED_SIGMA_PX);
+      List<PointMark> marks = staff.matched(trace, relabel, reachPx, TRACKED_SIGMA_PX);
       if (!marks.isEmpty()) {
         Reference reference = sight.references().get(staff.reference());
         all.add(new PointObservation(staff.reference(), reference, new PointTarget(marks)));

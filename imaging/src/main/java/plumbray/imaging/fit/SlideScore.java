@@ -76,6 +76,16 @@ final class SlideScore {
     return new Slide(0, reachRows / coarseStep, coarseStep);
   }
 
+  /** A bar and a little more, rows; a dozen where there are no bars. */
+  int barRows() {
+    double rows = 12.0;
+    for (StaffScene staff : references.staffs()) {
+      double distance = sight.references().get(staff.reference()).distanceM();
+      rows = Math.max(rows, 1.3 * staff.meanBarM() / distance / camera.radPerPx());
+    }
+    return (int) Math.min(60.0, rows);
+  }
+
   /** Shifts near one. */
   Slide near(double pitchShiftRad, int rows) {
     int centre = (int) Math.round(pitchShiftRad / camera.radPerPx());

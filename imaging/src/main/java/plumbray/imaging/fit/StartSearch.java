@@ -49,6 +49,19 @@ final class StartSearch {
     return climbed(coarse, sight.profile(), count);
   }
 
+  /** Starts of the sight's own family from its grid as it is, best first. */
+  List<Start> coarseOfOwnFamily(int count) {
+    ProfileFamily family = sight.profile().family().orElseThrow();
+    return distinct(coarse(family, FamilyStarts.of(sight.profile())), count);
+  }
+
+  /** The start to which a climb from the sight's own values leads, bars up and down included. */
+  Start climbedFromOwnValues() {
+    ProfileSetup held =
+        score.profile(sight.profile().family().orElseThrow(), sight.profile().values());
+    return climbed(List.of(new Start(held, 0.0, 0.0)), sight.profile(), 1).get(0);
+  }
+
   /** Starts of the family of single exponentials, best first. */
   List<Start> exponential() {
     double gradient = gradient();
@@ -142,7 +155,7 @@ final class StartSearch {
                 score
                     .starts(
                         score.profile(open.family().orElseThrow(), values),
-                        List.of(score.near(pitch, NEAR_ROWS)))
+                        List.of(score.near(pitch, score.barRows())))
                     .stream()
                     .findFirst());
     List<Start> best = new ArrayList<>();

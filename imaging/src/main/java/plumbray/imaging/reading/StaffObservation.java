@@ -56,10 +56,10 @@ public final class StaffObservation implements ReferenceObservation {
    * Settings of a strip's model.
    *
    * @param used indices of the strip's values that count
-   * @param noiseScale factor on the strip's standard deviations
+   * @param noiseFactors factors on the strip's standard deviations, one a value of the strip
    * @param spreadPx where the point spread starts, px
    */
-  public record StripModelSettings(int[] used, double noiseScale, double spreadPx) {}
+  public record StripModelSettings(int[] used, double[] noiseFactors, double spreadPx) {}
 
   @Override
   public int count() {
@@ -110,7 +110,7 @@ public final class StaffObservation implements ReferenceObservation {
             scene.bars(),
             scene.strip(),
             settings.used(),
-            settings.noiseScale(),
+            settings.noiseFactors(),
             new StripModel.Scene(events, rows, top[0], own[0]));
     return new Prediction(model, events, displacementOf);
   }
@@ -141,6 +141,20 @@ public final class StaffObservation implements ReferenceObservation {
       }
     }
     return 0.0;
+  }
+
+  /**
+   * How far each value of the strip is from its prediction, in its standard deviation times {@code
+   * noiseFactor}; 0 where the value is not in use.
+   */
+  public double[] strayed(TracedSight sight, double[] own, double noiseFactor) {
+    double[] residuals = predict(sight, own).model().residuals();
+    double[] strayed = new double[scene.strip().rows()];
+    for (int r = 0; r < residuals.length; r++) {
+      int i = settings.used()[r];
+      strayed[i] = residuals[r] * settings.noiseFactors()[i] / noiseFactor;
+    }
+    return strayed;
   }
 
   /** How many residuals are of rows; the others are of the shimmer. */

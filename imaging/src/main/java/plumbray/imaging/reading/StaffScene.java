@@ -2,7 +2,6 @@ package plumbray.imaging.reading;
 
 import java.util.ArrayList;
 import java.util.Arrays;
-import java.util.Comparator;
 import java.util.List;
 import java.util.stream.IntStream;
 import plumbray.calibration.camera.Camera;
@@ -19,9 +18,6 @@ public final class StaffScene {
 
   /** Share of a strip's row that must be bars, or lie this near to one, for the row to count. */
   private static final double BORDER_PX = 6.0;
-
-  private static final double LEAST_REACH_PX = 3.0;
-  private static final double MOST_REACH_PX = 60.0;
 
   private final String name;
   private final StaffBars bars;
@@ -105,43 +101,31 @@ public final class StaffScene {
   }
 
   /**
-   * The staff's edges as points where the strip shows an edge of the right kind near where a sight
-   * puts one; nearer than half of the way to the sight's next edge.
+   * The staff's edges as points, where the strip shows edges of the right kind in the right order.
    *
    * @param sight the sight
+   * @param relabel how many edges higher the seen edges are taken to be than the sight says
+   * @param reachPx how far from where the sight puts it an edge may be before it is left out, px
    * @param sigmaPx standard deviation to give the points, px
    */
-  public List<PointMark> matched(TracedSight sight, double sigmaPx) {
+  public List<PointMark> matched(TracedSight sight, int relabel, double reachPx, double sigmaPx) {
     List<StripEdges.Edge> seen = StripEdges.of(strip);
     List<EdgeImage> wanted = edges(sight);
+    int[] partners = EdgeAlignment.partners(wanted, seen, reachPx);
     List<PointMark> marks = new ArrayList<>();
-    for (int i = 0; i < wanted.size(); i++) {
-      EdgeImage edge = wanted.get(i);
-      double reach = reach(wanted, i);
-      seen.stream()
-          .filter(s -> edge.step() == (s.brighterBelow() ? 1 : -1))
-          .filter(s -> Math.abs(s.row() - edge.row()) < reach)
-          .min(Comparator.comparingDouble(s -> Math.abs(s.row() - edge.row())))
-          .ifPresent(
-              s ->
-                  marks.add(
-                      new PointMark(
-                          edge.heightM(),
-                          new PixelPoint(strip.columnPx(), s.row()),
-                          sigmaPx,
-                          edge.sense() == Sense.UPRIGHT
-                              ? SenseWanted.UPRIGHT
-                              : SenseWanted.INVERTED)));
+    for (int i = 0; i < partners.length; i++) {
+      int edge = wanted.get(i).edge() + relabel;
+      if (partners[i] >= 0 && edge >= 0 && edge < bars.edgeCount()) {
+        boolean upright = wanted.get(i).sense() == Sense.UPRIGHT;
+        marks.add(
+            new PointMark(
+                bars.edgeM(edge),
+                new PixelPoint(strip.columnPx(), seen.get(partners[i]).row()),
+                sigmaPx,
+                upright ? SenseWanted.UPRIGHT : SenseWanted.INVERTED));
+      }
     }
     return marks;
-  }
-
-  /** Edges of one kind alternate with the other: an edge may be sought up to its neighbours. */
-  private static double reach(List<EdgeImage> edges, int i) {
-    double row = edges.get(i).row();
-    double above = i > 0 ? row - edges.get(i - 1).row() : Double.POSITIVE_INFINITY;
-    double below = i + 1 < edges.size() ? edges.get(i + 1).row() - row : Double.POSITIVE_INFINITY;
-    return Math.min(MOST_REACH_PX, Math.max(LEAST_REACH_PX, Math.min(above, below)));
   }
 
   /** Indices of the strip's values that show bars, or lie next to some, through a sight. */

@@ -20,7 +20,7 @@ final class StripModel {
   private final StaffBars bars;
   private final StaffStrip strip;
   private final int[] used;
-  private final double noiseScale;
+  private final double[] noiseFactors;
   private final List<StripEvent> events;
   private final double[] rows;
   private final EdgeSpread spread;
@@ -36,14 +36,14 @@ final class StripModel {
    * @param bars the staff
    * @param strip what was observed
    * @param used indices of the strip's values that count
-   * @param noiseScale factor on the strip's standard deviations
+   * @param noiseFactors factors on the strip's standard deviations, one a value of the strip
    * @param scene events with their displaced rows, what is seen at the top, and the point spread
    */
-  StripModel(StaffBars bars, StaffStrip strip, int[] used, double noiseScale, Scene scene) {
+  StripModel(StaffBars bars, StaffStrip strip, int[] used, double[] noiseFactors, Scene scene) {
     this.bars = bars;
     this.strip = strip;
     this.used = used;
-    this.noiseScale = noiseScale;
+    this.noiseFactors = noiseFactors;
     this.events = scene.events();
     this.rows = scene.rows();
     this.spread = new EdgeSpread(scene.spreadPx());
@@ -86,7 +86,7 @@ final class StripModel {
   }
 
   private double weight(int i) {
-    return 1.0 / (strip.sigma(i) * noiseScale);
+    return 1.0 / (strip.sigma(i) * noiseFactors[i]);
   }
 
   private double[][] basis() {

@@ -1,0 +1,283 @@
+package plumbray.imaging.fit;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.Comparator;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import plumbray.calibration.estimate.LeastSquares;
+import plumbray.calibration.estimate.Loss;
+import plumbray.calibration.estimate.Solution;
+import plumbray.calibration.quantity.Parameter;
+import plumbray.calibration.quantity.Quantity;
+import plumbray.calibration.sight.CameraSetup;
+import plumbray.calibration.sight.Sight;
+import plumbray.calibration.sight.SightParameters;
+import plumbray.imaging.fit.FamilyFit.Adjusted;
+import plumbray.imaging.fit.SlideScore.Start;
+import plumbray.imaging.reading.StaffObservation;
+import plumbray.imaging.reading.StaffObservation.StripModelSettings;
+import plumbray.raymodel.profile.ProfileFamily;
+
+/**
+ * The way from nothing to a first adjustment: starts, predicted edges drawn onto edges seen, a
+ * first adjustment of brightness without shimmer, and a look at the neighbouring bars.
+ */
+final class FirstFit {
+
+  private static final int STARTS = 8;
+  private static final int FIRST_TRIES = 4;
+  private static final int STEP_CLIMBS = 4;
+
+  /** A score that no wrong alignment of bars reaches. */
+  private static final double CLEARLY_FOUND = -500.0;
+
+  private static final int FIRST_EVALUATIONS = 14;
+  private static final double FIRST_TOLERANCE = 0.05;
+  private static final double SPREAD_PX = 1.2;
+
+  /** A neighbouring bar must score better by this much to be believed. */
+  private static final double BETTER = 2.0;
+
+  private static final double[] CHASE_REACHES_PX = {80.0, 50.0, 30.0, 15.0, 8.0};
+  private static final int CHASE_EVALUATIONS = 8;
+  private static final int LOCKS = 3;
+  private static final int STEP_STARTS = 12;
+  private static final String PROFILE = "profile.";
+
+  /** Edges that a lock of another family tracked may be this wrong, squared, in their spreads. */
+  private static final double TRACKED_CAP = 400.0;
+
+  private static final double TRACKED_PITCH_PX = 15.0;
+  private static final int[] RELABELS = {-4, -2, 2, 4};
+  private static final double RELABEL_REACH_PX = 30.0;
+
+  private final Sight sight;
+  private final References references;
+  private final SightParameters parameters;
+
+  FirstFit(Sight sight, References references) {
+    this.sight = sight;
+    this.references = references;
+    this.parameters = SightParameters.of(sight);
+  }
+
+  /**
+   * The best first adjustment; empty where no start leads anywhere.
+   *
+   * @param locks starts of single exponentials that follow the staffs' pattern
+   */
+  Optional<Adjusted> best(List<Start> locks) {
+    List<Adjusted> tried = new ArrayList<>();
+    for (double[] values : bestLooking(starts(locks))) {
+      tried.add(still(values));
+    }
+    return tried.stream()
+        .filter(a -> Double.isFinite(a.solution().cost()))
+        .min(Comparator.comparingDouble(this::looks))
+        .map(this::besideBars);
+  }
+
+  /** Values to which the starts lead once edges are drawn onto edges; the best of them. */
+  private List<double[]> bestLooking(List<Start> starts) {
+    List<double[]> values = new ArrayList<>();
+    for (Start start : starts) {
+      values.add(chased(startValues(start)));
+    }
+    if (references.staffs().isEmpty()) {
+      return values;
+    }
+    values.sort(Comparator.comparingDouble(this::looks));
+    List<double[]> best = values.subList(0, Math.min(FIRST_TRIES, values.size()));
+    if (looks(best.get(0)) < CLEARLY_FOUND) {
+      return best;
+    }
+    List<double[]> climbed = new ArrayList<>(best);
+    for (double[] at : best) {
+      climbed.add(chased(climbed(at)));
+    }
+    climbed.sort(Comparator.comparingDouble(this::looks));
+    return climbed.subList(0, Math.min(FIRST_TRIES, climbed.size()));
+  }
+
+  /** Climbs on from values that edges drawn onto edges led to. */
+  private double[] climbed(double[] values) {
+    Sight at = parameters.sightAt(Arrays.copyOf(values, parameters.parameters().size()));
+    Start start = new StartSearch(at, new SlideScore(at, references)).climbedFromOwnValues();
+    return startValues(
+        new Start(
+            start.profile(),
+            at.camera().pitchRad().value()
+                - sight.camera().pitchRad().value()
+                + start.pitchShiftRad(),
+            start.score()));
+  }
+
+  private List<Start> starts(List<Start> locks) {
+    if (references.staffs().isEmpty()) {
+      return new StartSearch(sight, references).ofOwnFamily(STARTS);
+    }
+    ProfileFamily family = sight.profile().family().orElseThrow();
+    if (family == ProfileFamily.EXPONENTIAL) {
+      return locks;
+    }
+    if (family == ProfileFamily.STEP) {
+      StartSearch search = new StartSearch(sight, references);
+      List<Start> both = new ArrayList<>(search.coarseOfOwnFamily(STEP_STARTS));
+      both.addAll(search.ofOwnFamily(STEP_CLIMBS));
+      return both;
+    }
+    List<Start> starts = new ArrayList<>();
+    for (Start lock : locks.subList(0, Math.min(LOCKS, locks.size()))) {
+      starts.addAll(following(lock));
+    }
+    return starts;
+  }
+
+  /** Starts of this family that put the edges where a lock of another family found them. */
+  private List<Start> following(Start lock) {
+    return new StartSearch(
+            sight.withCamera(shifted(lock)),
+            new SlideScore(
+                sight.withCamera(shifted(lock)), references.tracked(sight, lock), TRACKED_CAP))
+        .ofOwnFamily(1).stream()
+            .map(s -> new Start(s.profile(), lock.pitchShiftRad() + s.pitchShiftRad(), s.score()))
+            .toList();
+  }
+
+  /** The camera at a lock's pitch, free to turn a little. */
+  private CameraSetup shifted(Start lock) {
+    return References.turned(sight.camera(), lock.pitchShiftRad(), TRACKED_PITCH_PX);
+  }
+
+  /** How well an adjustment explains all of the strips, bars and what is around them. */
+  private double looks(Adjusted adjusted) {
+    return references.staffs().isEmpty()
+        ? adjusted.solution().cost()
+        : looks(adjusted.sightValues());
+  }
+
+  private double looks(double[] values) {
+    Sight at = parameters.heldAt(Arrays.copyOf(values, parameters.parameters().size()));
+    SlideScore score = new SlideScore(at, references);
+    return score.starts(at.profile(), List.of(score.near(0.0, 0))).stream()
+        .mapToDouble(Start::score)
+        .min()
+        .orElse(Double.POSITIVE_INFINITY);
+  }
+
+  private double[] startValues(Start start) {
+    Map<String, Quantity> values = start.profile().quantities();
+    List<Parameter> list = parameters.parameters();
+    double[] out = parameters.values();
+    for (int k = 0; k < out.length; k++) {
+      Parameter p = list.get(k);
+      if (p.name().equals("camera.pitchRad")) {
+        out[k] += start.pitchShiftRad();
+      }
+      if (p.name().startsWith(PROFILE)) {
+        out[k] = values.get(p.name().substring(PROFILE.length())).value();
+      }
+    }
+    return within(out);
+  }
+
+  /**
+   * Draws the predicted edges onto the edges that the strips show, as points whose nearest partners
+   * are taken anew after each adjustment. Brightness itself draws only over the width of a point
+   * spread; this draws over half a bar.
+   */
+  private double[] chased(double[] from) {
+    double[] values = from;
+    for (double reach : CHASE_REACHES_PX) {
+      values = drawn(values, 0, reach);
+    }
+    return values;
+  }
+
+  /** One adjustment to the edges paired at the present values. */
+  private double[] drawn(double[] values, int relabel, double reachPx) {
+    if (references.staffs().isEmpty()) {
+      return values;
+    }
+    SightObservation matched =
+        new SightObservation(
+            parameters,
+            references.matched(sight, rough(values), relabel, reachPx),
+            SightObservation.ROUGH_PX);
+    if (matched.count() < parameters.parameters().size()) {
+      return values;
+    }
+    LeastSquares solver = new LeastSquares(CHASE_EVALUATIONS, FIRST_TOLERANCE);
+    Solution solution = FamilyFit.solve(solver, matched, values, Loss.CAUCHY);
+    return Double.isFinite(solution.cost()) ? solution.values() : values;
+  }
+
+  private FitTrace rough(double[] sightValues) {
+    return FitTrace.of(
+        parameters.sightAt(sightValues),
+        List.of(),
+        SightOptics.elevationRange(sight.camera().camera()),
+        0.3);
+  }
+
+  private Adjusted still(double[] sightValues) {
+    FitTrace trace = rough(sightValues);
+    SightObservation observation =
+        new SightObservation(
+            parameters,
+            references.observations(
+                s ->
+                    StaffObservation.still(
+                        s,
+                        new StripModelSettings(
+                            s.rowsInUse(trace), FamilyFit.even(s, 1.0), SPREAD_PX))),
+            SightObservation.ROUGH_PX);
+    LeastSquares solver = new LeastSquares(FIRST_EVALUATIONS, FIRST_TOLERANCE);
+    return new Adjusted(
+        observation,
+        FamilyFit.solve(solver, observation, sightValues, firstLoss()),
+        FamilyFit.FIRST_GUESS);
+  }
+
+  /** Points may be plainly wrong; rows of a staff get their weights later. */
+  private Loss firstLoss() {
+    return references.staffs().isEmpty() ? Loss.CAUCHY : Loss.NONE;
+  }
+
+  /**
+   * Tries whether the staff fits better when every edge is taken for the next one of its kind up or
+   * down, until it does not.
+   */
+  private Adjusted besideBars(Adjusted from) {
+    if (references.staffs().isEmpty()) {
+      return from;
+    }
+    Adjusted best = from;
+    double bestLooks = looks(best);
+    boolean moved = true;
+    for (int round = 0; moved && round < 3; round++) {
+      moved = false;
+      double[] centre = best.sightValues();
+      for (int relabel : RELABELS) {
+        Adjusted trial = still(chased(drawn(centre, relabel, RELABEL_REACH_PX)));
+        double trialLooks = looks(trial);
+        if (trialLooks < bestLooks - BETTER) {
+          best = trial;
+          bestLooks = trialLooks;
+          moved = true;
+        }
+      }
+    }
+    return best;
+  }
+
+  private double[] within(double[] values) {
+    List<Parameter> list = parameters.parameters();
+    for (int k = 0; k < values.length; k++) {
+      values[k] = Math.max(list.get(k).lowest(), Math.min(list.get(k).highest(), values[k]));
+    }
+    return values;
+  }
+}
