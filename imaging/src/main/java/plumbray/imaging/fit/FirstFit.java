@@ -6,6 +6,8 @@ import java.util.Comparator;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
+import java.util.TreeSet;
 import plumbray.calibration.estimate.LeastSquares;
 import plumbray.calibration.estimate.Loss;
 import plumbray.calibration.estimate.Solution;
@@ -16,8 +18,11 @@ import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.SightParameters;
 import plumbray.imaging.fit.FamilyFit.Adjusted;
 import plumbray.imaging.fit.SlideScore.Start;
+import plumbray.imaging.reading.EdgeImage;
+import plumbray.imaging.reading.Relabel;
 import plumbray.imaging.reading.StaffObservation;
 import plumbray.imaging.reading.StaffObservation.StripModelSettings;
+import plumbray.imaging.reading.StaffScene;
 import plumbray.raymodel.profile.ProfileFamily;
 
 /**
@@ -30,8 +35,10 @@ final class FirstFit {
   private static final int FIRST_TRIES = 4;
   private static final int STEP_CLIMBS = 4;
 
-  /** A score that no wrong alignment of bars reaches. */
-  private static final double CLEARLY_FOUND = -500.0;
+  /** Logarithm of a share of unexplained brightness that no wrong alignment of bars leaves. */
+  private static final double CLEARLY_FOUND = Math.log(0.08);
+
+  private static final int RELABEL_ROUNDS = 4;
 
   private static final int FIRST_EVALUATIONS = 14;
   private static final double FIRST_TOLERANCE = 0.05;
@@ -41,7 +48,7 @@ final class FirstFit {
   private static final double BETTER = 2.0;
 
   private static final double[] CHASE_REACHES_PX = {80.0, 50.0, 30.0, 15.0, 8.0};
-  private static final int CHASE_EVALUATIONS = 8;
+  private static final int CHASE_EVALUATIONS = 12;
   private static final int LOCKS = 3;
   private static final int STEP_STARTS = 12;
   private static final String PROFILE = "profile.";
@@ -50,17 +57,18 @@ final class FirstFit {
   private static final double TRACKED_CAP = 400.0;
 
   private static final double TRACKED_PITCH_PX = 15.0;
-  private static final int[] RELABELS = {-4, -2, 2, 4};
-  private static final double RELABEL_REACH_PX = 30.0;
+  private static final double RELABEL_REACH_PX = 9.0;
 
   private final Sight sight;
   private final References references;
   private final SightParameters parameters;
+  private final SlideScore score;
 
   FirstFit(Sight sight, References references) {
     this.sight = sight;
     this.references = references;
     this.parameters = SightParameters.of(sight);
+    this.score = new SlideScore(sight, references);
   }
 
   /**
@@ -90,7 +98,7 @@ final class FirstFit {
     }
     values.sort(Comparator.comparingDouble(this::looks));
     List<double[]> best = values.subList(0, Math.min(FIRST_TRIES, values.size()));
-    if (looks(best.get(0)) < CLEARLY_FOUND) {
+    if (clearlyFound(looks(best.get(0)))) {
       return best;
     }
     List<double[]> climbed = new ArrayList<>(best);
@@ -99,6 +107,10 @@ final class FirstFit {
     }
     climbed.sort(Comparator.comparingDouble(this::looks));
     return climbed.subList(0, Math.min(FIRST_TRIES, climbed.size()));
+  }
+
+  private boolean clearlyFound(double looks) {
+    return looks < score.weight() * CLEARLY_FOUND;
   }
 
   /** Climbs on from values that edges drawn onto edges led to. */
@@ -160,8 +172,8 @@ final class FirstFit {
 
   private double looks(double[] values) {
     Sight at = parameters.heldAt(Arrays.copyOf(values, parameters.parameters().size()));
-    SlideScore score = new SlideScore(at, references);
-    return score.starts(at.profile(), List.of(score.near(0.0, 0))).stream()
+    SlideScore there = new SlideScore(at, references);
+    return there.starts(at.profile(), List.of(there.near(0.0, 0))).stream()
         .mapToDouble(Start::score)
         .min()
         .orElse(Double.POSITIVE_INFINITY);
@@ -191,13 +203,13 @@ final class FirstFit {
   private double[] chased(double[] from) {
     double[] values = from;
     for (double reach : CHASE_REACHES_PX) {
-      values = drawn(values, 0, reach);
+      values = drawn(values, Relabel.NONE, reach, Loss.CAUCHY);
     }
     return values;
   }
 
   /** One adjustment to the edges paired at the present values. */
-  private double[] drawn(double[] values, int relabel, double reachPx) {
+  private double[] drawn(double[] values, Relabel relabel, double reachPx, Loss loss) {
     if (references.staffs().isEmpty()) {
       return values;
     }
@@ -210,7 +222,7 @@ final class FirstFit {
       return values;
     }
     LeastSquares solver = new LeastSquares(CHASE_EVALUATIONS, FIRST_TOLERANCE);
-    Solution solution = FamilyFit.solve(solver, matched, values, Loss.CAUCHY);
+    Solution solution = FamilyFit.solve(solver, matched, values, loss);
     return Double.isFinite(solution.cost()) ? solution.values() : values;
   }
 
@@ -257,11 +269,11 @@ final class FirstFit {
     Adjusted best = from;
     double bestLooks = looks(best);
     boolean moved = true;
-    for (int round = 0; moved && round < 3; round++) {
+    for (int round = 0; moved && round < RELABEL_ROUNDS; round++) {
       moved = false;
       double[] centre = best.sightValues();
-      for (int relabel : RELABELS) {
-        Adjusted trial = still(chased(drawn(centre, relabel, RELABEL_REACH_PX)));
+      for (Relabel relabel : relabels(centre, clearlyFound(bestLooks))) {
+        Adjusted trial = still(chased(drawn(centre, relabel, RELABEL_REACH_PX, Loss.NONE)));
         double trialLooks = looks(trial);
         if (trialLooks < bestLooks - BETTER) {
           best = trial;
@@ -271,6 +283,32 @@ final class FirstFit {
       }
     }
     return best;
+  }
+
+  /**
+   * All edges one kind of bar up or down; where the staff is not clearly found, also those from the
+   * middle and from the end of each image on.
+   */
+  private List<Relabel> relabels(double[] values, boolean found) {
+    FitTrace trace = rough(values);
+    TreeSet<Integer> places = new TreeSet<>(Set.of(0));
+    for (StaffScene staff : found ? List.<StaffScene>of() : references.staffs()) {
+      List<EdgeImage> edges = staff.edges(trace);
+      int start = 0;
+      for (int i = 1; i <= edges.size(); i++) {
+        if (i == edges.size() || edges.get(i).image() != edges.get(start).image()) {
+          places.add((start + i) / 2);
+          places.add(i);
+          start = i;
+        }
+      }
+    }
+    List<Relabel> relabels = new ArrayList<>();
+    for (int place : places) {
+      relabels.add(new Relabel(place, -2));
+      relabels.add(new Relabel(place, 2));
+    }
+    return relabels;
   }
 
   private double[] within(double[] values) {

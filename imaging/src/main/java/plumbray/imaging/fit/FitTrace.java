@@ -10,15 +10,13 @@ import plumbray.imaging.reading.TracedSight;
 import plumbray.raymodel.mapping.Branch;
 import plumbray.raymodel.mapping.FanRequest;
 import plumbray.raymodel.mapping.RayFan;
+import plumbray.raymodel.mapping.Sense;
 import plumbray.raymodel.mapping.SightMapping;
 import plumbray.raymodel.ray.RayTracer;
 import plumbray.raymodel.ray.TabulatedMedium;
 
 /** A sight traced to its references' distances, for one evaluation of a fit. */
 final class FitTrace implements TracedSight {
-
-  /** Near the vanishing line the row of an edge runs away; its derivative is cut off here. */
-  private static final double LEAST_SLOPE_SHARE = 1e-3;
 
   /** Local errors of the integration, as a part of what the mapping tolerates. */
   private static final double TRACE_SHARE = 1e-3;
@@ -92,13 +90,14 @@ final class FitTrace implements TracedSight {
   }
 
   @Override
-  public void rowDerivatives(
-      int reference, Branch branch, double elevationRad, double azimuthRad, double[] out) {
-    RowSensitivity row = camera.rowSensitivity(elevationRad, azimuthRad);
-    double distance = sight.references().get(reference).distanceM();
+  public void rowDerivatives(int reference, Place place, double[] out) {
+    double elevationRad = place.elevationRad();
+    Branch branch = place.branch();
+    RowSensitivity row = camera.rowSensitivity(elevationRad, place.azimuthRad());
     double slope = branch.slopeMPerRad(elevationRad);
-    double least = LEAST_SLOPE_SHARE * distance;
-    double perM = row.dvdElevation() / Math.copySign(Math.max(least, Math.abs(slope)), slope);
+    double least = place.leastSlopeShare() * sight.references().get(reference).distanceM();
+    double sign = branch.sense() == Sense.UPRIGHT ? 1.0 : -1.0;
+    double perM = row.dvdElevation() / (sign * Math.max(least, Math.abs(slope)));
     String foot = "references[" + reference + "].footM";
     for (int i = 0; i < layout.size(); i++) {
       int index = layout.sensitivityIndex(i);

@@ -19,6 +19,7 @@ import plumbray.imaging.photo.Photo;
 import plumbray.imaging.reading.EdgeImage;
 import plumbray.imaging.reading.PointObservation;
 import plumbray.imaging.reading.ReferenceObservation;
+import plumbray.imaging.reading.Relabel;
 import plumbray.imaging.reading.StaffScene;
 import plumbray.imaging.reading.StaffStrip;
 import plumbray.raymodel.mapping.Sense;
@@ -33,6 +34,9 @@ record References(List<StaffScene> staffs, List<PointObservation> points) {
 
   private static final double TRACKED_FREE_PX = 15.0;
   private static final double TRACKED_SIGMA_PX = 1.5;
+
+  /** Edges drawn from afar are no outliers until they are this many times nearer. */
+  private static final double REACH_SIGMAS = 6.0;
 
   /** Reads the references. */
   static References read(Sight sight, Optional<Photo> photo) {
@@ -133,13 +137,14 @@ record References(List<StaffScene> staffs, List<PointObservation> points) {
   }
 
   /**
-   * The staffs' edges that the strips show near where a traced sight puts them, taken to be {@code
-   * relabel} edges higher than that, and the points.
+   * The staffs' edges that the strips show near where a traced sight puts them, taken for what
+   * {@code relabel} says, and the points.
    */
-  List<ReferenceObservation> matched(Sight sight, FitTrace trace, int relabel, double reachPx) {
+  List<ReferenceObservation> matched(Sight sight, FitTrace trace, Relabel relabel, double reachPx) {
     List<ReferenceObservation> all = new ArrayList<>(points);
     for (StaffScene staff : staffs) {
-      List<PointMark> marks = staff.matched(trace, relabel, reachPx, TRACKED_SIGMA_PX);
+      List<PointMark> marks =
+          staff.matched(trace, relabel, reachPx, Math.max(1.5, reachPx / REACH_SIGMAS));
       if (!marks.isEmpty()) {
         Reference reference = sight.references().get(staff.reference());
         all.add(new PointObservation(staff.reference(), reference, new PointTarget(marks)));

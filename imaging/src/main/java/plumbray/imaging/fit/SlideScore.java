@@ -76,6 +76,13 @@ final class SlideScore {
     return new Slide(0, reachRows / coarseStep, coarseStep);
   }
 
+  /** What the logarithm of the unexplained share of all strips is multiplied with in a score. */
+  double weight() {
+    return references.staffs().stream()
+        .mapToDouble(s -> s.strip().rows() / StripSlide.DEPENDENT_ROWS)
+        .sum();
+  }
+
   /** A bar and a little more, rows; a dozen where there are no bars. */
   int barRows() {
     double rows = 12.0;

@@ -14,7 +14,7 @@ final class StripSlide {
   private static final double BAR_ROW = 0.5;
 
   /** Rows of a strip are not independent; one in so many counts. */
-  private static final double DEPENDENT_ROWS = 4.0;
+  static final double DEPENDENT_ROWS = 4.0;
 
   private static final double LEAST_SHARE = 1e-6;
 

@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.TreeSet;
 import plumbray.calibration.estimate.Degeneracy;
 import plumbray.calibration.estimate.Solution;
 import plumbray.calibration.sight.Sight;
@@ -175,20 +176,24 @@ final class Verdict {
             PlainNames.of(name));
       }
     }
+    undetermined(solution);
+  }
+
+  private void undetermined(Solution solution) {
+    TreeSet<String> names = new TreeSet<>();
     for (Degeneracy degeneracy : solution.degeneracies()) {
-      List<String> names =
-          degeneracy.names().stream()
-              .filter(n -> !n.contains("shimmerPx") && !n.contains("spreadPx"))
-              .map(PlainNames::of)
-              .toList();
-      if (!names.isEmpty()) {
-        note(
-            "undetermined",
-            "Nearly undetermined together: %s. Their sigmas say so; heights between the marks of a"
-                + " reference do not suffer. A reference at a second distance, a taller staff or a"
-                + " measured pitch would tell them apart.",
-            String.join(", ", names));
-      }
+      degeneracy.names().stream()
+          .filter(n -> !n.contains("shimmerPx") && !n.contains("spreadPx"))
+          .map(PlainNames::of)
+          .forEach(names::add);
+    }
+    if (!names.isEmpty()) {
+      note(
+          "undetermined",
+          "Nearly undetermined together: %s. Their sigmas say so; heights between the marks of a"
+              + " reference do not suffer. A reference at a second distance, a taller staff or a"
+              + " measured pitch would tell them apart.",
+          String.join(", ", names));
     }
   }
 }

@@ -22,6 +22,11 @@ import plumbray.raymodel.mapping.SightMapping;
  */
 public final class PointObservation implements ReferenceObservation {
 
+  private static final double LEAST_SLOPE_SHARE = 0.01;
+
+  /** Interpolation of the inverse may leave this much. */
+  private static final double HIDDEN_PX = 1e-3;
+
   private final int reference;
   private final double distanceM;
   private final List<PointMark> marks;
@@ -56,7 +61,11 @@ public final class PointObservation implements ReferenceObservation {
       into.set(i, (mark.pixel().v() - seen.get().row()) / mark.sigmaPx());
       if (into.wantsJacobian()) {
         Seen at = seen.get();
-        sight.rowDerivatives(reference, at.branch(), at.apparentRad(), at.azimuthRad(), byEstimate);
+        double least = at.hidden() ? 1.0 : LEAST_SLOPE_SHARE;
+        sight.rowDerivatives(
+            reference,
+            new TracedSight.Place(at.branch(), at.apparentRad(), at.azimuthRad(), least),
+            byEstimate);
         for (int k = 0; k < byEstimate.length; k++) {
           into.derivatives(i)[k] = -byEstimate[k] / mark.sigmaPx();
         }
@@ -71,8 +80,11 @@ public final class PointObservation implements ReferenceObservation {
    * @param row row, px
    * @param apparentRad apparent elevation, rad
    * @param azimuthRad azimuth, rad
+   * @param hidden whether no ray brings the mark, and the row is that of the image's end moved on
+   *     by the height that is missing
    */
-  public record Seen(Branch branch, double row, double apparentRad, double azimuthRad) {}
+  public record Seen(
+      Branch branch, double row, double apparentRad, double azimuthRad, boolean hidden) {}
 
   /** All marks as a sight shows them; empty entries where no ray arrives at all. */
   public List<Optional<Seen>> seen(TracedSight sight) {
@@ -107,12 +119,12 @@ public final class PointObservation implements ReferenceObservation {
       double missing =
           elevation - branch.elevationM(apparent) - beyond * branch.pathSlope(apparent);
       camera.pixel(apparent, azimuth, scratch);
-      double row = scratch[1] - missing / distanceM / camera.radPerPx();
-      double hidden = Math.abs(missing) / distanceM / camera.radPerPx();
-      double miss = Math.abs(mark.pixel().v() - row) + hidden;
+      double missingRows = missing / distanceM / camera.radPerPx();
+      double row = scratch[1] - (branch.sense() == Sense.UPRIGHT ? missingRows : -missingRows);
+      double miss = Math.abs(mark.pixel().v() - row) + Math.abs(missingRows);
       if (miss < bestMiss) {
         bestMiss = miss;
-        best = new Seen(branch, row, apparent, azimuth);
+        best = new Seen(branch, row, apparent, azimuth, Math.abs(missingRows) > HIDDEN_PX);
       }
     }
     return Optional.ofNullable(best);

@@ -21,6 +21,8 @@ import plumbray.calibration.quantity.Parameter;
  */
 public final class StaffObservation implements ReferenceObservation {
 
+  private static final double LEAST_SLOPE_SHARE = 1e-3;
+
   private final StaffScene scene;
   private final StripModelSettings settings;
   private final List<EdgeImage> edges;
@@ -207,9 +209,11 @@ public final class StaffObservation implements ReferenceObservation {
       double[] byRow = model.byEventRow(e);
       sight.rowDerivatives(
           scene.place().reference(),
-          event.branch().get(),
-          event.apparentRad(),
-          scene.azimuthRad(sight.camera()),
+          new TracedSight.Place(
+              event.branch().get(),
+              event.apparentRad(),
+              scene.azimuthRad(sight.camera()),
+              LEAST_SLOPE_SHARE),
           byEstimate);
       for (int k = 0; k < estimates; k++) {
         for (int r = 0; r < byRow.length; r++) {

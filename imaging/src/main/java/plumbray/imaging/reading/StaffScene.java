@@ -19,6 +19,8 @@ public final class StaffScene {
   /** Share of a strip's row that must be bars, or lie this near to one, for the row to count. */
   private static final double BORDER_PX = 6.0;
 
+  private static final double GROUND_BORDER_PX = 8.0;
+
   private final String name;
   private final StaffBars bars;
   private final StaffStrip strip;
@@ -104,17 +106,18 @@ public final class StaffScene {
    * The staff's edges as points, where the strip shows edges of the right kind in the right order.
    *
    * @param sight the sight
-   * @param relabel how many edges higher the seen edges are taken to be than the sight says
+   * @param relabel what the seen edges are taken to be
    * @param reachPx how far from where the sight puts it an edge may be before it is left out, px
    * @param sigmaPx standard deviation to give the points, px
    */
-  public List<PointMark> matched(TracedSight sight, int relabel, double reachPx, double sigmaPx) {
+  public List<PointMark> matched(
+      TracedSight sight, Relabel relabel, double reachPx, double sigmaPx) {
     List<StripEdges.Edge> seen = StripEdges.of(strip);
     List<EdgeImage> wanted = edges(sight);
     int[] partners = EdgeAlignment.partners(wanted, seen, reachPx);
     List<PointMark> marks = new ArrayList<>();
     for (int i = 0; i < partners.length; i++) {
-      int edge = wanted.get(i).edge() + relabel;
+      int edge = relabel.of(i, wanted.get(i));
       if (partners[i] >= 0 && edge >= 0 && edge < bars.edgeCount()) {
         boolean upright = wanted.get(i).sense() == Sense.UPRIGHT;
         marks.add(
@@ -141,6 +144,7 @@ public final class StaffScene {
       from = event.row();
     }
     mark(use, what, from, strip.firstRow() + strip.rows());
+    events.stream().filter(e -> e.branch().isEmpty()).forEach(e -> unmark(use, e.row()));
     int[] indices = new int[use.length];
     int n = 0;
     for (int i = 0; i < use.length; i++) {
@@ -149,6 +153,16 @@ public final class StaffScene {
       }
     }
     return Arrays.copyOf(indices, n);
+  }
+
+  /** The ground's edge in front of an image does not count: what grows there is not known. */
+  private void unmark(boolean[] use, double row) {
+    int first = (int) Math.max(0, Math.ceil(row - GROUND_BORDER_PX - strip.firstRow()));
+    int last =
+        (int) Math.min(use.length - 1, Math.floor(row + GROUND_BORDER_PX - strip.firstRow()));
+    for (int i = first; i <= last; i++) {
+      use[i] = false;
+    }
   }
 
   private void mark(boolean[] use, int what, double from, double to) {

@@ -24,11 +24,19 @@ public interface TracedSight {
    * seen.
    *
    * @param reference index of the reference
-   * @param branch the image in which it is seen
-   * @param elevationRad apparent elevation there, rad
-   * @param azimuthRad azimuth there, rad
+   * @param place where it is seen
    * @param out filled with one derivative a quantity, px per unit
    */
-  void rowDerivatives(
-      int reference, Branch branch, double elevationRad, double azimuthRad, double[] out);
+  void rowDerivatives(int reference, Place place, double[] out);
+
+  /**
+   * Where an elevation is seen.
+   *
+   * @param branch the image
+   * @param elevationRad apparent elevation, rad
+   * @param azimuthRad azimuth, rad
+   * @param leastSlopeShare the slope of the mapping counts as at least this part of a straight
+   *     ray's: near the vanishing line the row of an edge runs away
+   */
+  record Place(Branch branch, double elevationRad, double azimuthRad, double leastSlopeShare) {}
 }
