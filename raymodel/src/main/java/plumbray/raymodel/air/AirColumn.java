@@ -22,6 +22,9 @@ public final class AirColumn implements Medium {
   /** g/R_d, K/m: the lapse rate at which the density of dry air does not change with height. */
   public static final double AUTOCONVECTIVE_K_PER_M = 9.80665 / 287.053;
 
+  /** In a list of parameters: one of other air along the same path, of no effect on this. */
+  public static final int FOREIGN = -1;
+
   private static final double VIRTUAL = 0.378;
 
   private final TemperatureColumn temperature;
@@ -73,7 +76,7 @@ public final class AirColumn implements Medium {
    * The column through a state, of which only some parameters matter.
    *
    * @param carried which parameters to differentiate by, in the order wanted: indices into the full
-   *     list of parameters
+   *     list of parameters, or {@link #FOREIGN}
    */
   public static AirColumn of(
       AirState state, double referenceHeightM, TemperatureProfile profile, int[] carried) {
@@ -116,6 +119,11 @@ public final class AirColumn implements Medium {
     out[1] = g;
     out[2] = share * (log.curvature() + log.slope() * log.slope()) - g * g;
     for (int k = 0; k < carried.length; k++) {
+      if (carried[k] == FOREIGN) {
+        out[3 + 2 * k] = 0.0;
+        out[4 + 2 * k] = 0.0;
+        continue;
+      }
       differentiate(carried[k]);
       double nk = share * log.byParameter();
       out[3 + 2 * k] = nk;
@@ -153,7 +161,7 @@ public final class AirColumn implements Medium {
   public double[] temperatureByParameters(double heightM) {
     temperature.evaluate(heightM, t);
     return Arrays.stream(carried)
-        .mapToDouble(k -> k < temperatureParameters ? t[3 + 2 * k] : 0.0)
+        .mapToDouble(k -> k != FOREIGN && k < temperatureParameters ? t[3 + 2 * k] : 0.0)
         .toArray();
   }
 

@@ -3,7 +3,7 @@ package plumbray.raymodel.mapping;
 import java.util.ArrayList;
 import java.util.List;
 import plumbray.raymodel.path.SightPath;
-import plumbray.raymodel.ray.Medium;
+import plumbray.raymodel.ray.PathAir;
 import plumbray.raymodel.ray.RayTrace;
 import plumbray.raymodel.ray.RayTracer;
 
@@ -66,12 +66,12 @@ final class FanTracer {
   private int budget;
   private boolean exhausted;
 
-  FanTracer(Medium medium, SightPath path, FanRequest request, double traceToleranceM) {
+  FanTracer(PathAir air, SightPath path, FanRequest request, double traceToleranceM) {
     this.request = request;
     this.distancesM = request.distancesM();
     endRad = Math.max(FINEST_RAD, END_SHARE * request.toleranceRad());
-    largest = new double[distancesM.length][2 + medium.parameterCount()];
-    tracer = new RayTracer(medium, path, distancesM, true, traceToleranceM);
+    largest = new double[distancesM.length][2 + air.parameterCount()];
+    tracer = new RayTracer(air, path, distancesM, true, traceToleranceM);
   }
 
   /** All rays by rising angle. */
@@ -165,8 +165,7 @@ final class FanTracer {
   }
 
   /** Illinois step, kept off the ends; every third step halves, so that it cannot stall. */
-  private double falsePosition(
-      double low, double fLow, double high, double fHigh, int iteration) {
+  private double falsePosition(double low, double fLow, double high, double fHigh, int iteration) {
     double mid = (low * fHigh - high * fLow) / (fHigh - fLow);
     double margin = 0.25 * endRad;
     if (iteration % 4 == 3 || !(mid > low && mid < high)) {

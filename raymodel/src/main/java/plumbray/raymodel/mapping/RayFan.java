@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import plumbray.raymodel.path.SightPath;
 import plumbray.raymodel.ray.Medium;
+import plumbray.raymodel.ray.PathAir;
 import plumbray.raymodel.ray.RayTrace;
 import plumbray.raymodel.ray.RayTracer;
 
@@ -33,6 +34,12 @@ public final class RayFan {
   /** Traces a fan whose steps have a local error below {@code traceToleranceM}, m. */
   public static RayFan trace(
       Medium medium, SightPath path, FanRequest request, double traceToleranceM) {
+    return trace(PathAir.uniform(medium), path, request, traceToleranceM);
+  }
+
+  /** Traces a fan through air that may vary along the path. */
+  public static RayFan trace(
+      PathAir air, SightPath path, FanRequest request, double traceToleranceM) {
     if (request.cameraHeightM() <= path.blockedBelowM()) {
       throw new IllegalArgumentException(
           "camera height is "
@@ -41,7 +48,7 @@ public final class RayFan {
               + path.blockedBelowM()
               + " m (height under which rays are stopped)");
     }
-    FanTracer tracer = new FanTracer(medium, path, request, traceToleranceM);
+    FanTracer tracer = new FanTracer(air, path, request, traceToleranceM);
     List<RayTrace> traces = tracer.trace();
     double[] distances = request.distancesM();
     List<SightMapping> mappings = new ArrayList<>();

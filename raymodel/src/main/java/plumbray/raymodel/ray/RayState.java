@@ -11,10 +11,19 @@ import java.util.Arrays;
  */
 final class RayState {
 
-  private final Medium medium;
+  private final PathAir pathAir;
   private final double earthRadiusM;
   final int components;
   private final double[] air;
+
+  /** What a varying medium fills; zero where the air is stratified. */
+  private final double[] along;
+
+  /** The stratified air here; null where it varies. */
+  private Medium stratified;
+
+  /** The varying air here; null where it is stratified. */
+  private VaryingMedium varying;
 
   double[] u;
   double[] x;
@@ -28,13 +37,16 @@ final class RayState {
   private final double[][] xForce;
   private double groundSlope;
   private double groundIntercept;
-  private double heightM;
 
-  RayState(Medium medium, double earthRadiusM, boolean withSensitivities) {
-    this.medium = medium;
+  /** Whether nothing pulls the ray along the path here, so that X grows evenly with sigma. */
+  private boolean coasting;
+
+  RayState(PathAir pathAir, double earthRadiusM, boolean withSensitivities) {
+    this.pathAir = pathAir;
     this.earthRadiusM = earthRadiusM;
-    components = withSensitivities ? 3 + medium.parameterCount() : 1;
-    air = new double[3 + 2 * medium.parameterCount()];
+    components = withSensitivities ? 3 + pathAir.parameterCount() : 1;
+    air = new double[3 + 2 * pathAir.parameterCount()];
+    along = new double[3 + pathAir.parameterCount()];
     u = new double[components];
     x = new double[components];
     uRate = new double[components];
@@ -48,14 +60,16 @@ final class RayState {
   }
 
   /**
-   * Ground y = intercept + slope x holds from here on; forces are evaluated afresh. A neighbouring
-   * ray comes to the bend sooner or later than this one and feels the other force for that while,
-   * which is a jump in the derivatives' rates.
+   * Ground y = intercept + slope x and the air just after {@code fromM} hold from here on; forces
+   * are evaluated afresh. A neighbouring ray comes to the bend sooner or later than this one and
+   * feels the other force for that while, which is a jump in the derivatives' rates. Where only the
+   * air changes there is none: blends join smoothly.
    */
-  void enterSegment(double slope, double intercept) {
+  void enterSegment(double fromM, double slope, double intercept) {
     double before = xForce[0][0];
     groundSlope = slope;
     groundIntercept = intercept;
+    enterAir(fromM);
     force(0, u, x);
     if (x[0] > 0.0) {
       double jump = (xForce[0][0] - before) / xRate[0];
@@ -65,11 +79,34 @@ final class RayState {
     }
   }
 
+  private void enterAir(double fromM) {
+    stratified = pathAir.stratifiedAfter(fromM);
+    varying = pathAir.varyingAfter(fromM);
+    if (varying == null) {
+      Arrays.fill(along, 0.0);
+    }
+    coasting = varying == null && groundSlope == 0.0;
+    if (coasting) {
+      for (double[] stage : xForce) {
+        Arrays.fill(stage, 0.0);
+      }
+    }
+  }
+
+  private void evaluateAir(double distanceM, double heightM) {
+    if (varying == null) {
+      stratified.evaluate(heightM, air);
+    } else {
+      varying.evaluate(distanceM, heightM, air, along);
+    }
+  }
+
   /** Puts the ray at the camera. */
   void start(double cameraHeightM, double apparentRad) {
     Arrays.fill(u, 0.0);
     Arrays.fill(x, 0.0);
-    medium.evaluate(cameraHeightM, air);
+    enterAir(0.0);
+    evaluateAir(0.0, cameraHeightM);
     double scale = 1.0 + cameraHeightM / earthRadiusM;
     double m = (1.0 + air[0]) * scale;
     double cos = Math.cos(apparentRad);
@@ -100,7 +137,7 @@ final class RayState {
       double[] a = NystromPair.A[stage];
       double ch = NystromPair.C[stage] * h;
       advance(u, uRate, uForce, a, ch, h * h, uNew);
-      if (groundSlope == 0.0) {
+      if (coasting) {
         coast(ch);
       } else {
         advance(x, xRate, xForce, a, ch, h * h, xNew);
@@ -108,7 +145,7 @@ final class RayState {
       force(stage, uNew, xNew);
     }
     advance(uRate, uForce, h, uRateNew);
-    if (groundSlope == 0.0) {
+    if (coasting) {
       System.arraycopy(xRate, 0, xRateNew, 0, components);
     } else {
       advance(xRate, xForce, h, xRateNew);
@@ -156,7 +193,16 @@ final class RayState {
       position += NystromPair.POSITION_ERROR[s] * uForce[s][0];
       slope += NystromPair.SLOPE_ERROR[s] * uForce[s][0];
     }
-    return Math.max(Math.abs(position) * h * h, Math.abs(slope) * h * slopeLengthM);
+    double error = Math.max(Math.abs(position) * h * h, Math.abs(slope) * h * slopeLengthM);
+    return varying == null ? error : Math.max(error, alongErrorM(h));
+  }
+
+  private double alongErrorM(double h) {
+    double position = 0.0;
+    for (int s = 0; s < NystromPair.STAGES; s++) {
+      position += NystromPair.POSITION_ERROR[s] * xForce[s][0];
+    }
+    return Math.abs(position) * h * h;
   }
 
   /** Takes the step that was tried last. */
@@ -223,41 +269,71 @@ final class RayState {
     return b * (u[j] - uRate[0] / xRate[0] * x[j]);
   }
 
-  /** Largest step, in sigma, that stays within the medium's vertical scale. */
+  /** Largest step, in sigma, that stays within the air's scales. */
   double largestStep() {
-    double scale = medium.verticalScaleM(heightM());
+    double heightM = heightM();
+    double scale =
+        varying == null
+            ? stratified.verticalScaleM(heightM)
+            : varying.verticalScaleM(x[0], heightM);
     double bySlope = scale / Math.abs(uRate[0] - groundSlope * xRate[0]);
     double byBend = Math.sqrt(2.0 * scale / Math.abs(uForce[0][0]));
-    return Math.min(bySlope, byBend);
+    double byDistance =
+        varying == null ? Double.POSITIVE_INFINITY : varying.horizontalScaleM() / xRate[0];
+    return Math.min(byDistance, Math.min(bySlope, byBend));
   }
 
   private void force(int stage, double[] atU, double[] atX) {
     double y = elevationM(atU[0]);
     double b = 1.0 + y / earthRadiusM;
-    double s = groundSlope;
-    medium.evaluate(y - groundIntercept - s * atX[0], air);
+    evaluateAir(atX[0], y - groundIntercept - groundSlope * atX[0]);
     double n = 1.0 + air[0];
     double m2 = n * n * b * b;
-    double g = air[1];
-    double logU = g * b + 1.0 / earthRadiusM;
+    double logU = air[1] * b + 1.0 / earthRadiusM;
+    double logX = along[0] - air[1] * groundSlope;
+    uForce[stage][0] = m2 * logU;
+    if (coasting) {
+      upForces(uForce[stage], atU, b, m2, logU);
+    } else {
+      xForce[stage][0] = m2 * logX;
+      bothForces(stage, atU, atX, b, m2);
+    }
+  }
+
+  /** Forces on the derivatives where ln m depends on u alone. */
+  private void upForces(double[] fu, double[] atU, double b, double m2, double logU) {
+    double logUu = air[2] * b * b + air[1] * b / earthRadiusM;
+    double byU = 2.0 * logU * logU + logUu;
+    for (int j = 1; j < Math.min(3, components); j++) {
+      fu[j] = m2 * byU * atU[j];
+    }
+    for (int j = 3; j < components; j++) {
+      fu[j] = m2 * (byU * atU[j] + 2.0 * logU * air[2 * j - 3] + b * air[2 * j - 2]);
+    }
+  }
+
+  /** Forces on the derivatives; ln m = ln n(x, y - G(x)) + u/R has slopes in both directions. */
+  private void bothForces(int stage, double[] atU, double[] atX, double b, double m2) {
+    double s = groundSlope;
+    double logU = air[1] * b + 1.0 / earthRadiusM;
+    double logX = along[0] - air[1] * s;
+    double logUu = air[2] * b * b + air[1] * b / earthRadiusM;
+    double logUx = b * (along[1] - air[2] * s);
+    double logXx = along[2] + s * (air[2] * s - 2.0 * along[1]);
     double[] fu = uForce[stage];
     double[] fx = xForce[stage];
-    fu[0] = m2 * logU;
-    double logX = -g * s;
-    fx[0] = m2 * logX;
-    double logUu = air[2] * b * b + g * b / earthRadiusM;
-    double logUx = -air[2] * b * s;
-    double logXx = air[2] * s * s;
     for (int j = 1; j < components; j++) {
       double byIndex = 0.0;
       double byGradient = 0.0;
+      double byAlong = 0.0;
       if (j > 2) {
         byIndex = air[2 * j - 3];
         byGradient = air[2 * j - 2];
+        byAlong = along[j];
       }
       double log = logU * atU[j] + logX * atX[j] + byIndex;
       fu[j] = m2 * (2.0 * log * logU + logUu * atU[j] + logUx * atX[j] + byGradient * b);
-      fx[j] = m2 * (2.0 * log * logX + logUx * atU[j] + logXx * atX[j] - byGradient * s);
+      fx[j] = m2 * (2.0 * log * logX + logUx * atU[j] + logXx * atX[j] + byAlong - byGradient * s);
     }
   }
 }

@@ -1,7 +1,8 @@
 package plumbray.raymodel.ray;
 
 import java.util.Arrays;
-import java.util.TreeSet;
+import java.util.stream.DoubleStream;
+import java.util.stream.Stream;
 import plumbray.raymodel.path.GroundProfile;
 import plumbray.raymodel.path.SightPath;
 
@@ -9,8 +10,8 @@ import plumbray.raymodel.path.SightPath;
  * Traces rays from a camera through air that follows the ground, to a set of distances.
  *
  * <p>Adaptive steps; the local error of each is held under a tolerance. Steps end exactly at target
- * distances and at bends of the ground, so that nothing is smoothed over. Not safe for use by
- * several threads at once.
+ * distances, at bends of the ground and where the air changes its kind, so that nothing is smoothed
+ * over. Not safe for use by several threads at once.
  */
 public final class RayTracer {
 
@@ -48,22 +49,37 @@ public final class RayTracer {
       double[] targetsM,
       boolean withSensitivities,
       double toleranceM) {
+    this(PathAir.uniform(medium), path, targetsM, withSensitivities, toleranceM);
+  }
+
+  /**
+   * A tracer through air that may vary along the path.
+   *
+   * @param air the air
+   * @param path the ground
+   * @param targetsM distances to report, m, above 0, strictly increasing
+   * @param withSensitivities whether to carry derivatives along
+   * @param toleranceM bound of the local error of a step, m
+   */
+  public RayTracer(
+      PathAir air,
+      SightPath path,
+      double[] targetsM,
+      boolean withSensitivities,
+      double toleranceM) {
     this.path = path;
     this.targetsM = targetsM.clone();
     this.toleranceM = toleranceM;
     double reach = targetsM[targetsM.length - 1];
     longestStepM = Math.max(20.0, reach / 50.0);
-    TreeSet<Double> stops = new TreeSet<>();
-    for (double d : targetsM) {
-      stops.add(d);
-    }
-    for (double b : path.ground().breaksM()) {
-      if (b > 0.0 && b < reach) {
-        stops.add(b);
-      }
-    }
-    stopsM = stops.stream().mapToDouble(Double::doubleValue).toArray();
-    state = new RayState(medium, path.earthRadiusM(), withSensitivities);
+    stopsM =
+        Stream.of(targetsM, path.ground().breaksM(), air.bordersM())
+            .flatMapToDouble(DoubleStream::of)
+            .filter(d -> d > 0.0 && d <= reach)
+            .sorted()
+            .distinct()
+            .toArray();
+    state = new RayState(air, path.earthRadiusM(), withSensitivities);
   }
 
   /** Traces one ray until it meets the ground or the last target. */
@@ -88,7 +104,7 @@ public final class RayTracer {
     double from = 0.0;
     for (double stop : stopsM) {
       double slope = ground.slope(from);
-      state.enterSegment(slope, ground.elevationM(from) - slope * from);
+      state.enterSegment(from, slope, ground.elevationM(from) - slope * from);
       watch.begin(state, path.blockedBelowM());
       if (!run(stop, stopping, trace)) {
         return trace;

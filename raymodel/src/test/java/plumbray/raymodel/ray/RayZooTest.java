@@ -106,9 +106,9 @@ class RayZooTest {
   }
 
   private static double fixedStepError(ZooRay ray, int steps) {
-    RayState state = new RayState(ray.medium(), ray.radiusM(), false);
+    RayState state = new RayState(PathAir.uniform(ray.medium()), ray.radiusM(), false);
     state.start(ray.heightM(), ray.apparentRad());
-    state.enterSegment(0.0, 0.0);
+    state.enterSegment(0.0, 0.0, 0.0);
     double h = ray.reachM() / (steps * state.xRate[0]);
     for (int i = 0; i < steps; i++) {
       state.attempt(h, 1.0);

@@ -1,0 +1,53 @@
+package plumbray.raymodel.ray;
+
+import plumbray.raymodel.path.SightPath;
+
+/**
+ * Another way to the same rays: the equations in elevation y and t = dy/(horizontal way), with the
+ * distance x along the level surface as the variable, by the classical fourth-order method in fixed
+ * steps: dy/dx = (1 + y/R) t, dt/dx = (1 + t^2) (1/R + (1 + y/R) L_y - t L_x), L = ln n, with L_y =
+ * dL/dz and L_x = dL/dx at fixed z less G'(x) dL/dz over ground G(x). Derived from Fermat's
+ * principle.
+ */
+final class CartesianRay {
+
+  private final VaryingMedium air;
+  private final SightPath path;
+  private final double[] out;
+  private final double[] along;
+
+  CartesianRay(VaryingMedium air, SightPath path) {
+    this.air = air;
+    this.path = path;
+    out = new double[3 + 2 * air.parameterCount()];
+    along = new double[3 + air.parameterCount()];
+  }
+
+  /** Elevation at {@code toM}; steps end at multiples of {@code stepM}, and so should bends. */
+  double elevationM(double heightM, double apparentRad, double toM, double stepM) {
+    double y = heightM;
+    double t = Math.tan(apparentRad);
+    long steps = Math.round(toM / stepM);
+    for (long i = 0; i < steps; i++) {
+      double x = i * stepM;
+      double groundSlope = path.ground().slope(x + 0.5 * stepM);
+      double ground = path.ground().elevationM(x) - groundSlope * x;
+      double[] a = rates(x, y, t, ground, groundSlope);
+      double h = 0.5 * stepM;
+      double[] b = rates(x + h, y + h * a[0], t + h * a[1], ground, groundSlope);
+      double[] c = rates(x + h, y + h * b[0], t + h * b[1], ground, groundSlope);
+      double[] d = rates(x + stepM, y + stepM * c[0], t + stepM * c[1], ground, groundSlope);
+      y += stepM / 6.0 * (a[0] + 2.0 * b[0] + 2.0 * c[0] + d[0]);
+      t += stepM / 6.0 * (a[1] + 2.0 * b[1] + 2.0 * c[1] + d[1]);
+    }
+    return y;
+  }
+
+  private double[] rates(double x, double y, double t, double ground, double groundSlope) {
+    double radius = path.earthRadiusM();
+    double b = 1.0 + y / radius;
+    air.evaluate(x, y - ground - groundSlope * x, out, along);
+    double byX = along[0] - groundSlope * out[1];
+    return new double[] {b * t, (1.0 + t * t) * (1.0 / radius + b * out[1] - t * byX)};
+  }
+}
