@@ -1,11 +1,12 @@
 package plumbray.calibration.estimate;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.stream.IntStream;
 import org.apache.commons.math3.linear.Array2DRowRealMatrix;
-import org.apache.commons.math3.linear.EigenDecomposition;
+import org.apache.commons.math3.linear.SingularValueDecomposition;
 
 /**
  * Finds the combinations of parameters that a covariance leaves nearly undetermined: principal axes
@@ -31,8 +32,10 @@ final class DegeneracySearch {
     this.problem = problem;
     this.covariance = scaledCovariance;
     this.correlation = Posterior.correlation(scaledCovariance);
-    addLongAxes();
-    addStrongPairs();
+    if (Arrays.stream(covariance).flatMapToDouble(Arrays::stream).allMatch(Double::isFinite)) {
+      addLongAxes();
+      addStrongPairs();
+    }
   }
 
   List<Degeneracy> found() {
@@ -40,11 +43,13 @@ final class DegeneracySearch {
   }
 
   private void addLongAxes() {
-    EigenDecomposition axes = new EigenDecomposition(new Array2DRowRealMatrix(covariance, true));
-    double[] squares = axes.getRealEigenvalues();
+    // singular values of a covariance are its eigenvalues, and are found without fail
+    SingularValueDecomposition axes =
+        new SingularValueDecomposition(new Array2DRowRealMatrix(covariance, true));
+    double[] squares = axes.getSingularValues();
     for (int d = 0; d < squares.length; d++) {
       if (squares[d] > LONG_AXIS * LONG_AXIS) {
-        add(axes.getEigenvector(d).toArray());
+        add(axes.getU().getColumn(d));
       }
     }
   }

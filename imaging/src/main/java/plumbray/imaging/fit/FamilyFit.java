@@ -73,8 +73,8 @@ final class FamilyFit {
   }
 
   /** The best first adjustment; see {@link FirstFit#best}. */
-  Optional<Adjusted> first(List<Start> locks) {
-    return new FirstFit(sight, references).best(locks);
+  Optional<Adjusted> first(List<Start> locks, boolean thorough) {
+    return new FirstFit(sight, references, thorough).best(locks);
   }
 
   static Solution solve(

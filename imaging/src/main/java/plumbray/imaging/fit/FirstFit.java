@@ -63,9 +63,12 @@ final class FirstFit {
   private final References references;
   private final SightParameters parameters;
   private final SlideScore score;
+  private final boolean thorough;
 
-  FirstFit(Sight sight, References references) {
+  /** A first fit; a thorough one goes on looking where no start fits well. */
+  FirstFit(Sight sight, References references, boolean thorough) {
     this.sight = sight;
+    this.thorough = thorough;
     this.references = references;
     this.parameters = SightParameters.of(sight);
     this.score = new SlideScore(sight, references);
@@ -98,7 +101,7 @@ final class FirstFit {
     }
     values.sort(Comparator.comparingDouble(this::looks));
     List<double[]> best = values.subList(0, Math.min(FIRST_TRIES, values.size()));
-    if (clearlyFound(looks(best.get(0)))) {
+    if (!thorough || clearlyFound(looks(best.get(0)))) {
       return best;
     }
     List<double[]> climbed = new ArrayList<>(best);
@@ -141,7 +144,8 @@ final class FirstFit {
       return both;
     }
     List<Start> starts = new ArrayList<>();
-    for (Start lock : locks.subList(0, Math.min(LOCKS, locks.size()))) {
+    boolean found = !locks.isEmpty() && clearlyFound(locks.get(0).score());
+    for (Start lock : locks.subList(0, Math.min(found ? 1 : LOCKS, locks.size()))) {
       starts.addAll(following(lock));
     }
     return starts;
@@ -266,23 +270,24 @@ final class FirstFit {
     if (references.staffs().isEmpty()) {
       return from;
     }
-    Adjusted best = from;
-    double bestLooks = looks(best);
+    double[] bestValues = from.sightValues();
+    double bestLooks = looks(bestValues);
     boolean moved = true;
     for (int round = 0; moved && round < RELABEL_ROUNDS; round++) {
       moved = false;
-      double[] centre = best.sightValues();
-      for (Relabel relabel : relabels(centre, clearlyFound(bestLooks))) {
-        Adjusted trial = still(chased(drawn(centre, relabel, RELABEL_REACH_PX, Loss.NONE)));
+      double[] centre = bestValues;
+      for (Relabel relabel : relabels(centre, !thorough || clearlyFound(bestLooks))) {
+        double[] trial = chased(drawn(centre, relabel, RELABEL_REACH_PX, Loss.NONE));
         double trialLooks = looks(trial);
         if (trialLooks < bestLooks - BETTER) {
-          best = trial;
           bestLooks = trialLooks;
+          bestValues = trial;
           moved = true;
         }
       }
     }
-    return best;
+    Adjusted there = still(bestValues);
+    return looks(there) < looks(from) - BETTER ? there : from;
   }
 
   /**

@@ -21,6 +21,12 @@ final class FitTrace implements TracedSight {
   /** Local errors of the integration, as a part of what the mapping tolerates. */
   private static final double TRACE_SHARE = 1e-3;
 
+  /** Mappings no better than this are for looking around, and need few rays. */
+  private static final double ROUGH_PX = 0.1;
+
+  private static final int ROUGH_RAYS = 400;
+  private static final int FINE_RAYS = 4000;
+
   private final Sight sight;
   private final Camera camera;
   private final EstimateLayout layout;
@@ -53,6 +59,7 @@ final class FitTrace implements TracedSight {
             range[1],
             distances.stream().mapToDouble(Double::doubleValue).toArray(),
             tolerancePx * camera.radPerPx(),
+            tolerancePx < ROUGH_PX ? FINE_RAYS : ROUGH_RAYS,
             !estimated.isEmpty());
     RayFan fan =
         RayFan.trace(

@@ -34,7 +34,7 @@ public final class SightFit {
     References references = References.read(sight, photo);
     if (sight.profile().family().isPresent()) {
       FamilyFit fit = new FamilyFit(sight, references);
-      return fit.first(locks(sight, references))
+      return fit.first(locks(sight, references), true)
           .map(fit::refine)
           .map(adjusted -> FitReport.of(sight, adjusted, List.of()))
           .orElseGet(() -> FitResult.failed(sight, noStart()));
@@ -94,7 +94,7 @@ public final class SightFit {
     for (ProfileFamily family : ProfileFamily.values()) {
       Sight open = sight.withProfile(open(family));
       FamilyFit fit = new FamilyFit(open, references);
-      fit.first(locks).ifPresent(a -> first.add(new Candidate(family, open, fit, a)));
+      fit.first(locks, false).ifPresent(a -> first.add(new Candidate(family, open, fit, a)));
     }
     if (first.isEmpty()) {
       return FitResult.failed(sight, noStart());

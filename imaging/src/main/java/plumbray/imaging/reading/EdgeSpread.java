@@ -1,7 +1,5 @@
 package plumbray.imaging.reading;
 
-import org.apache.commons.math3.special.Erf;
-
 /**
  * How a sharp edge looks in pixels: the integral of a Gaussian point spread over a pixel's height.
  *
@@ -10,9 +8,6 @@ import org.apache.commons.math3.special.Erf;
  * pixel whose centre is x pixels below it is Psi(x + 1/2) - Psi(x - 1/2).
  */
 final class EdgeSpread {
-
-  private static final double ROOT_HALF = Math.sqrt(0.5);
-  private static final double DENSITY = 1.0 / Math.sqrt(2.0 * Math.PI);
 
   private final double spreadPx;
   private final double reachPx;
@@ -50,11 +45,10 @@ final class EdgeSpread {
   }
 
   private double phi(double x) {
-    return 0.5 * Erf.erfc(-x / spreadPx * ROOT_HALF);
+    return NormalDistribution.below(x / spreadPx);
   }
 
   private double density(double x) {
-    double t = x / spreadPx;
-    return DENSITY * Math.exp(-0.5 * t * t);
+    return NormalDistribution.density(x / spreadPx);
   }
 }

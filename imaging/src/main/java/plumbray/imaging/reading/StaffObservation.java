@@ -22,6 +22,8 @@ import plumbray.calibration.quantity.Parameter;
 public final class StaffObservation implements ReferenceObservation {
 
   private static final double LEAST_SLOPE_SHARE = 1e-3;
+  private static final double LEAST_SPREAD_PX = 0.2;
+  private static final double MOST_SPREAD_PX = 12.0;
 
   private final StaffScene scene;
   private final StripModelSettings settings;
@@ -72,7 +74,14 @@ public final class StaffObservation implements ReferenceObservation {
   public List<Parameter> ownParameters() {
     List<Parameter> own = new ArrayList<>();
     String name = scene.name();
-    own.add(new Parameter(name + ".spreadPx", settings.spreadPx(), Double.NaN, 0.2, 30.0, 0.2));
+    own.add(
+        new Parameter(
+            name + ".spreadPx",
+            settings.spreadPx(),
+            Double.NaN,
+            LEAST_SPREAD_PX,
+            MOST_SPREAD_PX,
+            0.2));
     for (int i = 0; i < edges.size(); i++) {
       own.add(new Parameter(name + ".shimmerPx[" + i + "]", 0.0, Double.NaN, -30.0, 30.0, 0.2));
     }

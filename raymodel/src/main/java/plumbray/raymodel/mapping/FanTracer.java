@@ -39,12 +39,6 @@ final class FanTracer {
   /** Ground is interpolated straight, to a tenth of a pixel where the mapping is to a hundredth. */
   private static final double GROUND_TOLERANCE = 40.0;
 
-  /**
-   * Rays that one fan may trace. Usual sights need some hundreds; rays kept in a duct over tens of
-   * kilometres fold without end, and no picture would show it.
-   */
-  private static final int MOST_RAYS = 12_000;
-
   /** Intervals narrower than this part of the tolerance are left as they are. */
   private static final double NARROWEST = 0.01;
 
@@ -80,7 +74,7 @@ final class FanTracer {
     RayTrace left = ray(request.lowestRad());
     traces.add(left);
     for (int i = 1; i <= FIRST_INTERVALS; i++) {
-      budget += MOST_RAYS / FIRST_INTERVALS;
+      budget += request.mostRays() / FIRST_INTERVALS;
       double angle =
           i == FIRST_INTERVALS
               ? request.highestRad()

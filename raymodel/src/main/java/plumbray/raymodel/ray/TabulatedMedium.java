@@ -19,6 +19,9 @@ public final class TabulatedMedium implements Medium {
   /** Largest error of d ln n/dz within the table, 1/m. */
   public static final double GRADIENT_TOLERANCE = 1e-12;
 
+  /** Largest error of d ln n/dz where that is large, as a part of the largest nearby. */
+  public static final double STEEP_TOLERANCE = 1e-10;
+
   /** Largest error of a derivative by a parameter, as a part of the largest nearby. */
   public static final double DERIVATIVE_TOLERANCE = 1e-8;
 
@@ -30,7 +33,7 @@ public final class TabulatedMedium implements Medium {
 
   private static final int NODES = 8;
   private static final int COEFFICIENTS = NODES + 1;
-  private static final int DEEPEST = 24;
+  private static final int DEEPEST = 16;
   private static final double[] CHECKS = {-0.99, -0.7, -0.2, 0.31, 0.62, 0.9};
 
   private final Medium medium;
@@ -183,7 +186,7 @@ public final class TabulatedMedium implements Medium {
         largest[c] = Math.max(largest[c], Math.abs(truth));
       }
     }
-    boolean good = worst[0] <= GRADIENT_TOLERANCE;
+    boolean good = worst[0] <= Math.max(GRADIENT_TOLERANCE, STEEP_TOLERANCE * largest[0]);
     for (int c = 1; c < channels; c++) {
       good &= worst[c] <= Math.max(GRADIENT_TOLERANCE, DERIVATIVE_TOLERANCE * largest[c]);
     }
