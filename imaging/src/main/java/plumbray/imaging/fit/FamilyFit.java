@@ -26,7 +26,7 @@ import plumbray.imaging.reading.StaffScene;
 final class FamilyFit {
 
   private static final int ROUNDS = 3;
-  private static final int MOST_EVALUATIONS = 40;
+  private static final int MOST_EVALUATIONS = 80;
 
   /** Close enough, in standard deviations: far below what anybody can see in a result. */
   private static final double TOLERANCE = 0.1;
@@ -112,7 +112,7 @@ final class FamilyFit {
     SightObservation fine =
         new SightObservation(
             parameters, first.observation().references(), SightObservation.FINE_PX);
-    Solution solution = solve(new LeastSquares(), fine, first.sightValues(), Loss.HUBER);
+    Solution solution = solve(new LeastSquares(), fine, first.sightValues(), Loss.CAUCHY);
     return new Adjusted(fine, solution, first.found());
   }
 

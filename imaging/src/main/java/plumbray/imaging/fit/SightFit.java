@@ -1,6 +1,7 @@
 package plumbray.imaging.fit;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -36,10 +37,20 @@ public final class SightFit {
       FamilyFit fit = new FamilyFit(sight, references);
       return fit.first(locks(sight, references), true)
           .map(fit::refine)
+          .map(adjusted -> alongRoll(sight, photo, adjusted))
           .map(adjusted -> FitReport.of(sight, adjusted, List.of()))
           .orElseGet(() -> FitResult.failed(sight, noStart()));
     }
     return best(sight, references);
+  }
+
+  /** Where the roll was estimated, strips are read again along the roll that was found. */
+  private static Adjusted alongRoll(Sight sight, Optional<Photo> photo, Adjusted adjusted) {
+    if (!sight.camera().rollRad().estimated() || photo.isEmpty()) {
+      return adjusted;
+    }
+    Sight found = adjusted.observation().sightParameters().heldAt(adjusted.sightValues());
+    return new FamilyFit(sight, References.read(found, photo)).refine(adjusted);
   }
 
   private static String noStart() {
@@ -90,12 +101,12 @@ public final class SightFit {
 
   private FitResult best(Sight sight, References references) {
     List<SlideScore.Start> locks = locks(sight, references);
-    List<Candidate> first = new ArrayList<>();
-    for (ProfileFamily family : ProfileFamily.values()) {
-      Sight open = sight.withProfile(open(family));
-      FamilyFit fit = new FamilyFit(open, references);
-      fit.first(locks, false).ifPresent(a -> first.add(new Candidate(family, open, fit, a)));
-    }
+    List<Candidate> first =
+        Arrays.stream(ProfileFamily.values())
+            .parallel()
+            .map(family -> candidate(sight.withProfile(open(family)), family, references, locks))
+            .flatMap(Optional::stream)
+            .toList();
     if (first.isEmpty()) {
       return FitResult.failed(sight, noStart());
     }
@@ -131,6 +142,12 @@ public final class SightFit {
         result.alternatives(),
         result.readings(),
         result.jitterPx());
+  }
+
+  private static Optional<Candidate> candidate(
+      Sight open, ProfileFamily family, References references, List<SlideScore.Start> locks) {
+    FamilyFit fit = new FamilyFit(open, references);
+    return fit.first(locks, false).map(a -> new Candidate(family, open, fit, a));
   }
 
   /** A family with every quantity open, within what air near the ground does. */

@@ -39,7 +39,8 @@ final class SightObservation implements Observation {
 
   /** The sight's parameters and then the references' own. */
   List<Parameter> allParameters() {
-    List<Parameter> all = new ArrayList<>(parameters.parameters());
+    List<Parameter> all = new ArrayList<>();
+    parameters.parameters().forEach(p -> all.add(WeakPriors.on(p)));
     references.forEach(r -> all.addAll(r.ownParameters()));
     return all;
   }
