@@ -4,9 +4,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
 import plumbray.calibration.quantity.Quantity;
-import plumbray.raymodel.profile.ProfileFamily;
 import plumbray.raymodel.profile.ProfileParameter;
 
 /**
@@ -73,17 +71,30 @@ final class QuantityWalk {
   }
 
   private ProfileSetup profile(ProfileSetup profile) {
-    Optional<ProfileFamily> family = profile.family();
-    if (family.isEmpty()) {
+    if (profile.family().isEmpty()) {
       return profile;
     }
+    List<ProfileSetup> stretches = profile.stretches();
+    List<ProfileSetup> visited = new ArrayList<>();
+    for (int i = 0; i < stretches.size(); i++) {
+      visited.add(stretch(stretches.get(i), profile.prefix(i)));
+    }
+    List<StretchSetup> further = new ArrayList<>();
+    for (int i = 1; i < visited.size(); i++) {
+      StretchSetup before = profile.further().get(i - 1);
+      further.add(new StretchSetup(before.fromM(), before.blendM(), visited.get(i)));
+    }
+    return visited.get(0).withFurther(further);
+  }
+
+  private ProfileSetup stretch(ProfileSetup profile, String prefix) {
     Map<String, Quantity> visited = new LinkedHashMap<>();
-    for (ProfileParameter each : family.get().parameters()) {
+    for (ProfileParameter each : profile.family().orElseThrow().parameters()) {
       Quantity quantity = profile.quantities().get(each.key());
       Nature nature = Nature.ofProfile(each, quantity.value());
-      visited.put(each.key(), visitor.visit("profile." + each.key(), quantity, nature));
+      visited.put(each.key(), visitor.visit(prefix + each.key(), quantity, nature));
     }
-    return new ProfileSetup(family, visited, profile.stability());
+    return new ProfileSetup(profile.family(), visited, profile.stability());
   }
 
   private List<Reference> references(List<Reference> references) {

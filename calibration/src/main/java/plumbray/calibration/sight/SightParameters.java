@@ -10,7 +10,8 @@ import plumbray.calibration.quantity.Quantity;
  * The vector of a sight's estimated quantities, in a fixed order and by name: {@code
  * camera.focalLengthM}, {@code camera.heightM}, {@code camera.pitchRad}, {@code camera.rollRad},
  * {@code path.blockedBelowM}, {@code air.temperatureK}, {@code air.pressurePa}, {@code
- * air.relativeHumidity}, {@code profile.} and the key of each quantity of the family, {@code
+ * air.relativeHumidity}, {@code profile.} and the key of each quantity of the family (where there
+ * are stretches {@code profile[i].} and the key, i from 0 at the camera), {@code
  * references[i].footM}. Held quantities are left out.
  */
 public final class SightParameters {

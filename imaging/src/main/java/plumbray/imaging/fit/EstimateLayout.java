@@ -1,8 +1,11 @@
 package plumbray.imaging.fit;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
+import plumbray.calibration.sight.ProfileSetup;
 import plumbray.calibration.sight.Sight;
+import plumbray.raymodel.air.AirColumn;
 import plumbray.raymodel.profile.ProfileFamily;
 import plumbray.raymodel.profile.ProfileParameter;
 
@@ -12,15 +15,17 @@ import plumbray.raymodel.profile.ProfileParameter;
  */
 public final class EstimateLayout {
 
-  private static final String PROFILE = "profile.";
   private static final List<String> STATE =
       List.of("air.temperatureK", "air.pressurePa", "air.relativeHumidity");
 
   private final int[] airOf;
-  private final int[] columnParameters;
+
+  /** By stretch: for each estimate of the air, which of the column's parameters it is. */
+  private final int[][] columnParameters;
+
   private final List<String> names;
 
-  private EstimateLayout(List<String> names, int[] airOf, int[] columnParameters) {
+  private EstimateLayout(List<String> names, int[] airOf, int[][] columnParameters) {
     this.names = List.copyOf(names);
     this.airOf = airOf;
     this.columnParameters = columnParameters;
@@ -28,33 +33,49 @@ public final class EstimateLayout {
 
   /** The layout for estimates of a sight, by name. */
   public static EstimateLayout of(Sight sight, List<String> names) {
-    List<String> keys =
-        sight.profile().family().map(ProfileFamily::parameters).orElse(List.of()).stream()
-            .map(ProfileParameter::key)
-            .toList();
+    List<ProfileSetup> stretches = sight.profile().stretches();
     int[] airOf = new int[names.size()];
-    List<Integer> carried = new ArrayList<>();
+    List<int[]> carried = new ArrayList<>();
     for (int i = 0; i < names.size(); i++) {
-      int index = columnIndex(names.get(i), keys);
-      airOf[i] = index < 0 ? -1 : carried.size();
-      if (index >= 0) {
-        carried.add(index);
+      int[] indices = new int[stretches.size()];
+      for (int s = 0; s < indices.length; s++) {
+        indices[s] = columnIndex(names.get(i), sight.profile().prefix(s), stretches.get(s));
+      }
+      boolean ofAir = Arrays.stream(indices).anyMatch(index -> index >= 0);
+      airOf[i] = ofAir ? carried.size() : -1;
+      if (ofAir) {
+        carried.add(indices);
       }
     }
-    return new EstimateLayout(names, airOf, carried.stream().mapToInt(Integer::intValue).toArray());
+    int[][] byStretch = new int[stretches.size()][];
+    for (int s = 0; s < byStretch.length; s++) {
+      int stretch = s;
+      byStretch[s] = carried.stream().mapToInt(indices -> indices[stretch]).toArray();
+    }
+    return new EstimateLayout(names, airOf, byStretch);
   }
 
-  private static int columnIndex(String name, List<String> keys) {
-    if (name.startsWith(PROFILE)) {
-      return keys.indexOf(name.substring(PROFILE.length()));
+  private static int columnIndex(String name, String prefix, ProfileSetup profile) {
+    List<String> keys =
+        profile.family().map(ProfileFamily::parameters).orElse(List.of()).stream()
+            .map(ProfileParameter::key)
+            .toList();
+    if (name.startsWith(prefix)) {
+      return keys.indexOf(name.substring(prefix.length()));
     }
     int state = STATE.indexOf(name);
-    return state < 0 ? -1 : keys.size() + state;
+    return state < 0 ? AirColumn.FOREIGN : keys.size() + state;
   }
 
-  /** Indices of the column's parameters that are estimated, in the order of the estimates. */
-  public int[] columnParameters() {
-    return columnParameters.clone();
+  /**
+   * What each estimate of the air, in order, is among the parameters of the column over a stretch.
+   *
+   * @param stretch its place along the path, 0 at the camera
+   * @return indices into the column's full list of parameters, {@link AirColumn#FOREIGN} for a
+   *     quantity of another stretch
+   */
+  public int[] columnParameters(int stretch) {
+    return columnParameters[stretch].clone();
   }
 
   /** How many quantities are estimated. */

@@ -3,6 +3,7 @@ package plumbray.imaging.fit;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Comparator;
+import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -12,8 +13,8 @@ import plumbray.calibration.estimate.LeastSquares;
 import plumbray.calibration.estimate.Loss;
 import plumbray.calibration.estimate.Solution;
 import plumbray.calibration.quantity.Parameter;
-import plumbray.calibration.quantity.Quantity;
 import plumbray.calibration.sight.CameraSetup;
+import plumbray.calibration.sight.ProfileSetup;
 import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.SightParameters;
 import plumbray.imaging.fit.FamilyFit.Adjusted;
@@ -51,7 +52,6 @@ final class FirstFit {
   private static final int CHASE_EVALUATIONS = 12;
   private static final int LOCKS = 3;
   private static final int STEP_STARTS = 12;
-  private static final String PROFILE = "profile.";
 
   /** Edges that a lock of another family tracked may be this wrong, squared, in their spreads. */
   private static final double TRACKED_CAP = 400.0;
@@ -101,7 +101,8 @@ final class FirstFit {
     }
     values.sort(Comparator.comparingDouble(this::looks));
     List<double[]> best = values.subList(0, Math.min(FIRST_TRIES, values.size()));
-    if (!thorough || clearlyFound(looks(best.get(0)))) {
+    boolean oneProfile = sight.profile().stretches().size() == 1;
+    if (!thorough || !oneProfile || clearlyFound(looks(best.get(0)))) {
       return best;
     }
     List<double[]> climbed = new ArrayList<>(best);
@@ -130,6 +131,9 @@ final class FirstFit {
   }
 
   private List<Start> starts(List<Start> locks) {
+    if (sight.profile().stretches().size() > 1) {
+      return new StretchStarts(sight, references).of(locks);
+    }
     if (references.staffs().isEmpty()) {
       return new StartSearch(sight, references).ofOwnFamily(STARTS);
     }
@@ -184,7 +188,7 @@ final class FirstFit {
   }
 
   private double[] startValues(Start start) {
-    Map<String, Quantity> values = start.profile().quantities();
+    Map<String, Double> values = valuesByName(start.profile());
     List<Parameter> list = parameters.parameters();
     double[] out = parameters.values();
     for (int k = 0; k < out.length; k++) {
@@ -192,11 +196,19 @@ final class FirstFit {
       if (p.name().equals("camera.pitchRad")) {
         out[k] += start.pitchShiftRad();
       }
-      if (p.name().startsWith(PROFILE)) {
-        out[k] = values.get(p.name().substring(PROFILE.length())).value();
-      }
+      out[k] = values.getOrDefault(p.name(), out[k]);
     }
     return within(out);
+  }
+
+  private static Map<String, Double> valuesByName(ProfileSetup profile) {
+    Map<String, Double> values = new HashMap<>();
+    List<ProfileSetup> stretches = profile.stretches();
+    for (int i = 0; i < stretches.size(); i++) {
+      String prefix = profile.prefix(i);
+      stretches.get(i).quantities().forEach((key, q) -> values.put(prefix + key, q.value()));
+    }
+    return values;
   }
 
   /**

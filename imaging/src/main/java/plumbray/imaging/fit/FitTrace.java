@@ -13,7 +13,6 @@ import plumbray.raymodel.mapping.RayFan;
 import plumbray.raymodel.mapping.Sense;
 import plumbray.raymodel.mapping.SightMapping;
 import plumbray.raymodel.ray.RayTracer;
-import plumbray.raymodel.ray.TabulatedMedium;
 
 /** A sight traced to its references' distances, for one evaluation of a fit. */
 final class FitTrace implements TracedSight {
@@ -63,7 +62,7 @@ final class FitTrace implements TracedSight {
             !estimated.isEmpty());
     RayFan fan =
         RayFan.trace(
-            new TabulatedMedium(SightOptics.column(sight, estimated)),
+            SightOptics.air(sight, estimated),
             sight.path().path(),
             request,
             Math.max(

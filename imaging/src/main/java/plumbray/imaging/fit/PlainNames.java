@@ -1,6 +1,8 @@
 package plumbray.imaging.fit;
 
 import java.util.Map;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 
 /** Estimated quantities in words. */
 final class PlainNames {
@@ -30,9 +32,16 @@ final class PlainNames {
           Map.entry("profile.centreM", "height of the step"),
           Map.entry("profile.halfWidthM", "half width of the step"));
 
+  private static final Pattern STRETCH = Pattern.compile("profile\\[(\\d+)\\]\\.(.+)");
+
   private PlainNames() {}
 
   static String of(String name) {
-    return NAMES.getOrDefault(name, name);
+    Matcher stretch = STRETCH.matcher(name);
+    return stretch.matches()
+        ? NAMES.getOrDefault("profile." + stretch.group(2), name)
+            + " of stretch "
+            + (1 + Integer.parseInt(stretch.group(1)))
+        : NAMES.getOrDefault(name, name);
   }
 }

@@ -7,11 +7,13 @@ import plumbray.calibration.camera.Camera;
 import plumbray.calibration.sight.Reference;
 import plumbray.calibration.sight.Region;
 import plumbray.calibration.sight.Sight;
+import plumbray.calibration.sight.SightAir;
 import plumbray.raymodel.air.AirColumn;
 import plumbray.raymodel.mapping.FanRequest;
 import plumbray.raymodel.mapping.RayFan;
 import plumbray.raymodel.mapping.SightMapping;
-import plumbray.raymodel.profile.ProfileFamily;
+import plumbray.raymodel.ray.PathAir;
+import plumbray.raymodel.ray.RayTracer;
 import plumbray.raymodel.ray.StraightRay;
 import plumbray.raymodel.ray.TabulatedMedium;
 
@@ -77,26 +79,38 @@ public final class SightOptics {
             targets.stream().mapToDouble(Double::doubleValue).toArray(),
             TOLERANCE_PX * camera.radPerPx(),
             !estimated.isEmpty());
-    RayFan fan = RayFan.trace(new TabulatedMedium(column), sight.path().path(), request);
+    RayFan fan =
+        RayFan.trace(
+            air(sight, estimated), sight.path().path(), request, RayTracer.DEFAULT_TOLERANCE_M);
     return new SightOptics(sight, camera, column, fan);
   }
 
-  /** The air over the ground of a sight, with derivatives by the quantities named. */
+  /**
+   * The air over the ground at the camera, with derivatives by the quantities named; those of other
+   * stretches count among them and have none.
+   */
   public static AirColumn column(Sight sight, List<String> estimated) {
-    ProfileFamily family =
-        sight
-            .profile()
-            .family()
-            .orElseThrow(
-                () ->
-                    new IllegalArgumentException(
-                        "profile.family is best, must be one family (the air is not known before a"
-                            + " fit has chosen)"));
-    return AirColumn.of(
-        sight.air().state(),
-        sight.air().atHeightM(),
-        family.profile(sight.profile().values(), sight.profile().stability()),
-        EstimateLayout.of(sight, estimated).columnParameters());
+    return column(sight, estimated, 0);
+  }
+
+  /** The air over the ground of a stretch, 0 at the camera; otherwise as over the first. */
+  public static AirColumn column(Sight sight, List<String> estimated, int stretch) {
+    if (sight.profile().family().isEmpty()) {
+      throw new IllegalArgumentException(
+          "profile.family is best, must be one family (the air is not known before a fit has"
+              + " chosen)");
+    }
+    int[] carried = EstimateLayout.of(sight, estimated).columnParameters(stretch);
+    return SightAir.column(sight, stretch, carried);
+  }
+
+  /** The air along the path, tabulated, with derivatives by the quantities named. */
+  static PathAir air(Sight sight, List<String> estimated) {
+    List<TabulatedMedium> media = new ArrayList<>();
+    for (int i = 0; i < sight.profile().stretches().size(); i++) {
+      media.add(new TabulatedMedium(column(sight, estimated, i)));
+    }
+    return SightAir.along(sight, media);
   }
 
   /** Apparent elevations that the picture spans, with a margin, rad. */
@@ -155,7 +169,7 @@ public final class SightOptics {
     return camera;
   }
 
-  /** The air; for one thread at a time. */
+  /** The air at the camera; for one thread at a time. */
   public AirColumn column() {
     return column;
   }

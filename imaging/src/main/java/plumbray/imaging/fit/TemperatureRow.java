@@ -24,9 +24,14 @@ public record TemperatureRow(
   private static final double LOWEST_M = 0.001;
   private static final int PER_DECADE = 16;
 
-  /** The temperature profile from the ground to some way above the camera. */
+  /** The temperature profile at the camera, from the ground to some way above the camera. */
   public static List<TemperatureRow> of(Sight sight, Estimates estimates) {
-    AirColumn column = SightOptics.column(sight, estimates.names());
+    return of(sight, estimates, 0);
+  }
+
+  /** The temperature profile over a stretch of the path, 0 at the camera. */
+  public static List<TemperatureRow> of(Sight sight, Estimates estimates, int stretch) {
+    AirColumn column = SightOptics.column(sight, estimates.names(), stretch);
     EstimateLayout layout = EstimateLayout.of(sight, estimates.names());
     double top = Math.max(5.0, 2.0 * sight.camera().heightM().value());
     List<TemperatureRow> rows = new ArrayList<>();

@@ -1,14 +1,17 @@
 package plumbray.imaging.scene;
 
+import java.util.List;
 import java.util.stream.DoubleStream;
+import java.util.stream.IntStream;
 import plumbray.calibration.camera.Camera;
 import plumbray.calibration.sight.Sight;
+import plumbray.calibration.sight.SightAir;
 import plumbray.imaging.photo.Photo;
 import plumbray.raymodel.air.AirColumn;
 import plumbray.raymodel.mapping.FanRequest;
 import plumbray.raymodel.mapping.RayFan;
 import plumbray.raymodel.path.SightPath;
-import plumbray.raymodel.profile.TemperatureProfile;
+import plumbray.raymodel.ray.RayTracer;
 import plumbray.raymodel.ray.StraightRay;
 
 /**
@@ -48,22 +51,22 @@ public final class Simulation {
     this.scene = scene;
     this.camera = sight.camera().camera();
     this.path = sight.path().path();
-    this.air = air(sight);
+    List<AirColumn> columns = columns(sight);
+    this.air = columns.get(0);
     this.nodes = nodes();
-    this.fan = RayFan.trace(air, path, request());
+    this.fan =
+        RayFan.trace(
+            SightAir.along(sight, columns), path, request(), RayTracer.DEFAULT_TOLERANCE_M);
   }
 
-  private static AirColumn air(Sight sight) {
-    TemperatureProfile profile =
-        sight
-            .profile()
-            .family()
-            .orElseThrow(
-                () ->
-                    new IllegalArgumentException(
-                        "profile.family is \"best\", must be one family (the air to simulate)"))
-            .profile(sight.profile().values(), sight.profile().stability());
-    return AirColumn.of(sight.air().state(), sight.air().atHeightM(), profile);
+  private static List<AirColumn> columns(Sight sight) {
+    if (sight.profile().family().isEmpty()) {
+      throw new IllegalArgumentException(
+          "profile.family is \"best\", must be one family (the air to simulate)");
+    }
+    return IntStream.range(0, sight.profile().stretches().size())
+        .mapToObj(i -> SightAir.column(sight, i, new int[0]))
+        .toList();
   }
 
   private ElevationTable.Nodes nodes() {
