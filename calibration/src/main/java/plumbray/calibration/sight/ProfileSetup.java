@@ -7,6 +7,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Objects;
 import java.util.Optional;
+import java.util.stream.Collectors;
 import plumbray.calibration.quantity.Quantity;
 import plumbray.raymodel.profile.ProfileFamily;
 import plumbray.raymodel.profile.ProfileParameter;
@@ -66,13 +67,15 @@ public record ProfileSetup(
   private static void checkStretches(Optional<ProfileFamily> family, List<StretchSetup> further) {
     if (family.isEmpty() && !further.isEmpty()) {
       throw new IllegalArgumentException(
-          "profile has stretches and no family, must have one (the stretch at the camera); name it");
+          "profile has stretches and no family, must have one (the stretch at the camera); name"
+              + " it");
     }
     double endM = 0.0;
     for (StretchSetup next : further) {
       if (!(next.startM() >= endM)) {
         throw new IllegalArgumentException(
-            "the blend at %s m begins at %s m, must begin at %s m or later (end of the blend before, or the camera); shorten it"
+            ("the blend at %s m begins at %s m, must begin at %s m or later (end of the blend"
+                    + " before, or the camera); shorten it")
                 .formatted(next.fromM(), next.startM(), endM));
       }
       endM = next.endM();
@@ -97,6 +100,14 @@ public record ProfileSetup(
     all.add(withFurther(List.of()));
     further.forEach(stretch -> all.add(stretch.profile()));
     return all;
+  }
+
+  /** The families of all stretches by their keys, from the camera on; empty where it is open. */
+  public String familyKeys() {
+    return stretches().stream()
+        .flatMap(profile -> profile.family().stream())
+        .map(ProfileFamily::key)
+        .collect(Collectors.joining(" "));
   }
 
   /**

@@ -6,7 +6,6 @@ import java.util.OptionalDouble;
 import plumbray.cli.document.FitDocument;
 import plumbray.cli.document.Numbers;
 import plumbray.imaging.fit.SightLine;
-import plumbray.raymodel.profile.ProfileFamily;
 
 /** Says results shortly, a line each. */
 final class ResultLines {
@@ -51,7 +50,7 @@ final class ResultLines {
     if (fit.error().isPresent()) {
       return name + ": failed: " + fit.error().get();
     }
-    String family = fit.sight().profile().family().map(ProfileFamily::key).orElse("");
+    String family = fit.sight().profile().familyKeys();
     return "%s: %s, %s, rms %s px over %d rows"
         .formatted(
             name,

@@ -1,5 +1,6 @@
 package plumbray.cli.document;
 
+import java.util.List;
 import plumbray.calibration.sight.AirSetup;
 import plumbray.calibration.sight.ProfileSetup;
 import plumbray.raymodel.profile.ProfileFamily;
@@ -23,6 +24,18 @@ final class AirCheck {
     if (profile.family().isEmpty()) {
       return;
     }
+    if (!profileNode.isArray()) {
+      checkOne(profileNode, profile, air, cameraHeightM);
+      return;
+    }
+    List<Node> nodes = profileNode.elements("stretches");
+    for (int i = 0; i < nodes.size(); i++) {
+      checkOne(nodes.get(i), profile.stretches().get(i), air, cameraHeightM);
+    }
+  }
+
+  private static void checkOne(
+      Node profileNode, ProfileSetup profile, AirSetup air, double cameraHeightM) {
     ProfileFamily family = profile.family().get();
     TemperatureProfile shape = family.profile(profile.values(), profile.stability());
     double offsetK = air.temperatureK().value() - at(shape, air.atHeightM());

@@ -12,6 +12,7 @@ import plumbray.imaging.fit.FitStatus;
 import plumbray.imaging.fit.Residuals;
 import plumbray.imaging.fit.SightLine;
 import plumbray.imaging.fit.SightOptics;
+import plumbray.imaging.fit.StretchTemperatures;
 import plumbray.imaging.fit.TemperatureRow;
 import plumbray.imaging.fit.Warning;
 
@@ -27,7 +28,8 @@ import plumbray.imaging.fit.Warning;
  * @param residuals what was left unexplained
  * @param jitterPx standard deviation of the shimmer found in the picture, px
  * @param alternatives the families tried, where the data chose
- * @param temperatures temperature against height; empty where the fit failed
+ * @param temperatures temperature against height at the camera; empty where the fit failed
+ * @param stretchTemperatures the same over the stretches of the path after the first
  * @param sightLines what can be seen at each distance in use; empty where the fit failed
  * @param inputs what the fit was made from
  * @param outputs the files that were written with it
@@ -43,6 +45,7 @@ public record FitDocument(
     double jitterPx,
     List<Alternative> alternatives,
     List<TemperatureRow> temperatures,
+    List<StretchTemperatures> stretchTemperatures,
     List<SightLine> sightLines,
     List<Digest> inputs,
     List<Digest> outputs,
@@ -56,6 +59,7 @@ public record FitDocument(
     warnings = List.copyOf(warnings);
     alternatives = List.copyOf(alternatives);
     temperatures = List.copyOf(temperatures);
+    stretchTemperatures = List.copyOf(stretchTemperatures);
     sightLines = List.copyOf(sightLines);
     inputs = List.copyOf(inputs);
     outputs = List.copyOf(outputs);
@@ -72,6 +76,7 @@ public record FitDocument(
     return of(
         result,
         TemperatureRow.of(result.sight(), result.estimates()),
+        StretchTemperatures.of(result.sight(), result.estimates()),
         SightLine.of(optics),
         inputs);
   }
@@ -83,12 +88,13 @@ public record FitDocument(
    * @param inputs what it was made from
    */
   public static FitDocument failed(FitResult result, List<Digest> inputs) {
-    return of(result, List.of(), List.of(), inputs);
+    return of(result, List.of(), List.of(), List.of(), inputs);
   }
 
   private static FitDocument of(
       FitResult result,
       List<TemperatureRow> temperatures,
+      List<StretchTemperatures> stretches,
       List<SightLine> sightLines,
       List<Digest> inputs) {
     return new FitDocument(
@@ -101,6 +107,7 @@ public record FitDocument(
         result.jitterPx(),
         result.alternatives(),
         temperatures,
+        stretches,
         sightLines,
         inputs,
         List.of(),
@@ -123,6 +130,7 @@ public record FitDocument(
         jitterPx,
         alternatives,
         temperatures,
+        stretchTemperatures,
         sightLines,
         inputs,
         written,

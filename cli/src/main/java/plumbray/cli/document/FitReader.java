@@ -11,6 +11,7 @@ import plumbray.imaging.fit.Estimates;
 import plumbray.imaging.fit.FitStatus;
 import plumbray.imaging.fit.Residuals;
 import plumbray.imaging.fit.SightLine;
+import plumbray.imaging.fit.StretchTemperatures;
 import plumbray.imaging.fit.TemperatureRow;
 import plumbray.imaging.fit.Warning;
 import plumbray.raymodel.profile.ProfileFamily;
@@ -33,6 +34,7 @@ public final class FitReader {
           "residuals",
           "alternatives",
           "temperatureProfile",
+          "stretchTemperatureProfiles",
           "sightLines",
           "sight",
           "inputs",
@@ -88,6 +90,7 @@ public final class FitReader {
         residuals.orNaN("jitterPx"),
         rows("alternatives", FitReader::alternative),
         rows("temperatureProfile", FitReader::temperature),
+        stretchTemperatures(),
         rows("sightLines", FitReader::sightLine),
         rows("inputs", FitReader::digest),
         rows("outputs", FitReader::digest),
@@ -131,6 +134,23 @@ public final class FitReader {
         node.orNaN("informationCriterion"),
         node.orNaN("rmsPx"),
         status(node));
+  }
+
+  private List<StretchTemperatures> stretchTemperatures() {
+    return root.has("stretchTemperatureProfiles")
+        ? rows("stretchTemperatureProfiles", FitReader::stretchTemperatures)
+        : List.of();
+  }
+
+  private static StretchTemperatures stretchTemperatures(Node node) {
+    return new StretchTemperatures(
+        node.orNaN(StretchReader.FROM),
+        node
+            .get("temperatureProfile", "temperature against height")
+            .elements("temperature against height")
+            .stream()
+            .map(FitReader::temperature)
+            .toList());
   }
 
   private static TemperatureRow temperature(Node node) {

@@ -1,5 +1,6 @@
 package plumbray.cli.document;
 
+import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.List;
@@ -7,10 +8,12 @@ import java.util.Map;
 import plumbray.calibration.quantity.Quantity;
 import plumbray.calibration.sight.CameraSetup;
 import plumbray.calibration.sight.ProfileSetup;
+import plumbray.calibration.sight.StretchSetup;
 import plumbray.imaging.fit.Alternative;
 import plumbray.imaging.fit.Estimates;
 import plumbray.imaging.fit.Residuals;
 import plumbray.imaging.fit.SightLine;
+import plumbray.imaging.fit.StretchTemperatures;
 import plumbray.imaging.fit.TemperatureRow;
 import plumbray.imaging.fit.Warning;
 import plumbray.raymodel.profile.ProfileFamily;
@@ -49,8 +52,15 @@ public final class FitWriter {
     root.set("residuals", residuals(fit.residuals()));
     ArrayNode alternatives = root.putArray("alternatives");
     fit.alternatives().forEach(alternative -> alternatives.add(alternative(alternative)));
-    ArrayNode temperatures = root.putArray("temperatureProfile");
-    fit.temperatures().forEach(row -> temperatures.add(temperature(row)));
+    root.set("temperatureProfile", temperatures(fit.temperatures()));
+    if (!fit.stretchTemperatures().isEmpty()) {
+      ArrayNode stretches = root.putArray("stretchTemperatureProfiles");
+      for (StretchTemperatures stretch : fit.stretchTemperatures()) {
+        ObjectNode object = stretches.addObject();
+        object.set(StretchReader.FROM, Json.number(stretch.fromM()));
+        object.set("temperatureProfile", temperatures(stretch.rows()));
+      }
+    }
     ArrayNode sightLines = root.putArray("sightLines");
     fit.sightLines().forEach(line -> sightLines.add(sightLine(line)));
     root.set("sight", SightWriter.write(fit.sight()));
@@ -70,11 +80,24 @@ public final class FitWriter {
     return Json.object().put("code", warning.code()).put("message", warning.message());
   }
 
-  private ObjectNode profile(ProfileSetup profile) {
-    ObjectNode object = Json.object();
+  private JsonNode profile(ProfileSetup profile) {
+    if (profile.further().isEmpty()) {
+      return putProfile(Json.object(), profile, profile.prefix(0));
+    }
+    ArrayNode list = Json.array();
+    list.add(putProfile(Json.object().put(StretchReader.FROM, 0), profile, profile.prefix(0)));
+    for (int i = 0; i < profile.further().size(); i++) {
+      StretchSetup stretch = profile.further().get(i);
+      ObjectNode bounds = SightWriter.bounds(stretch);
+      list.add(putProfile(bounds, stretch.profile(), profile.prefix(i + 1)));
+    }
+    return list;
+  }
+
+  private ObjectNode putProfile(ObjectNode object, ProfileSetup profile, String prefix) {
     object.put("family", profile.family().map(ProfileFamily::key).orElse(ProfileReader.BEST));
     for (Map.Entry<String, Quantity> entry : profile.quantities().entrySet()) {
-      add(object, "profile." + entry.getKey(), entry.getValue());
+      add(object, prefix + entry.getKey(), entry.getValue());
     }
     if (profile.family().filter(ProfileFamily.SIMILARITY::equals).isPresent()) {
       object.put("stability", profile.stability().key());
@@ -136,6 +159,12 @@ public final class FitWriter {
     object.set("informationCriterion", Json.number(alternative.informationCriterion()));
     object.set("rmsPx", Json.number(alternative.rmsPx()));
     return object.put("status", alternative.status().key());
+  }
+
+  private static ArrayNode temperatures(List<TemperatureRow> rows) {
+    ArrayNode array = Json.array();
+    rows.forEach(row -> array.add(temperature(row)));
+    return array;
   }
 
   private static ObjectNode temperature(TemperatureRow row) {

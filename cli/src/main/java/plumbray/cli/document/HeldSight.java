@@ -68,7 +68,10 @@ public record HeldSight(Path file, Sight sight, Estimates estimates, double jitt
       throw new InputException(
           file
               + ": /"
-              + EstimateName.ofInside(open.get(0).name()).name().replace('.', '/')
+              + EstimateName.ofInside(open.get(0).name())
+                  .name()
+                  .replaceAll("[.\\[]", "/")
+                  .replace("]", "")
               + " is to be estimated, must be held (one of the sight's quantities); fit it first,"
               + " and use the fit, or write its value alone");
     }

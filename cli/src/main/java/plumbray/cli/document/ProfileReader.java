@@ -1,6 +1,7 @@
 package plumbray.cli.document;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -24,10 +25,7 @@ final class ProfileReader {
 
   static ProfileSetup read(Node profile) {
     if (profile.isArray()) {
-      throw profile.wrong(
-          "a list of stretches",
-          "one profile",
-          "temperature against height; this release does not read stretches");
+      return StretchReader.read(profile);
     }
     Node name = family(profile);
     String key = name.choice(FAMILY, families());
@@ -35,8 +33,25 @@ final class ProfileReader {
       profile.onlyKeys("all families are tried; none of their keys is given", List.of("family"));
       return new ProfileSetup(Optional.empty(), Map.of(), Stability.DYER);
     }
-    ProfileFamily family = ProfileFamily.ofKey(key).orElseThrow();
-    profile.onlyKeys("the profile of the family " + key, keys(family));
+    return ofFamily(profile, ProfileFamily.ofKey(key).orElseThrow(), List.of());
+  }
+
+  /** The profile of one stretch, which has keys of its own besides the family's. */
+  static ProfileSetup readStretch(Node stretch, List<String> ownKeys) {
+    Node name = family(stretch);
+    if (BEST.equals(name.json().textValue())) {
+      throw name.wrong(
+          "one of " + String.join(", ", named()),
+          FAMILY + "; in a list of stretches each must be named");
+    }
+    String key = name.choice(FAMILY, named());
+    return ofFamily(stretch, ProfileFamily.ofKey(key).orElseThrow(), ownKeys);
+  }
+
+  private static ProfileSetup ofFamily(Node profile, ProfileFamily family, List<String> ownKeys) {
+    List<String> keys = new ArrayList<>(ownKeys);
+    keys.addAll(keys(family));
+    profile.onlyKeys("the profile of the family " + family.key(), keys);
     return new ProfileSetup(Optional.of(family), quantities(profile, family), stability(profile));
   }
 
@@ -54,12 +69,13 @@ final class ProfileReader {
   }
 
   private static List<String> families() {
-    List<String> keys = new ArrayList<>();
-    for (ProfileFamily family : ProfileFamily.values()) {
-      keys.add(family.key());
-    }
+    List<String> keys = new ArrayList<>(named());
     keys.add(BEST);
     return keys;
+  }
+
+  private static List<String> named() {
+    return Arrays.stream(ProfileFamily.values()).map(ProfileFamily::key).toList();
   }
 
   private static List<String> keys(ProfileFamily family) {

@@ -1,5 +1,6 @@
 package plumbray.cli.document;
 
+import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.List;
@@ -9,6 +10,7 @@ import plumbray.calibration.sight.PathSetup;
 import plumbray.calibration.sight.ProfileSetup;
 import plumbray.calibration.sight.Region;
 import plumbray.calibration.sight.Sight;
+import plumbray.calibration.sight.StretchSetup;
 import plumbray.raymodel.profile.ProfileFamily;
 import plumbray.raymodel.profile.ProfileParameter;
 
@@ -79,8 +81,27 @@ final class SightWriter {
     return object;
   }
 
-  private static ObjectNode profile(ProfileSetup profile) {
+  private static JsonNode profile(ProfileSetup profile) {
+    if (profile.further().isEmpty()) {
+      return putProfile(Json.object(), profile);
+    }
+    ArrayNode list = Json.array();
+    list.add(putProfile(Json.object().put(StretchReader.FROM, 0), profile));
+    for (StretchSetup stretch : profile.further()) {
+      list.add(putProfile(bounds(stretch), stretch.profile()));
+    }
+    return list;
+  }
+
+  /** Where a stretch begins, and how. */
+  static ObjectNode bounds(StretchSetup stretch) {
     ObjectNode object = Json.object();
+    object.set(StretchReader.FROM, Json.number(stretch.fromM()));
+    object.set(StretchReader.BLEND, Json.number(stretch.blendM()));
+    return object;
+  }
+
+  private static ObjectNode putProfile(ObjectNode object, ProfileSetup profile) {
     if (profile.family().isEmpty()) {
       return object.put("family", ProfileReader.BEST);
     }

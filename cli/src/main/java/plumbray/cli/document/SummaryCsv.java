@@ -6,11 +6,11 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.stream.Collectors;
 import plumbray.calibration.quantity.Quantity;
+import plumbray.calibration.sight.ProfileSetup;
 import plumbray.imaging.fit.Estimates;
 import plumbray.imaging.fit.FitStatus;
 import plumbray.imaging.fit.SightLine;
 import plumbray.imaging.fit.Warning;
-import plumbray.raymodel.profile.ProfileFamily;
 
 /**
  * Writes the summary of a batch, one line a photo. The columns of the sight line are those of the
@@ -59,7 +59,7 @@ public final class SummaryCsv {
         fit.status().key(),
         fit.error().orElse(""),
         fit.warnings().stream().map(Warning::code).distinct().collect(Collectors.joining(" ")),
-        fit.sight().profile().family().map(ProfileFamily::key).orElse(ProfileReader.BEST),
+        family(fit.sight().profile()),
         String.valueOf(fit.residuals().count()),
         digits(fit.residuals().rmsPx()),
         failed ? "" : digits(Unit.MILLIRADIAN.fromSi(pitch.value())),
@@ -87,6 +87,10 @@ public final class SummaryCsv {
     fields[2] = FitStatus.FAILED.key();
     fields[3] = error;
     table.add(fields);
+  }
+
+  private static String family(ProfileSetup profile) {
+    return profile.family().isPresent() ? profile.familyKeys() : ProfileReader.BEST;
   }
 
   private static double sigmaPitchRad(Estimates estimates) {

@@ -1,10 +1,12 @@
 package plumbray.cli.report;
 
+import java.util.ArrayList;
 import java.util.List;
 import java.util.function.ToDoubleFunction;
 import java.util.stream.DoubleStream;
 import plumbray.calibration.sight.Sight;
 import plumbray.cli.report.markup.Markup;
+import plumbray.cli.report.markup.NumberText;
 import plumbray.cli.report.plot.Axis;
 import plumbray.cli.report.plot.AxisKind;
 import plumbray.cli.report.plot.Band;
@@ -14,6 +16,8 @@ import plumbray.cli.report.plot.Line;
 import plumbray.cli.report.plot.Plot;
 import plumbray.cli.report.plot.Stroke;
 import plumbray.cli.report.plot.Stroke.Dash;
+import plumbray.imaging.fit.Estimates;
+import plumbray.imaging.fit.StretchTemperatures;
 import plumbray.imaging.fit.TemperatureRow;
 
 /** Temperature and its gradient against height. */
@@ -26,18 +30,33 @@ final class AirSection implements Section {
   /** g/R of dry air, K/m: with this fall of temperature the refractive index is the same above. */
   private static final double AUTOCONVECTIVE_K_PER_M = -0.0341;
 
+  private final String heading;
   private final Sight sight;
   private final List<TemperatureRow> rows;
 
-  AirSection(Sight sight, List<TemperatureRow> rows) {
+  private AirSection(String heading, Sight sight, List<TemperatureRow> rows) {
+    this.heading = heading;
     this.sight = sight;
     this.rows = rows;
+  }
+
+  /** A section for each stretch of the path. */
+  static List<Section> of(Sight sight, Estimates estimates) {
+    List<StretchTemperatures> stretches = StretchTemperatures.of(sight, estimates);
+    String first = stretches.isEmpty() ? "The air" : "The air at the camera";
+    List<Section> sections = new ArrayList<>();
+    sections.add(new AirSection(first, sight, TemperatureRow.of(sight, estimates)));
+    for (StretchTemperatures stretch : stretches) {
+      String from = "The air from " + NumberText.significant(stretch.fromM(), 6) + " m on";
+      sections.add(new AirSection(from, sight, stretch.rows()));
+    }
+    return sections;
   }
 
   @Override
   public void addTo(Markup page) {
     page.open("section");
-    page.leaf("h2", "The air");
+    page.leaf("h2", heading);
     page.open("div", "class", "pair");
     page.open("figure").add(temperature());
     page.leaf(

@@ -6,7 +6,9 @@ import java.util.Map;
 import plumbray.calibration.quantity.Quantity;
 import plumbray.calibration.sight.AirSetup;
 import plumbray.calibration.sight.CameraSetup;
+import plumbray.calibration.sight.ProfileSetup;
 import plumbray.calibration.sight.Sight;
+import plumbray.calibration.sight.StretchSetup;
 import plumbray.cli.report.markup.Markup;
 import plumbray.cli.report.markup.NumberText;
 import plumbray.raymodel.profile.ProfileFamily;
@@ -33,7 +35,7 @@ final class GivenSection implements Section {
     Table table = new Table("Quantity", "Value", "Unit").words(0, 2);
     CameraSetup camera = sight.camera();
     AirSetup air = sight.air();
-    table.row("Family of profiles", family(), "");
+    addFamilies(table);
     table.row("Picture", camera.widthPx() + " \u00d7 " + camera.heightPx(), "px");
     table.row("Pixel pitch", number(camera.pixelPitchM() * UM_PER_M), "\u00b5m");
     quantities().forEach((name, quantity) -> addQuantity(table, name, quantity));
@@ -45,8 +47,18 @@ final class GivenSection implements Section {
     page.close();
   }
 
-  private String family() {
-    return sight.profile().family().map(ProfileFamily::key).orElse("left to the fit");
+  private void addFamilies(Table table) {
+    ProfileSetup profile = sight.profile();
+    table.row("Family of profiles", family(profile), "");
+    for (StretchSetup stretch : profile.further()) {
+      table.row("Family of profiles further on", family(stretch.profile()), "");
+      table.row("which begins at", number(stretch.fromM()), "m");
+      table.row("blending over", number(stretch.blendM()), "m");
+    }
+  }
+
+  private static String family(ProfileSetup profile) {
+    return profile.family().map(ProfileFamily::key).orElse("left to the fit");
   }
 
   private static String number(double value) {
@@ -63,7 +75,11 @@ final class GivenSection implements Section {
     all.put("air.temperatureK", sight.air().temperatureK());
     all.put("air.pressurePa", sight.air().pressurePa());
     all.put("air.relativeHumidity", sight.air().relativeHumidity());
-    sight.profile().quantities().forEach((key, quantity) -> all.put("profile." + key, quantity));
+    List<ProfileSetup> stretches = sight.profile().stretches();
+    for (int i = 0; i < stretches.size(); i++) {
+      String prefix = sight.profile().prefix(i);
+      stretches.get(i).quantities().forEach((key, quantity) -> all.put(prefix + key, quantity));
+    }
     for (int i = 0; i < sight.references().size(); i++) {
       all.put("references[" + i + "].footM", sight.references().get(i).footM());
     }

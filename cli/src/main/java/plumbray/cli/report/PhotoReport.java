@@ -7,7 +7,6 @@ import plumbray.imaging.fit.FitResult;
 import plumbray.imaging.fit.FitStatus;
 import plumbray.imaging.fit.SightLine;
 import plumbray.imaging.fit.SightOptics;
-import plumbray.imaging.fit.TemperatureRow;
 
 /** The page of one photo: whether to trust the fit, what it found, and how it was come by. */
 public final class PhotoReport {
@@ -49,7 +48,6 @@ public final class PhotoReport {
     sections.add(new MappingSection(optics));
     sections.add(new DisplacementSection(optics, result.estimates()));
     sections.add(new SightLineSection(lines));
-    sections.add(
-        new AirSection(result.sight(), TemperatureRow.of(result.sight(), result.estimates())));
+    sections.addAll(AirSection.of(result.sight(), result.estimates()));
   }
 }

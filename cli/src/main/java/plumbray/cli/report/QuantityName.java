@@ -19,6 +19,7 @@ import plumbray.cli.report.markup.NumberText;
 record QuantityName(String label, String unit, double perSi, double offset) {
 
   private static final Pattern FOOT = Pattern.compile("references\\[(\\d+)\\]\\.footM");
+  private static final Pattern STRETCH = Pattern.compile("profile\\[(\\d+)\\]\\.(.+)");
   private static final String OF_PROFILE = "profile.";
   private static final double ZERO_CELSIUS_K = 273.15;
 
@@ -59,6 +60,13 @@ record QuantityName(String label, String unit, double perSi, double offset) {
     Matcher foot = FOOT.matcher(name);
     if (foot.matches()) {
       return foot(Integer.parseInt(foot.group(1)), references);
+    }
+    Matcher stretch = STRETCH.matcher(name);
+    if (stretch.matches()) {
+      QuantityName plain = of(OF_PROFILE + stretch.group(2), references);
+      int nth = 1 + Integer.parseInt(stretch.group(1));
+      return new QuantityName(
+          plain.label + ", stretch " + nth, plain.unit, plain.perSi, plain.offset);
     }
     return Optional.ofNullable(KNOWN.get(name))
         .orElseGet(() -> new QuantityName(name.replace(OF_PROFILE, ""), "", 1.0, 0.0));

@@ -1,12 +1,12 @@
 package plumbray.cli.report;
 
+import java.util.ArrayList;
 import java.util.List;
 import plumbray.calibration.sight.Sight;
 import plumbray.cli.report.markup.Markup;
 import plumbray.imaging.fit.Estimates;
 import plumbray.imaging.fit.SightLine;
 import plumbray.imaging.fit.SightOptics;
-import plumbray.imaging.fit.TemperatureRow;
 
 /** The page of a planned sight: what the air would do to it, without a photo. */
 public final class SightReport {
@@ -38,15 +38,14 @@ public final class SightReport {
    */
   public String html() {
     SightOptics optics = SightOptics.of(sight);
-    List<Section> sections =
-        List.of(
-            SightReport::lead,
-            new SightLineSection(SightLine.of(optics)),
-            new MappingSection(optics),
-            new DisplacementSection(optics, known),
-            new AirSection(sight, TemperatureRow.of(sight, known)),
-            new GivenSection(sight, List.of()),
-            new OriginSection(provenance));
+    List<Section> sections = new ArrayList<>();
+    sections.add(SightReport::lead);
+    sections.add(new SightLineSection(SightLine.of(optics)));
+    sections.add(new MappingSection(optics));
+    sections.add(new DisplacementSection(optics, known));
+    sections.addAll(AirSection.of(sight, known));
+    sections.add(new GivenSection(sight, List.of()));
+    sections.add(new OriginSection(provenance));
     return new Page(name, "Plumbray \u00b7 planned sight \u00b7 " + sight.name(), sections).html();
   }
 

@@ -17,6 +17,7 @@ import plumbray.cli.report.SightReport;
 import plumbray.imaging.fit.Estimates;
 import plumbray.imaging.fit.SightLine;
 import plumbray.imaging.fit.SightOptics;
+import plumbray.imaging.fit.StretchTemperatures;
 import plumbray.imaging.fit.TemperatureRow;
 import plumbray.imaging.measure.MappingRow;
 
@@ -41,7 +42,9 @@ public final class TraceWorker {
     Estimates known = knownBeforehand(sight);
     SightOptics optics = Tracing.optics(sightFile, sight, known.names());
     WholeFile.write(files.mapping(), MappingCsv.text(MappingRow.of(optics, known)));
-    WholeFile.write(files.temperatures(), TemperatureCsv.text(TemperatureRow.of(sight, known)));
+    WholeFile.write(
+        files.temperatures(),
+        TemperatureCsv.text(TemperatureRow.of(sight, known), StretchTemperatures.of(sight, known)));
     Digest input = Digest.of(sightFile.getFileName().toString(), text);
     Provenance provenance = new Provenance(List.of(input), ProgramVersion.name());
     WholeFile.write(files.page(), new SightReport(files.name(), sight, known, provenance).html());
