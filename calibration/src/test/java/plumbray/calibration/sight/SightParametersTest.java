@@ -177,4 +177,38 @@ class SightParametersTest {
     assertThatThrownBy(() -> new ProfileSetup(Optional.empty(), lacking, Stability.DYER))
         .hasMessageStartingWith("profile.scaleHeightM is present, must be one of []");
   }
+
+  @Test
+  void stretchesOfAPathHaveQuantitiesOfTheirOwn() {
+    StretchSetup second = new StretchSetup(250, 20, profile());
+    Sight two = sight().withProfile(profile().withFurther(List.of(second)));
+    SightParameters parameters = SightParameters.of(two);
+    assertThat(parameters.names())
+        .contains("profile[0].surfaceExcessK", "profile[1].surfaceExcessK")
+        .doesNotContain("profile.surfaceExcessK");
+    double[] values = parameters.values();
+    values[parameters.indexOf("profile[1].surfaceExcessK")] = 3;
+    ProfileSetup changed = parameters.heldAt(values).profile();
+    assertThat(changed.quantities().get("surfaceExcessK")).isEqualTo(Quantity.held(15));
+    assertThat(changed.further().get(0).profile().quantities().get("surfaceExcessK"))
+        .isEqualTo(Quantity.held(3));
+    assertThat(changed.further().get(0).blendM()).isEqualTo(20);
+  }
+
+  @Test
+  void stretchesThatDoNotFitTogetherAreRefused() {
+    StretchSetup second = new StretchSetup(250, 20, profile());
+    StretchSetup third = new StretchSetup(255, 20, profile());
+    assertThatThrownBy(() -> profile().withFurther(List.of(second, third)))
+        .hasMessage(
+            "the blend at 255.0 m begins at 245.0 m, must begin at 260.0 m or later (end of the"
+                + " blend before, or the camera); shorten it");
+    ProfileSetup open = new ProfileSetup(Optional.empty(), Map.of(), Stability.DYER);
+    assertThatThrownBy(() -> new StretchSetup(250, 20, open))
+        .hasMessageContaining("must have one family of profiles");
+    assertThatThrownBy(() -> new StretchSetup(250, 0, profile()))
+        .hasMessage(
+            "blendM is 0.0 m, must be at least 0.1 m (length over which a stretch takes over);"
+                + " correct it");
+  }
 }

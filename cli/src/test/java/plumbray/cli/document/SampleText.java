@@ -27,6 +27,19 @@ record SampleText(String file, String text) {
     return of("least.sight.json");
   }
 
+  /** The least, over asphalt, then grass, then cold water. */
+  static SampleText stretches() {
+    return least()
+        .with(
+            "{\"family\": \"uniform\"}",
+            "[{\"fromM\": 0, \"family\": \"exponential\", \"surfaceExcessK\": {\"value\": 12},"
+                + " \"scaleHeightM\": 0.1},"
+                + " {\"fromM\": 250, \"blendM\": 20, \"family\": \"exponential\","
+                + " \"surfaceExcessK\": {\"value\": 3, \"sigma\": 1}, \"scaleHeightM\": 0.2},"
+                + " {\"fromM\": 300, \"blendM\": 50, \"family\": \"uniform\","
+                + " \"gradientKPerM\": 0.4}]");
+  }
+
   /** The same with one place changed; the place must be there, so that no case tests nothing. */
   SampleText with(String from, String to) {
     if (!text.contains(from)) {

@@ -42,6 +42,9 @@ class SchemaAgreementTest {
         .isEmpty();
     assertThat(schema(DocumentFormat.SIGHT).validate(SampleText.least().text(), InputFormat.JSON))
         .isEmpty();
+    assertThat(
+            schema(DocumentFormat.SIGHT).validate(SampleText.stretches().text(), InputFormat.JSON))
+        .isEmpty();
   }
 
   @ParameterizedTest
@@ -49,6 +52,7 @@ class SchemaAgreementTest {
     CASES + "camera",
     CASES + "pathAndAir",
     CASES + "profile",
+    CASES + "stretches",
     CASES + "referencesAndRegions"
   })
   void brokenSightsDoNotHold(SampleText sample, String message) {
@@ -57,7 +61,8 @@ class SchemaAgreementTest {
 
   @Test
   void whatTheProgramWritesHolds() {
-    for (SampleText sample : new SampleText[] {SampleText.everything(), SampleText.least()}) {
+    for (SampleText sample :
+        new SampleText[] {SampleText.everything(), SampleText.least(), SampleText.stretches()}) {
       var sight = SightReader.read(sample.file(), sample.bytes());
       assertThat(holds(DocumentFormat.SIGHT, Json.text(SightWriter.write(sight)))).isTrue();
     }

@@ -10,6 +10,9 @@ import org.junit.jupiter.params.provider.MethodSource;
 
 /** One mistake a case, and the one line that is said about it. */
 class SightMessagesTest {
+  private static final String NAMED =
+      "uniform, exponential, twoScale, logarithmic, power, similarity, step";
+
   private static Arguments everything(String from, String to, String message) {
     return Arguments.of(SampleText.everything().with(from, to), message);
   }
@@ -102,11 +105,6 @@ class SightMessagesTest {
             "/profile/family is \"layered\", must be one of uniform, exponential, twoScale,"
                 + " logarithmic, power, similarity, step, best (family of temperature profiles; this release does not read layered)"),
         least(
-            "{\"family\": \"uniform\"}",
-            "[{\"family\": \"uniform\"}]",
-            "/profile is a list of stretches, must be one profile (temperature against height; this"
-                + " release does not read stretches)"),
-        least(
             "\"uniform\"",
             "\"best\", \"gradientKPerM\": 0",
             "/profile/gradientKPerM is not a known key, must be one of family (all families are"
@@ -115,6 +113,69 @@ class SightMessagesTest {
             "\"uniform\"",
             "\"exponential\", \"surfaceExcessK\": 3",
             "/profile/scaleHeightM is missing, must be given (the profile's scaleHeightM)"));
+  }
+
+  private static Arguments stretches(String list, String message) {
+    return least("{\"family\": \"uniform\"}", "[" + list + "]", message);
+  }
+
+  static Stream<Arguments> stretches() {
+    String first = "{\"fromM\": 0, \"family\": \"uniform\"}";
+    return Stream.of(
+        stretches(
+            "",
+            "/profile is an array of 0, must be of 1 or more (stretches of the path, the first at"
+                + " the camera)"),
+        stretches(
+            "{\"family\": \"uniform\"}",
+            "/profile/0/fromM is missing, must be given (where a stretch of the path begins)"),
+        stretches(
+            "{\"fromM\": 5, \"family\": \"uniform\"}",
+            "/profile/0/fromM is 5 m, must be 0 m (the first stretch begins at the camera)"),
+        stretches(
+            "{\"fromM\": 0, \"blendM\": 9, \"family\": \"uniform\"}",
+            "/profile/0/blendM is not a known key, must be one of fromM, family, gradientKPerM (the"
+                + " profile of the family uniform)"),
+        stretches(
+            first + ", {\"fromM\": 250, \"family\": \"uniform\"}",
+            "/profile/1/blendM is missing, must be given (length over which a stretch takes over,"
+                + " centred on its fromM)"),
+        stretches(
+            first + ", {\"fromM\": 250, \"blendM\": 20, \"family\": \"best\"}",
+            "/profile/1/family is \"best\", must be one of "
+                + NAMED
+                + " (family of temperature profiles; in a list of stretches each must be named)"),
+        stretches(
+            first + ", {\"fromM\": 250, \"blendM\": 0, \"family\": \"uniform\"}",
+            "/profile/1/blendM is 0 m, must be 0.1 to 200000 m (length over which a stretch takes"
+                + " over, centred on its fromM)"));
+  }
+
+  /** What one stretch says about another: more than a schema can express. */
+  static Stream<Arguments> stretchesTogether() {
+    String two =
+        "{\"fromM\": 0, \"family\": \"uniform\"},"
+            + " {\"fromM\": 250, \"blendM\": 20, \"family\": \"uniform\"}, ";
+    return Stream.of(
+        stretches(
+            two + "{\"fromM\": 250, \"blendM\": 20, \"family\": \"uniform\"}",
+            "/profile/2/fromM is 250 m, must be farther than 250 m (each stretch begins after the"
+                + " one before)"),
+        stretches(
+            two + "{\"fromM\": 270, \"blendM\": 22, \"family\": \"uniform\"}",
+            "/profile/2/blendM is 22 m, must be at most 20 m (a blend begins where the one before"
+                + " has ended, or at the camera)"),
+        stretches(
+            "{\"fromM\": 0, \"family\": \"uniform\"},"
+                + " {\"fromM\": 9, \"blendM\": 20, \"family\": \"uniform\"}",
+            "/profile/1/blendM is 20 m, must be at most 18 m (a blend begins where the one before"
+                + " has ended, or at the camera)"),
+        stretches(
+            two
+                + "{\"fromM\": 400, \"blendM\": 22, \"family\": \"exponential\","
+                + " \"surfaceExcessK\": -300, \"scaleHeightM\": 0.2}",
+            "/profile/2 is air of -279.97 C at 0 m, must be -150 to 1200 C (temperature of the"
+                + " air)"));
   }
 
   static Stream<Arguments> referencesAndRegions() {
@@ -238,6 +299,8 @@ class SightMessagesTest {
     "camera",
     "pathAndAir",
     "profile",
+    "stretches",
+    "stretchesTogether",
     "referencesAndRegions",
     "relations",
     "wholeFile"
@@ -253,6 +316,8 @@ class SightMessagesTest {
     "camera",
     "pathAndAir",
     "profile",
+    "stretches",
+    "stretchesTogether",
     "referencesAndRegions",
     "relations",
     "wholeFile"

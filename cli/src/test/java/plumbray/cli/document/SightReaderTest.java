@@ -9,9 +9,11 @@ import plumbray.calibration.quantity.Quantity;
 import plumbray.calibration.sight.ImageBox;
 import plumbray.calibration.sight.PointMark;
 import plumbray.calibration.sight.PointTarget;
+import plumbray.calibration.sight.ProfileSetup;
 import plumbray.calibration.sight.SenseWanted;
 import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.StaffTarget;
+import plumbray.calibration.sight.StretchSetup;
 import plumbray.raymodel.profile.ProfileFamily;
 import plumbray.raymodel.profile.Stability;
 
@@ -124,8 +126,30 @@ class SightReaderTest {
   }
 
   @Test
+  void stretchesAreRead() {
+    ProfileSetup profile = read(SampleText.stretches()).profile();
+    assertThat(profile.familyKeys()).isEqualTo("exponential exponential uniform");
+    assertThat(profile.further()).extracting(StretchSetup::fromM).containsExactly(250.0, 300.0);
+    assertThat(profile.further()).extracting(StretchSetup::blendM).containsExactly(20.0, 50.0);
+    assertThat(profile.quantities())
+        .containsEntry("surfaceExcessK", Quantity.free(12.0).within(-300, 600));
+    assertThat(profile.further().get(0).profile().quantities().get("surfaceExcessK").sigma())
+        .isEqualTo(1.0);
+    assertThat(profile.further().get(1).profile().quantities())
+        .containsEntry("gradientKPerM", Quantity.held(0.4));
+  }
+
+  @Test
+  void aListOfOneStretchIsOneProfile() {
+    String one = "[{\"fromM\": 0, \"family\": \"uniform\"}]";
+    Sight sight = read(SampleText.least().with("{\"family\": \"uniform\"}", one));
+    assertThat(sight.profile()).isEqualTo(read(SampleText.least()).profile());
+  }
+
+  @Test
   void whatIsWrittenReadsBackAsTheSameSight() {
-    for (SampleText sample : List.of(SampleText.everything(), SampleText.least())) {
+    for (SampleText sample :
+        List.of(SampleText.everything(), SampleText.least(), SampleText.stretches())) {
       Sight sight = read(sample);
       String text = Json.text(SightWriter.write(sight));
       Sight back = SightReader.read("back", new SampleText("back", text).bytes());
