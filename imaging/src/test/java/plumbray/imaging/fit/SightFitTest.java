@@ -1,0 +1,161 @@
+package plumbray.imaging.fit;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.assertThatIllegalArgumentException;
+import static org.assertj.core.api.Assertions.within;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
+import plumbray.calibration.camera.PixelPoint;
+import plumbray.calibration.quantity.Quantity;
+import plumbray.calibration.sight.ImageBox;
+import plumbray.calibration.sight.PointMark;
+import plumbray.calibration.sight.PointTarget;
+import plumbray.calibration.sight.Reference;
+import plumbray.calibration.sight.SenseWanted;
+import plumbray.calibration.sight.Sight;
+import plumbray.imaging.photo.Photo;
+import plumbray.imaging.reading.StripPhotos;
+import plumbray.imaging.scene.Sensor;
+import plumbray.imaging.scene.Shimmer;
+import plumbray.raymodel.mapping.Branch;
+
+/** Fits of small drawn photos, and what is said of photos and sights that cannot be fitted. */
+class SightFitTest {
+  /** A photo without noise and shimmer leaves this much of a quantity open, relative. */
+  private static final double CLEAN = 0.01;
+
+  private static Sight open(Reference... references) {
+    return SmallSights.sight(
+        SmallSights.camera(Quantity.prior(0, 2e-3)), SmallSights.open(), references);
+  }
+
+  @ParameterizedTest
+  @CsvSource({"-3.0, 0.3", "12.0, 0.2"})
+  void aCleanPhotoGivesBackItsAirAndPitchWithoutAHint(double excessK, double scaleM) {
+    Photo photo = SmallSights.stillPhoto(SmallSights.truth(excessK, scaleM));
+    FitResult result = new SightFit().fit(open(SmallSights.staff()), Optional.of(photo));
+    assertThat(result.error()).isEmpty();
+    assertThat(result.status()).isEqualTo(FitStatus.GOOD);
+    Estimates estimates = result.estimates();
+    assertThat(estimates.names())
+        .containsExactly("camera.pitchRad", "profile.surfaceExcessK", "profile.scaleHeightM");
+    // a tenth of a pixel
+    assertThat(estimates.values()[0]).isCloseTo(SmallSights.PITCH_RAD, within(0.1 / 50_000));
+    assertThat(estimates.values()[1]).isCloseTo(excessK, within(CLEAN * Math.abs(excessK)));
+    assertThat(estimates.values()[2]).isCloseTo(scaleM, within(CLEAN * scaleM));
+    // the renderer blurs pixel by pixel, the fit in between too: some hundredths of a pixel
+    assertThat(result.residuals().rmsPx()).isLessThan(0.1);
+    assertThat(result.sight().profile().quantities().get("surfaceExcessK").estimated()).isFalse();
+  }
+
+  @Test
+  void aNoisyPhotoGivesEstimatesWithinTheirSigmas() {
+    Photo photo =
+        SmallSights.photo(
+            SmallSights.truth(6.0, 0.15),
+            new Shimmer(0.25, 0.1, 60, 12),
+            new Sensor(0.8, 1, 4000, 6, 8),
+            7L);
+    FitResult result = new SightFit().fit(open(SmallSights.staff()), Optional.of(photo));
+    double[] truth = {SmallSights.PITCH_RAD, 6.0, 0.15};
+    for (int k = 0; k < truth.length; k++) {
+      assertThat(result.estimates().values()[k])
+          .as(result.estimates().names().get(k))
+          .isCloseTo(truth[k], within(3.0 * result.estimates().sigmas()[k]));
+    }
+    assertThat(result.estimates().sigmas()[1]).isLessThan(0.6);
+  }
+
+  @Test
+  void aPhotoWithoutTheStaffFailsAndSaysWhatToCheck() {
+    Photo plain = StripPhotos.of(SmallSights.WIDTH_PX, SmallSights.HEIGHT_PX, v -> 0.3 + 0.001 * v);
+    FitResult result = new SightFit().fit(open(SmallSights.staff()), Optional.of(plain));
+    assertThat(result.status()).isEqualTo(FitStatus.FAILED);
+    assertThat(result.error().orElseThrow()).contains("check").doesNotContain("\n");
+    assertThat(result.estimates().names()).isEmpty();
+  }
+
+  @Test
+  void aSightWithoutReferencesIsRefused() {
+    assertThatIllegalArgumentException()
+        .isThrownBy(() -> new SightFit().fit(open(), Optional.empty()))
+        .withMessageContaining("references is empty, must have at least one")
+        .withMessageContaining("add a staff or points");
+  }
+
+  @Test
+  void aStaffWithoutAPhotoIsRefused() {
+    assertThatIllegalArgumentException()
+        .isThrownBy(() -> new SightFit().fit(open(SmallSights.staff()), Optional.empty()))
+        .withMessageContaining("reference \"staff\" is a staff and no photo was given")
+        .withMessageContaining("name the photo, or use points");
+  }
+
+  @Test
+  void aPhotoOfAnotherSizeIsRefused() {
+    Photo small = StripPhotos.of(10, 20, v -> 0.5);
+    assertThatIllegalArgumentException()
+        .isThrownBy(() -> new SightFit().fit(open(SmallSights.staff()), Optional.of(small)))
+        .withMessageContaining("photo is 10 x 20 px, must be 36 x 400 px");
+  }
+
+  @Test
+  void aStaffWithoutAnImageBoxIsRefused() {
+    Reference staff = SmallSights.staff();
+    Reference nowhere =
+        new Reference(
+            staff.name(), staff.distanceM(), staff.footM(), staff.kind(), Optional.empty());
+    Photo plain = StripPhotos.of(SmallSights.WIDTH_PX, SmallSights.HEIGHT_PX, v -> 0.3);
+    assertThatIllegalArgumentException()
+        .isThrownBy(() -> new SightFit().fit(open(nowhere), Optional.of(plain)))
+        .withMessageContaining("has no imageBox, must have one");
+  }
+
+  @ParameterizedTest
+  @CsvSource({"-40, 60, 20, 300", "8, 60, 80, 300", "8, 500, 20, 600", "40, 60, 60, 300"})
+  void aBoxThatReachesOutOfThePhotoNeverBreaksTheFit(double u0, double v0, double u1, double v1) {
+    Reference staff =
+        SmallSights.staff(SmallSights.DISTANCE_M, Quantity.held(0), new ImageBox(u0, v0, u1, v1));
+    Photo plain = StripPhotos.of(SmallSights.WIDTH_PX, SmallSights.HEIGHT_PX, v -> 0.3);
+    try {
+      assertThat(new SightFit().fit(open(staff), Optional.of(plain)).status())
+          .isEqualTo(FitStatus.FAILED);
+    } catch (IllegalArgumentException refused) {
+      assertThat(refused).hasMessageContaining("must ");
+    }
+  }
+
+  private static Reference points() {
+    SightOptics optics = SightOptics.of(SmallSights.truth(3.0, 0.2));
+    List<Branch> branches = optics.mapping(SmallSights.DISTANCE_M).branches();
+    Branch upright = branches.get(branches.size() - 1);
+    List<PointMark> marks = new ArrayList<>();
+    for (double h = 0.3; h < 3.0; h += 0.25) {
+      PixelPoint pixel = new PixelPoint(17.5, optics.camera().rowAt(upright.apparentRad(h)));
+      marks.add(new PointMark(h, pixel, 0.1, SenseWanted.UPRIGHT));
+    }
+    return new Reference(
+        "marks",
+        SmallSights.DISTANCE_M,
+        Quantity.held(0),
+        new PointTarget(marks),
+        Optional.empty());
+  }
+
+  @Test
+  void pointsAloneNeedNoPhotoAndGiveTheSameAnswerTwice() {
+    FitResult result = new SightFit().fit(open(points()), Optional.empty());
+    assertThat(result.status()).isEqualTo(FitStatus.GOOD);
+    assertThat(result.estimates().values()[1]).isCloseTo(3.0, within(0.03));
+    assertThat(result.jitterPx()).isZero();
+    assertThat(result.readings().get(0).rows()).hasSize(11);
+    FitResult again = new SightFit().fit(open(points()), Optional.empty());
+    assertThat(again.estimates().values()).containsExactly(result.estimates().values());
+    assertThat(again.estimates().sigmas()).containsExactly(result.estimates().sigmas());
+  }
+}
