@@ -14,8 +14,8 @@ import java.util.List;
  */
 final class InverseTemperatureIntegral {
 
-  /** A few parts in 1e10 of pressure, with g/R = 0.034 K/m. */
-  private static final double TOLERANCE_M_PER_K = 1e-8;
+  /** One part in 1e11 of pressure, with g/R = 0.034 K/m. */
+  private static final double TOLERANCE_M_PER_K = 3e-10;
 
   /** Panels end at these heights: kinks of the profiles at 0 and 50 m, then far out. */
   private static final double[] CORNERS_M = {
