@@ -23,7 +23,7 @@ class EstimateLayoutTest {
                 "references[0].footM"));
     assertThat(layout.size()).isEqualTo(5);
     // an exponential profile has three quantities, then come temperature, pressure, humidity
-    assertThat(layout.columnParameters()).containsExactly(4, 1);
+    assertThat(layout.columnParameters(0)).containsExactly(4, 1);
     int[] air = new int[5];
     int[] sensitivity = new int[5];
     for (int i = 0; i < 5; i++) {
@@ -37,6 +37,6 @@ class EstimateLayoutTest {
 
   @Test
   void nothingEstimatedAsksForNoDerivatives() {
-    assertThat(EstimateLayout.of(SIGHT, List.of()).columnParameters()).isEmpty();
+    assertThat(EstimateLayout.of(SIGHT, List.of()).columnParameters(0)).isEmpty();
   }
 }
