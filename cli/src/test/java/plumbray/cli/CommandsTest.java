@@ -96,6 +96,44 @@ class CommandsTest {
   }
 
   @Test
+  void traceShowsTheAirOfEachStretchOfThePath() throws IOException {
+    overTwoGrounds("two.sight.json", "4");
+    assertThat(run("trace", path("two.sight.json"), "--out", path("out"))).isZero();
+    assertThat(err.toString()).isEmpty();
+    assertThat(folder.resolve("out/two.temperature.csv"))
+        .content()
+        .contains("refractivity_gradient_per_m,from_m")
+        .containsPattern("(?m),0\\r?$")
+        .containsPattern("(?m),250\\r?$");
+    assertThat(folder.resolve("out/two.html"))
+        .content()
+        .contains("The air at the camera", "The air from 250 m on", "Surface excess E, stretch 2");
+  }
+
+  @Test
+  void rectifyNamesWhatAStretchLeavesOpen() throws IOException {
+    overTwoGrounds("two.sight.json", "{\"value\": 4}");
+    assertThat(run("rectify", path("two.sight.json"), path("p.png"), "--out", path("out")))
+        .isEqualTo(2);
+    assertThat(err.toString()).contains("/profile/1/surfaceExcessK is to be estimated");
+  }
+
+  private void overTwoGrounds(String name, String secondExcess) throws IOException {
+    String one = Files.readString(folder.resolve("held.sight.json"));
+    String two =
+        one.replace(
+            "{\"family\": \"exponential\", \"surfaceExcessK\": 15, \"scaleHeightM\": 0.3}",
+            """
+            [{"fromM": 0, "family": "exponential", "surfaceExcessK": 15, "scaleHeightM": 0.3},
+             {"fromM": 250, "blendM": 30, "family": "exponential", "surfaceExcessK": %s,
+              "scaleHeightM": 0.3}], "path": {"groundM": [[0, 0], [240, -0.4], [500, 0.1]]}
+            """
+                .formatted(secondExcess));
+    assertThat(two).isNotEqualTo(one);
+    Files.writeString(folder.resolve(name), two);
+  }
+
+  @Test
   void quietPrintsNoResults() {
     assertThat(run("trace", path("open.sight.json"), "--out", path("out"), "--quiet")).isZero();
     assertThat(out.toString()).isEmpty();

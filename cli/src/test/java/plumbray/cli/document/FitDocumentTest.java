@@ -11,8 +11,10 @@ import java.util.List;
 import java.util.Optional;
 import org.assertj.core.data.Offset;
 import org.junit.jupiter.api.Test;
+import plumbray.calibration.sight.ProfileSetup;
 import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.SightParameters;
+import plumbray.calibration.sight.StretchSetup;
 import plumbray.imaging.fit.Alternative;
 import plumbray.imaging.fit.Estimates;
 import plumbray.imaging.fit.FitResult;
@@ -35,7 +37,16 @@ class FitDocumentTest {
 
   /** A fit with invented numbers: what is tested is the file, not the fit. */
   private static FitDocument doubtful() {
-    Sight asked = asked();
+    return doubtful(asked());
+  }
+
+  /** The same where the ground changes along the path. */
+  private static Sight overTwoGrounds() {
+    ProfileSetup profile = asked().profile();
+    return asked().withProfile(profile.withFurther(List.of(new StretchSetup(300, 40, profile))));
+  }
+
+  private static FitDocument doubtful(Sight asked) {
     SightParameters parameters = SightParameters.of(asked);
     double[] values = parameters.values();
     double[][] covariance = new double[values.length][values.length];
@@ -88,6 +99,30 @@ class FitDocumentTest {
     assertThat(back.sight().profile()).isEqualTo(fit.sight().profile());
     assertThat(back.sight().references()).isEqualTo(fit.sight().references());
     assertThat(back.temperatures()).hasSameSizeAs(fit.temperatures());
+  }
+
+  @Test
+  void aFitOverSeveralGroundsReadsBack() {
+    FitDocument fit = doubtful(overTwoGrounds());
+    String text = FitWriter.text(fit);
+    assertSchemaHolds(text);
+    FitDocument back = read(text);
+    assertThat(back.sight().profile()).isEqualTo(fit.sight().profile());
+    assertThat(back.estimates().names())
+        .isEqualTo(fit.estimates().names())
+        .contains("profile[0].surfaceExcessK", "profile[1].surfaceExcessK");
+    assertThat(back.stretchTemperatures()).hasSize(1);
+    assertThat(back.stretchTemperatures().get(0).fromM()).isEqualTo(300.0);
+    assertThat(back.stretchTemperatures().get(0).rows()).hasSameSizeAs(fit.temperatures());
+    Node second =
+        JsonText.parse("a", text.getBytes(StandardCharsets.UTF_8))
+            .child("profile")
+            .elements("stretches")
+            .get(1);
+    assertThat(second.json().path("blendM").doubleValue()).isEqualTo(40.0);
+    int at = fit.estimates().indexOf("profile[1].surfaceExcessK");
+    assertThat(second.json().path("surfaceExcessK").path("sigma").doubleValue())
+        .isEqualTo(fit.estimates().sigmas()[at]);
   }
 
   @Test

@@ -30,6 +30,13 @@ class QuantityNameTest {
   }
 
   @Test
+  void aQuantityOfAStretchSaysWhichItIs() {
+    QuantityName name = QuantityName.of("profile[1].scaleHeightM", List.of());
+    assertThat(name.label()).isEqualTo("Scale height h, stretch 2");
+    assertThat(name.unit()).isEqualTo("mm");
+  }
+
+  @Test
   void aFootIsNamedAfterItsReference() {
     QuantityName name =
         QuantityName.of("references[0].footM", ReportSamples.asked(15).references());
