@@ -7,6 +7,9 @@ import java.io.PrintWriter;
 import java.io.StringWriter;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Random;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -166,8 +169,84 @@ class CommandsTest {
   }
 
   @Test
-  void aPhotoThatCannotBeReadIsAFailedPhoto() throws IOException {
-    Files.writeString(folder.resolve("p.png"), "this is no picture");
+  void aPhotoThatCannotBeReadIsAnErrorAndNothingIsWritten() throws IOException {
+    Files.writeString(folder.resolve("q.png"), "this is no picture");
+    for (String command : List.of("fit", "rectify")) {
+      String sight = path(command.equals("fit") ? "staff.sight.json" : "held.sight.json");
+      assertThat(run(command, sight, path("q.png"), "--out", path("out"))).isEqualTo(2);
+      assertThat(err.toString().lines())
+          .containsExactly(
+              "plumbray: "
+                  + path("q.png")
+                  + ": is not a JPEG, PNG or TIFF photo; name a photo, or convert it to one");
+      assertThat(run(command, sight, path("none.png"), "--out", path("out"))).isEqualTo(2);
+      assertThat(err.toString().lines())
+          .containsExactly(
+              "plumbray: " + path("none.png") + ": is not a file; name an existing photo");
+    }
+    assertThat(folder.resolve("out")).doesNotExist();
+  }
+
+  @Test
+  void aPhotoOfAnotherSizeIsAnError() throws PhotoException {
+    PhotoWriter.write(
+        new PhotoBuilder(new PhotoShape(30, 60, 3, 8)).build(), folder.resolve("q.png"));
+    assertThat(run("fit", path("staff.sight.json"), path("q.png"), "--out", path("out")))
+        .isEqualTo(2);
+    assertThat(err.toString().lines())
+        .containsExactly(
+            "plumbray: "
+                + path("q.png")
+                + ": is 30 x 60 px, must be 40 x 60 px (size of the sight's photos); use the sight"
+                + " of this photo's camera");
+    assertThat(folder.resolve("out")).doesNotExist();
+  }
+
+  @Test
+  void whatCannotTakeTheResultsIsAnError() throws IOException {
+    Files.writeString(folder.resolve("file"), "not a folder");
+    Files.writeString(
+        folder.resolve("day.batch.json"),
+        "{\"format\": \"plumbray-batch/1\", \"sight\": \"open.sight.json\","
+            + " \"photos\": [{\"file\": \"p.png\"}]}");
+    Files.writeString(folder.resolve("points.csv"), "name,u,v\ntop,20,19.5\n");
+    String wrong =
+        "plumbray: %s: is a file, must be a folder that can be written into (where the results"
+            + " go); name another with --out";
+    for (List<String> command :
+        List.of(
+            List.of("trace", path("open.sight.json")),
+            List.of("fit", path("open.sight.json")),
+            List.of("rectify", path("held.sight.json"), path("p.png")),
+            List.of("batch", path("day.batch.json")))) {
+      assertThat(runInto(path("file"), command)).as(command.get(0)).isEqualTo(2);
+      assertThat(err.toString().lines()).containsExactly(wrong.formatted(path("file")));
+    }
+    List<String> measure = List.of("measure", path("held.sight.json"), path("points.csv"));
+    assertThat(runInto(folder.toString(), measure)).isEqualTo(2);
+    assertThat(err.toString().lines())
+        .containsExactly(
+            "plumbray: "
+                + folder
+                + ": is a folder, must be a file (where the result goes); name a file in it");
+    assertThat(runInto(path("file/heights.csv"), measure)).isEqualTo(2);
+    assertThat(err.toString().lines()).containsExactly(wrong.formatted(path("file")));
+  }
+
+  private int runInto(String place, List<String> command) {
+    List<String> all = new ArrayList<>(command);
+    all.addAll(List.of("--out", place));
+    return run(all.toArray(String[]::new));
+  }
+
+  @Test
+  void aPictureWithoutTheReferenceIsAFailedPhoto() throws PhotoException {
+    Random random = new Random(5);
+    PhotoBuilder noise = new PhotoBuilder(new PhotoShape(40, 60, 1, 8));
+    for (int i = 0; i < 40 * 60; i++) {
+      noise.sample(i % 40, i / 40, 0, random.nextInt(256));
+    }
+    PhotoWriter.write(noise.build(), folder.resolve("p.png"));
     assertThat(run("fit", path("staff.sight.json"), path("p.png"), "--out", path("out")))
         .isEqualTo(3);
     assertThat(err.toString()).startsWith("p.png: failed: ");
@@ -227,10 +306,12 @@ class CommandsTest {
             + " \"*.png\"}]}");
     String[] batch = {"batch", path("day.batch.json"), "--out", path("out"), "--jobs", "2"};
     assertThat(run(batch)).isEqualTo(3);
-    assertThat(out.toString()).contains("2 photos: 2 done now, 0 kept, 1 failed");
+    assertThat(out.toString())
+        .contains("2 photos: 1 good, 0 doubtful, 1 failed; 0 of them kept as they were; see ");
     assertThat(folder.resolve("out/p.rectified.png")).exists();
     assertThat(run(batch)).isEqualTo(3);
-    assertThat(out.toString()).contains("2 photos: 0 done now, 2 kept, 1 failed");
+    assertThat(out.toString())
+        .contains("2 photos: 1 good, 0 doubtful, 1 failed; 2 of them kept as they were; see ");
   }
 
   @Test

@@ -97,7 +97,8 @@ class SimulateTest {
   void whatIsOpenCannotBeSimulated() throws IOException {
     sight("open.sight.json", "{\"value\": 0, \"sigma\": 1}", "\"family\": \"uniform\"");
     assertThat(run("open.sight.json", "plain.scene.json", "p.png")).isEqualTo(2);
-    assertOneLine("camera.pitchRad is to be estimated, must be held (what is simulated is known)");
+    assertOneLine(
+        "/camera/pitchMrad is to be estimated, must be held (what is simulated is known)");
   }
 
   @Test

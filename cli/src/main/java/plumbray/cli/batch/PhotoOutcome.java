@@ -34,15 +34,20 @@ public record PhotoOutcome(
     return new PhotoOutcome(name, photo, Optional.empty(), Optional.of(error), false);
   }
 
+  /** The verdict on the photo. */
+  public FitStatus status() {
+    return fit.map(FitDocument::status).orElse(FitStatus.FAILED);
+  }
+
   /** Whether the photo failed. */
   public boolean failed() {
-    return fit.map(FitDocument::status).orElse(FitStatus.FAILED) == FitStatus.FAILED;
+    return status() == FitStatus.FAILED;
   }
 
   /** The photo's line in the log: its verdict, and what is to be known about it. */
   public String line() {
     StringBuilder line = new StringBuilder(photo).append(": ");
-    line.append(fit.map(FitDocument::status).orElse(FitStatus.FAILED).key());
+    line.append(status().key());
     line.append(kept ? " (kept, nothing has changed)" : "");
     error.ifPresent(text -> line.append(": ").append(text));
     String warnings =

@@ -15,8 +15,10 @@ import plumbray.cli.batch.BatchDriver;
 import plumbray.cli.batch.PhotoOutcome;
 import plumbray.cli.document.BatchReader;
 import plumbray.cli.document.Digest;
+import plumbray.cli.document.WholeFile;
 import plumbray.cli.work.PhotoTask;
 import plumbray.cli.work.PhotoWorker;
+import plumbray.imaging.fit.FitStatus;
 import plumbray.imaging.fit.SightFit;
 
 /** {@code plumbray batch}: fits, redraws and reports every photo of a batch file. */
@@ -52,6 +54,7 @@ final class BatchCommand implements Callable<Integer> {
   public Integer call() throws IOException {
     int side = jobs();
     List<PhotoTask> tasks = BatchReader.read(batchFile).stream().map(PhotoTask::of).toList();
+    WholeFile.makeFolder(folder);
     ProgressLine progress = ProgressLine.of(parent.terminal());
     PhotoWorker worker = new PhotoWorker(new SightFit()::fit, true, 1);
     BatchDriver driver = new BatchDriver(worker, folder, side, progress);
@@ -71,18 +74,23 @@ final class BatchCommand implements Callable<Integer> {
   }
 
   private int report(List<PhotoOutcome> outcomes) {
-    long failed = outcomes.stream().filter(PhotoOutcome::failed).count();
+    long failed = count(outcomes, FitStatus.FAILED);
     long kept = outcomes.stream().filter(PhotoOutcome::kept).count();
     parent
         .terminal()
         .result(
-            "%d photos: %d done now, %d kept, %d failed; see %s"
+            "%d photos: %d good, %d doubtful, %d failed; %d of them kept as they were; see %s"
                 .formatted(
                     outcomes.size(),
-                    outcomes.size() - kept,
-                    kept,
+                    count(outcomes, FitStatus.GOOD),
+                    count(outcomes, FitStatus.DOUBTFUL),
                     failed,
+                    kept,
                     folder.resolve("index.html")));
     return (failed > 0 ? ExitStatus.PHOTO_FAILED : ExitStatus.DONE).code();
+  }
+
+  private static long count(List<PhotoOutcome> outcomes, FitStatus status) {
+    return outcomes.stream().filter(outcome -> outcome.status() == status).count();
   }
 }

@@ -44,7 +44,7 @@ final class FitCommand implements Callable<Integer> {
     PhotoTask task = PhotoTask.of(sightFile, Optional.ofNullable(photoFile));
     int threads = Runtime.getRuntime().availableProcessors();
     PhotoWorker worker = new PhotoWorker(new SightFit()::fit, false, threads);
-    FitDocument fit = worker.work(task, new ResultFiles(folder, task.name()));
+    FitDocument fit = worker.workAlone(task, new ResultFiles(folder, task.name()));
     report(task, fit);
     boolean failed = fit.status() == FitStatus.FAILED;
     return (failed ? ExitStatus.PHOTO_FAILED : ExitStatus.DONE).code();
@@ -59,6 +59,7 @@ final class FitCommand implements Callable<Integer> {
     terminal.result(ResultLines.verdict(task.label(), fit));
     ResultLines.estimates(fit).forEach(terminal::result);
     fit.sightLines().forEach(line -> terminal.result(ResultLines.sightLine(line)));
-    fit.warnings().forEach(warning -> terminal.warning("doubtful: " + warning.message()));
+    String mark = fit.status() == FitStatus.GOOD ? "note: " : fit.status().key() + ": ";
+    fit.warnings().forEach(warning -> terminal.warning(mark + warning.message()));
   }
 }

@@ -2,15 +2,14 @@ package plumbray.cli.command;
 
 import java.io.IOException;
 import java.nio.file.Path;
-import java.util.List;
+import java.util.Optional;
 import java.util.concurrent.Callable;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Option;
 import picocli.CommandLine.Parameters;
 import picocli.CommandLine.ParentCommand;
-import plumbray.calibration.quantity.Parameter;
 import plumbray.calibration.sight.Sight;
-import plumbray.calibration.sight.SightParameters;
+import plumbray.cli.document.HeldSight;
 import plumbray.cli.document.InputException;
 import plumbray.cli.document.SceneDocument;
 import plumbray.cli.document.SceneReader;
@@ -59,6 +58,7 @@ final class SimulateCommand implements Callable<Integer> {
     Sight sight = heldSight();
     checkFormat(sight, document);
     Simulation simulation = new Simulation(sight, document.scene());
+    WholeFile.folderOf(photoFile);
     parent.terminal().progress("drawing " + photoFile + " ...");
     WholeFile.write(
         beside(".truth.json"), TruthWriter.text(document.name(), sight, simulation.truth()));
@@ -79,11 +79,11 @@ final class SimulateCommand implements Callable<Integer> {
           sightFile
               + ": /profile/family is \"best\", must be one family (the air to simulate); name it");
     }
-    List<Parameter> open = SightParameters.of(sight).parameters();
-    if (!open.isEmpty()) {
+    Optional<String> open = HeldSight.firstOpen(sight);
+    if (open.isPresent()) {
       throw new InputException(
           "%s: %s is to be estimated, must be held (what is simulated is known); write its value alone"
-              .formatted(sightFile, open.get(0).name()));
+              .formatted(sightFile, open.get()));
     }
     return sight;
   }

@@ -2,9 +2,8 @@ package plumbray.cli.document;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import java.nio.file.Path;
-import java.util.List;
 import java.util.Objects;
-import plumbray.calibration.quantity.Parameter;
+import java.util.Optional;
 import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.SightParameters;
 import plumbray.imaging.fit.Estimates;
@@ -63,17 +62,27 @@ public record HeldSight(Path file, Sight sight, Estimates estimates, double jitt
               + ": /profile/family is \"best\", must be one family (temperature against height);"
               + " fit it first, and use the fit");
     }
-    List<Parameter> open = SightParameters.of(sight).parameters();
-    if (!open.isEmpty()) {
+    Optional<String> open = firstOpen(sight);
+    if (open.isPresent()) {
       throw new InputException(
           file
-              + ": /"
-              + EstimateName.ofInside(open.get(0).name())
-                  .name()
-                  .replaceAll("[.\\[]", "/")
-                  .replace("]", "")
+              + ": "
+              + open.get()
               + " is to be estimated, must be held (one of the sight's quantities); fit it first,"
               + " and use the fit, or write its value alone");
     }
+  }
+
+  /**
+   * Where in its file a sight first leaves a quantity open.
+   *
+   * @param sight the sight
+   * @return the place, as a JSON pointer; empty where all are held
+   */
+  public static Optional<String> firstOpen(Sight sight) {
+    return SightParameters.of(sight).parameters().stream()
+        .findFirst()
+        .map(open -> EstimateName.ofInside(open.name()).name())
+        .map(name -> "/" + name.replace('.', '/').replace('[', '/').replace("]", ""));
   }
 }

@@ -13,8 +13,8 @@ import plumbray.imaging.fit.SightLine;
 import plumbray.imaging.fit.Warning;
 
 /**
- * Writes the summary of a batch, one line a photo. The columns of the sight line are those of the
- * farthest distance in use.
+ * Writes the summary of a batch, one line a photo. The columns of the sight line are those of
+ * {@link ReferenceLine}.
  */
 public final class SummaryCsv {
   private static final List<String> HEADER =
@@ -49,8 +49,7 @@ public final class SummaryCsv {
    * @param fit what was found
    */
   public void add(String name, String photo, FitDocument fit) {
-    Optional<SightLine> far =
-        fit.sightLines().stream().reduce((a, b) -> b.distanceM() > a.distanceM() ? b : a);
+    Optional<SightLine> line = ReferenceLine.of(fit.sight(), fit.sightLines());
     Quantity pitch = fit.sight().camera().pitchRad();
     boolean failed = fit.status() == FitStatus.FAILED;
     table.add(
@@ -64,12 +63,12 @@ public final class SummaryCsv {
         digits(fit.residuals().rmsPx()),
         failed ? "" : digits(Unit.MILLIRADIAN.fromSi(pitch.value())),
         failed ? "" : digits(Unit.MILLIRADIAN.spanFromSi(sigmaPitchRad(fit.estimates()))),
-        far.map(line -> digits(line.localRefractionCoefficient())).orElse(""),
-        far.map(line -> Numbers.shortest(line.distanceM())).orElse(""),
-        far.map(line -> fixed(line.vanishingLineRowPx(), ROW)).orElse(""),
-        far.map(line -> fixed(line.lowestVisibleHeightM(), METRE)).orElse(""),
-        far.map(line -> fixed(line.hiddenBelowM(), METRE)).orElse(""),
-        far.map(line -> String.valueOf(line.imagesMost())).orElse(""));
+        line.map(l -> digits(l.localRefractionCoefficient())).orElse(""),
+        line.map(l -> Numbers.shortest(l.distanceM())).orElse(""),
+        line.map(l -> fixed(l.vanishingLineRowPx(), ROW)).orElse(""),
+        line.map(l -> fixed(l.lowestVisibleHeightM(), METRE)).orElse(""),
+        line.map(l -> fixed(l.hiddenBelowM(), METRE)).orElse(""),
+        line.map(l -> String.valueOf(l.imagesMost())).orElse(""));
   }
 
   /**

@@ -48,10 +48,10 @@ public final class WholeFile {
    * @param target the file; its folder is made where it is missing
    * @param content what it is to hold
    * @throws IOException when it cannot be written; what was there before is then still there
+   * @throws InputException when there is no place for such a file
    */
   public static void write(Path target, Content content) throws IOException {
-    Path folder = target.toAbsolutePath().getParent();
-    Files.createDirectories(folder);
+    Path folder = folderOf(target);
     Path part = newPart(folder, target.getFileName().toString());
     try {
       try (OutputStream out = new BufferedOutputStream(Files.newOutputStream(part))) {
@@ -61,6 +61,49 @@ public final class WholeFile {
     } finally {
       Files.deleteIfExists(part);
     }
+  }
+
+  /**
+   * Makes a folder for results ready, with all above it, where it is not there yet.
+   *
+   * @param folder the folder
+   * @throws InputException when it cannot be one, or nothing can be written into it
+   */
+  public static void makeFolder(Path folder) {
+    if (Files.exists(folder) && !Files.isDirectory(folder)) {
+      throw unfit(folder, "is a file");
+    }
+    try {
+      Files.createDirectories(folder);
+    } catch (IOException e) {
+      throw unfit(folder, "cannot be made");
+    }
+    if (!Files.isWritable(folder)) {
+      throw unfit(folder, "cannot be written into");
+    }
+  }
+
+  /**
+   * Makes the folder of a result ready, and checks that the result can take its place there.
+   *
+   * @param target the file that is to be written
+   * @return its folder
+   * @throws InputException when the file cannot be written
+   */
+  public static Path folderOf(Path target) {
+    if (Files.isDirectory(target)) {
+      throw new InputException(
+          target + ": is a folder, must be a file (where the result goes); name a file in it");
+    }
+    Path folder = target.toAbsolutePath().getParent();
+    makeFolder(target.getParent() == null ? folder : target.getParent());
+    return folder;
+  }
+
+  private static InputException unfit(Path folder, String what) {
+    return new InputException(
+        "%s: %s, must be a folder that can be written into (where the results go); name another with --out"
+            .formatted(folder, what));
   }
 
   /** An empty file beside the target, with the rights new files get there. */

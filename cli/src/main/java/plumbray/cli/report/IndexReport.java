@@ -67,7 +67,7 @@ public final class IndexReport {
             "",
             "Photo",
             "Verdict",
-            "Ground less camera (K)",
+            "Ground minus camera (K)",
             "Gradient at camera (K/m)",
             "Refraction coefficient at camera",
             "Hidden below (m)",

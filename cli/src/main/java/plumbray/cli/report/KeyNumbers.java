@@ -3,6 +3,7 @@ package plumbray.cli.report;
 import java.util.List;
 import java.util.OptionalDouble;
 import plumbray.calibration.sight.Sight;
+import plumbray.cli.document.ReferenceLine;
 import plumbray.imaging.fit.EstimateLayout;
 import plumbray.imaging.fit.Estimates;
 import plumbray.imaging.fit.SightLine;
@@ -16,8 +17,8 @@ import plumbray.raymodel.air.AirColumn;
  * @param groundExcessSigmaK its standard deviation, K; 0 where nothing of it was estimated
  * @param gradientKPerM temperature gradient at the camera, K/m
  * @param refractionCoefficient refraction coefficient at the camera, positive towards the ground
- * @param hiddenBelowM height above the ground below which nothing is seen at the farthest distance
- *     in use, m
+ * @param hiddenBelowM height above the ground below which nothing is seen at the distance of {@link
+ *     ReferenceLine}, m
  */
 public record KeyNumbers(
     double groundExcessK,
@@ -51,7 +52,7 @@ public record KeyNumbers(
       derivatives[i] = k < 0 ? 0.0 : atGround[k] - atCamera[k];
     }
     OptionalDouble hidden =
-        lines.isEmpty() ? OptionalDouble.empty() : lines.get(lines.size() - 1).hiddenBelowM();
+        ReferenceLine.of(sight, lines).map(SightLine::hiddenBelowM).orElse(OptionalDouble.empty());
     return new KeyNumbers(
         column.temperatureK(0.0) - column.temperatureK(cameraM),
         Math.sqrt(estimates.variance(derivatives)),

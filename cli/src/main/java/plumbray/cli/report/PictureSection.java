@@ -20,6 +20,9 @@ final class PictureSection implements Section {
 
   private static final int WIDTH_MOST_PX = 1600;
 
+  /** Rows between the names of two lines, in widths of a line. */
+  private static final double NAME_ROOM = 10.0;
+
   private final Sight sight;
   private final Optional<Photo> photo;
   private final Optional<Rectified> redrawn;
@@ -97,7 +100,7 @@ final class PictureSection implements Section {
       words.add("framed: the references");
     }
     if (lines.stream().anyMatch(line -> line.vanishingLineRowPx().isPresent())) {
-      words.add("dashed: vanishing lines, with their distances");
+      words.add("dashed: vanishing lines, with their distances where there is room");
     }
     String all = String.join("; ", words);
     return all.isEmpty() ? "" : " " + Character.toUpperCase(all.charAt(0)) + all.substring(1) + ".";
@@ -108,17 +111,26 @@ final class PictureSection implements Section {
     for (Reference reference : sight.references()) {
       reference.imageBox().ifPresent(box -> frame(page, box, stroke));
     }
-    lines.stream()
-        .filter(line -> line.vanishingLineRowPx().isPresent())
-        .forEach(line -> vanishingLine(page, line, source.width()));
+    List<Double> named = new ArrayList<>();
+    for (SightLine line : lines) {
+      if (line.vanishingLineRowPx().isPresent()) {
+        vanishingLine(page, line, source.width(), named);
+      }
+    }
   }
 
-  private static void vanishingLine(Markup page, SightLine line, int width) {
+  /** Names the line too, unless the name would run into that of a line drawn before. */
+  private static void vanishingLine(
+      Markup page, SightLine line, int width, List<Double> namedRows) {
     double stroke = width / 400.0;
     double v = line.vanishingLineRowPx().orElseThrow() + 0.5;
     String path = "M0 " + coordinate(v) + "H" + width;
     stroked(page, path, "#ffffff", stroke, "none");
     stroked(page, path, "#1c2a33", stroke, coordinate(6 * stroke) + " " + coordinate(4 * stroke));
+    if (namedRows.stream().anyMatch(row -> Math.abs(row - v) < NAME_ROOM * stroke)) {
+      return;
+    }
+    namedRows.add(v);
     page.leaf(
         "text",
         Metres.text(line.distanceM()),

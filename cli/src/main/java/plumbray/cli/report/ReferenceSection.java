@@ -65,7 +65,8 @@ final class ReferenceSection implements Section {
   }
 
   private static String residualCaption() {
-    return "Where each mark was found less where the fit puts it, with one standard deviation.";
+    return "Where each mark was found minus where the fit puts it, with one standard deviation."
+        + " Shimmer moves whole stretches of rows together, by more than that.";
   }
 
   private static void figure(Markup page, Markup plot, String caption) {

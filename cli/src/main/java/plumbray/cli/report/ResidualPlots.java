@@ -64,7 +64,7 @@ final class ResidualPlots {
             "Residuals of " + reading.reference(),
             Axis.around(
                 "Height above the foot (m)", rows.stream().mapToDouble(RowResidual::heightM)),
-            Axis.around("Found less fitted (px, down)", ends(rows)));
+            Axis.around("Found minus fitted (px, down)", ends(rows)));
     plot.add(
         new Guide("", 0.0, Guide.Way.LEVEL_NAMED_RIGHT, new Stroke(Ink.GREY, Dash.SOLID, 1.0)));
     add(plot, "upright image", Sense.UPRIGHT, new Points.Look(Marker.TRIANGLE_UP, Ink.BLUE));

@@ -43,7 +43,7 @@ final class TrendSection implements Section {
     page.open("div", "class", "pair");
     plot(
         page,
-        "Ground less camera (K)",
+        "Ground minus camera (K)",
         entry -> entry.key().groundExcessK(),
         entry -> entry.key().groundExcessSigmaK());
     plot(page, "Refraction coefficient", e -> e.key().refractionCoefficient(), NO_SIGMA);
@@ -52,7 +52,9 @@ final class TrendSection implements Section {
     page.close();
     page.leaf(
         "p",
-        "Photos are numbered as in the table below. Failed ones have no numbers.",
+        "Photos are numbered as in the table below. Failed ones have no numbers. \u201cHidden below\u201d holds"
+            + " at the distance of the first reference; \u201crms\u201d is the typical distance,"
+            + " in rows, between where marks were found and where the fit puts them.",
         "class",
         "note");
     page.close();

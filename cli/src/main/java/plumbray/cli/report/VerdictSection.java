@@ -2,6 +2,7 @@ package plumbray.cli.report;
 
 import java.util.LinkedHashSet;
 import java.util.List;
+import plumbray.cli.document.ReferenceLine;
 import plumbray.cli.report.markup.Markup;
 import plumbray.cli.report.markup.NumberText;
 import plumbray.imaging.fit.FitResult;
@@ -55,7 +56,8 @@ final class VerdictSection implements Section {
     if (Double.isFinite(key.hiddenBelowM())) {
       figure(
           page,
-          "Hidden at " + Metres.text(lines.get(lines.size() - 1).distanceM()),
+          "Hidden at "
+              + Metres.text(ReferenceLine.of(result.sight(), lines).orElseThrow().distanceM()),
           key.hiddenBelowM() < LEAST_HIDDEN_M
               ? "nothing"
               : "below " + NumberText.fixed(key.hiddenBelowM(), 2) + " m");

@@ -9,6 +9,7 @@ import java.util.Optional;
 import plumbray.cli.document.Digest;
 import plumbray.cli.document.FitDocument;
 import plumbray.cli.document.FitWriter;
+import plumbray.cli.document.InputException;
 import plumbray.cli.document.MappingCsv;
 import plumbray.cli.document.ProgramVersion;
 import plumbray.cli.document.WholeFile;
@@ -65,13 +66,41 @@ public final class PhotoWorker {
     }
   }
 
+  /**
+   * Fits a photo that was named by itself, where there are no others to go on with: nothing is
+   * written when it cannot be used at all.
+   *
+   * @param task the photo and its sight
+   * @param files where the results go
+   * @return what was found; it says itself when the fit failed
+   * @throws InputException when the photo cannot be read or is of another size than its sight says
+   * @throws IOException when a file cannot be read or written for no fault of the photo
+   */
+  public FitDocument workAlone(PhotoTask task, ResultFiles files) throws IOException {
+    Optional<Photo> photo;
+    try {
+      photo = photo(task);
+    } catch (PhotoException e) {
+      throw new InputException(e.getMessage(), e);
+    }
+    Optional<String> complaint = complaint(task, photo);
+    if (complaint.isPresent()) {
+      throw new InputException(complaint.get());
+    }
+    WholeFile.makeFolder(files.folder());
+    Files.deleteIfExists(files.fit());
+    return work(task, photo, task.inputs(), files);
+  }
+
+  private static Optional<String> complaint(PhotoTask task, Optional<Photo> photo) {
+    return photo.flatMap(p -> PhotoSize.complaint(task.photo().get(), p, task.sight().camera()));
+  }
+
   private FitDocument work(
       PhotoTask task, Optional<Photo> photo, List<Digest> inputs, ResultFiles files)
       throws IOException {
-    Optional<String> complaint =
-        photo.flatMap(p -> PhotoSize.complaint(task.photo().get(), p, task.sight().camera()));
     FitResult result =
-        complaint
+        complaint(task, photo)
             .map(error -> FitResult.failed(task.sight(), error))
             .orElseGet(() -> fitting.fit(task.sight(), photo));
     Fitted fitted = new Fitted(task, photo, result, inputs);

@@ -35,7 +35,9 @@ public final class RectifyWorker {
     HeldSight held = HeldSight.read(heldFile);
     SightOptics optics = Tracing.optics(heldFile, held.sight(), held.estimates().names());
     ResultFiles files = new ResultFiles(folder, BatchPhoto.resultName(photoFile));
-    Rectified rectified = new Redrawing(optics, threads).redraw(photo(held, photoFile));
+    Photo photo = photo(held, photoFile);
+    WholeFile.makeFolder(folder);
+    Rectified rectified = new Redrawing(optics, threads).redraw(photo);
     List<Path> written = Redrawing.write(rectified, photoFile, files);
     WholeFile.write(files.mapping(), MappingCsv.text(MappingRow.of(optics, held.estimates())));
     return written.get(0);

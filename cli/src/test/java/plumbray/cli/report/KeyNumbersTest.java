@@ -49,7 +49,7 @@ class KeyNumbersTest {
   }
 
   @Test
-  void theFarthestDistanceSaysWhatIsHidden() {
+  void theDistanceOfTheFirstReferenceSaysWhatIsHidden() {
     Sight sight = result.sight();
     List<SightLine> lines = SightLine.of(SightOptics.of(sight));
     KeyNumbers key = KeyNumbers.of(sight, Estimates.none(), lines);
