@@ -13,14 +13,11 @@ import plumbray.imaging.fit.SlideScore.Start;
 import plumbray.raymodel.profile.ProfileFamily;
 
 /**
- * Looks for starts without any hint: a coarse grid of profiles at every pitch in question gives a
- * few pitches; a fine grid of simple profiles near those, climbed to the top, finds the staffs'
- * pattern, whatever family the fit is to be of.
+ * Looks for starts without any hint: a fine grid of simple profiles at every pitch in question,
+ * climbed to the top, finds the staffs' pattern, whatever family the fit is to be of.
  */
 final class StartSearch {
 
-  private static final int PITCHES = 4;
-  private static final int NEAR_ROWS = 12;
   private static final int CLIMBS = 4;
   private static final double RATIO = 1.3;
 
@@ -66,14 +63,13 @@ final class StartSearch {
   List<Start> exponential() {
     double gradient = gradient();
     ProfileSetup open = open(gradient);
-    List<Start> coarse = coarse(ProfileFamily.EXPONENTIAL, FamilyStarts.of(open));
-    List<Slide> near = pitches(coarse).stream().map(p -> score.near(p, NEAR_ROWS)).toList();
-    List<Start> fine = new ArrayList<>(coarse);
+    List<Slide> anywhere = List.of(score.everywhere());
+    List<Start> fine = new ArrayList<>(coarse(ProfileFamily.EXPONENTIAL, FamilyStarts.of(open)));
     for (double size : range(EXCESS_FROM_TO)) {
       for (double scale : range(SCALE_FROM_TO)) {
         for (double excess : new double[] {size, -size}) {
           double[] values = {excess, scale, gradient};
-          fine.addAll(score.starts(score.profile(ProfileFamily.EXPONENTIAL, values), near));
+          fine.addAll(score.starts(score.profile(ProfileFamily.EXPONENTIAL, values), anywhere));
         }
       }
     }
@@ -132,19 +128,6 @@ final class StartSearch {
     }
     starts.sort(Comparator.comparingDouble(Start::score));
     return starts;
-  }
-
-  /** The pitches of the best starts, each once. */
-  private List<Double> pitches(List<Start> sorted) {
-    List<Double> pitches = new ArrayList<>();
-    double apart = NEAR_ROWS * sight.camera().camera().radPerPx();
-    for (Start start : sorted) {
-      boolean known = pitches.stream().anyMatch(p -> Math.abs(p - start.pitchShiftRad()) < apart);
-      if (!known && pitches.size() < PITCHES) {
-        pitches.add(start.pitchShiftRad());
-      }
-    }
-    return pitches;
   }
 
   private List<Start> climbed(List<Start> sorted, ProfileSetup open, int count) {
