@@ -5,6 +5,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import plumbray.calibration.estimate.Solution;
+import plumbray.calibration.quantity.Parameter;
 import plumbray.calibration.sight.PointMark;
 import plumbray.calibration.sight.PointTarget;
 import plumbray.calibration.sight.Sight;
@@ -39,24 +40,36 @@ final class FitReport {
         verdict.warnings(),
         sight,
         parameters.heldAt(values),
-        Estimates.of(parameters.names(), values, covariance(solution, n, anyStaff)),
+        Estimates.of(
+            parameters.names(), values, covariance(parameters.parameters(), solution, anyStaff)),
         residuals(readings, solution),
         alternatives,
         readings,
         anyStaff ? adjusted.found().shimmer().sigmaPx() : 0.0);
   }
 
-  /** Where only points were given and fit worse than they should, the sigmas grow accordingly. */
-  private static double[][] covariance(Solution solution, int n, boolean anyStaff) {
+  /**
+   * Covariance of the sight's quantities. Where only points were given and fit worse than they
+   * should, the sigmas grow accordingly. A quantity that ended at a bound is not certain: it counts
+   * as evenly spread between its bounds.
+   */
+  private static double[][] covariance(
+      List<Parameter> parameters, Solution solution, boolean anyStaff) {
     double factor =
         anyStaff || solution.degreesOfFreedom() < 1
             ? 1.0
             : Math.max(1.0, solution.cost() / solution.degreesOfFreedom());
+    int n = parameters.size();
     double[][] covariance = new double[n][n];
     double[][] all = solution.covariance();
     for (int i = 0; i < n; i++) {
       for (int j = 0; j < n; j++) {
         covariance[i][j] = all[i][j] * factor;
+      }
+      Parameter p = parameters.get(i);
+      double width = p.highest() - p.lowest();
+      if (solution.atBound().contains(p.name()) && Double.isFinite(width)) {
+        covariance[i][i] = width * width / 12.0;
       }
     }
     return covariance;
