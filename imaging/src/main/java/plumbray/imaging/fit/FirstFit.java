@@ -96,7 +96,7 @@ final class FirstFit {
     for (Start start : starts) {
       values.add(chased(startValues(start)));
     }
-    if (references.staffs().isEmpty()) {
+    if (references.staffs().isEmpty() || values.isEmpty()) {
       return values;
     }
     values.sort(Comparator.comparingDouble(this::looks));

@@ -5,6 +5,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.TreeSet;
+import org.apache.commons.math3.stat.regression.SimpleRegression;
 import plumbray.calibration.estimate.Degeneracy;
 import plumbray.calibration.estimate.Solution;
 import plumbray.calibration.sight.Sight;
@@ -17,6 +18,9 @@ final class Verdict {
 
   /** Unexplained brightness of a staff, as a part of its contrast, that no staff leaves. */
   private static final double NO_STAFF = 0.3;
+
+  /** Bars must bring the scatter of brightness below this part of what a straight line leaves. */
+  private static final double LEAST_EXPLAINED = 0.6;
 
   private static final int LEAST_EDGES = 4;
   private static final double MOST_SHIMMER_PX = 1.5;
@@ -101,7 +105,8 @@ final class Verdict {
       sum += miss * miss;
     }
     double rms = Math.sqrt(sum / look.used().length);
-    if (!(rms < NO_STAFF * look.contrast())) {
+    double plain = aboutLine(staff, look.used());
+    if (!(rms < NO_STAFF * look.contrast() && rms < LEAST_EXPLAINED * plain)) {
       error =
           String.format(
               Locale.ROOT,
@@ -110,6 +115,15 @@ final class Verdict {
                   + " the staff's edges and distance",
               name);
     }
+  }
+
+  /** Scatter of a strip's brightness about the straight line through it: what needs no bars. */
+  private static double aboutLine(StaffObservation staff, int[] used) {
+    SimpleRegression line = new SimpleRegression();
+    for (int i : used) {
+      line.addData(i, staff.scene().strip().brightness(i));
+    }
+    return Math.sqrt(line.getSumSquaredErrors() / used.length);
   }
 
   private void shimmer() {

@@ -72,6 +72,22 @@ class SightFitTest {
   }
 
   @Test
+  void aFlatPhotoASteepRampAndABoxOfOneRowFailInsteadOfCrashing() {
+    Photo black = StripPhotos.of(SmallSights.WIDTH_PX, SmallSights.HEIGHT_PX, v -> 0.0);
+    Photo ramp = StripPhotos.of(SmallSights.WIDTH_PX, SmallSights.HEIGHT_PX, v -> 0.002 * v + 0.1);
+    for (Photo photo : List.of(black, ramp)) {
+      FitResult result = new SightFit().fit(open(SmallSights.staff()), Optional.of(photo));
+      assertThat(result.status()).isEqualTo(FitStatus.FAILED);
+    }
+    Reference thin =
+        SmallSights.staff(
+            SmallSights.DISTANCE_M, Quantity.held(0.0), new ImageBox(10, 200, 20, 201.5));
+    Photo seen = SmallSights.stillPhoto(SmallSights.truth(6.0, 0.15));
+    assertThat(new SightFit().fit(open(thin), Optional.of(seen)).status())
+        .isEqualTo(FitStatus.FAILED);
+  }
+
+  @Test
   void aPhotoWithoutTheStaffFailsAndSaysWhatToCheck() {
     Photo plain = StripPhotos.of(SmallSights.WIDTH_PX, SmallSights.HEIGHT_PX, v -> 0.3 + 0.001 * v);
     FitResult result = new SightFit().fit(open(SmallSights.staff()), Optional.of(plain));
