@@ -79,7 +79,8 @@ class TemperatureRowTest {
     assertThat(rows.get(0).refractivityGradientPerM()).isPositive();
     TemperatureRow last = rows.get(rows.size() - 1);
     assertThat(last.heightM()).isCloseTo(5.0, within(1e-9));
-    // dn/dz = -(n - 1) (g/R + dT/dz) / T, the ideal gas: Young 2006; n - 1 = 2.6e-4, T = 304.6 K
+    // dn/dz = -(n - 1) (g/R + dT/dz) / T, worked out by hand for an ideal gas; n - 1 = 2.6e-4, T =
+    // 304.6 K
     assertThat(last.refractivityGradientPerM())
         .isCloseTo(-2.6e-4 * (0.0342 - 0.02) / 304.6, within(0.03 * 1.2e-8));
   }

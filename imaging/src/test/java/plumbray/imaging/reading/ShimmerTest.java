@@ -21,7 +21,8 @@ class ShimmerTest {
   void covarianceIsTheVarianceAtNoDistanceAndMaternsFunctionBeyond() {
     Shimmer shimmer = new Shimmer(0.4, 25.0);
     assertThat(shimmer.covariance(100.0, 100.0)).isCloseTo(0.16, within(ROUNDING));
-    // (1 + sqrt 3) exp(-sqrt 3) = 0.48335772 at one length: Rasmussen and Williams 2006, eq. 4.17,
+    // (1 + sqrt 3) exp(-sqrt 3) = 0.48335772 at one length: Rasmussen and Williams 2006, eq. 4.17
+    // (from memory),
     // worked out by hand
     assertThat(shimmer.covariance(100.0, 125.0) / 0.16).isCloseTo(0.48335772, within(1e-7));
     assertThat(shimmer.covariance(125.0, 100.0)).isEqualTo(shimmer.covariance(100.0, 125.0));
