@@ -248,7 +248,7 @@ class CommandsTest {
     }
     PhotoWriter.write(noise.build(), folder.resolve("p.png"));
     assertThat(run("fit", path("staff.sight.json"), path("p.png"), "--out", path("out")))
-        .isEqualTo(3);
+        .isEqualTo(2);
     assertThat(err.toString()).startsWith("p.png: failed: ");
     assertThat(folder.resolve("out/p.fit.json")).content().contains("\"status\" : \"failed\"");
     assertThat(run("rectify", path("out/p.fit.json"), path("p.png"), "--out", path("out")))

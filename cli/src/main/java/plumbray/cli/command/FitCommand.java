@@ -47,7 +47,8 @@ final class FitCommand implements Callable<Integer> {
     FitDocument fit = worker.workAlone(task, new ResultFiles(folder, task.name()));
     report(task, fit);
     boolean failed = fit.status() == FitStatus.FAILED;
-    return (failed ? ExitStatus.PHOTO_FAILED : ExitStatus.DONE).code();
+    // a reference that is not where the sight puts it is a wrong input; a batch alone goes on
+    return (failed ? ExitStatus.INPUT_WRONG : ExitStatus.DONE).code();
   }
 
   private void report(PhotoTask task, FitDocument fit) {
