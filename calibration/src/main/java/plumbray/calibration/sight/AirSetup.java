@@ -1,6 +1,7 @@
 package plumbray.calibration.sight;
 
 import java.util.List;
+import java.util.Objects;
 import plumbray.calibration.quantity.Quantity;
 import plumbray.calibration.sight.Checks.Named;
 import plumbray.raymodel.air.AirState;
@@ -14,8 +15,8 @@ import plumbray.raymodel.air.AirState;
  * @param relativeHumidity relative humidity, dimensionless, 0 to 1
  * @param co2Ppm carbon dioxide, parts per million, at least 0
  * @param wavelengthM wavelength of the light in vacuum, m, above 0
- * @param channelWavelengthsM wavelengths of the colour channels, m; empty when all channels use
- *     {@code wavelengthM}
+ * @param channelWavelengthsM wavelengths of red, green and blue light, m; empty when all channels
+ *     use {@code wavelengthM}
  */
 public record AirSetup(
     Quantity temperatureK,
@@ -25,6 +26,9 @@ public record AirSetup(
     double co2Ppm,
     double wavelengthM,
     List<Double> channelWavelengthsM) {
+
+  /** Colour channels: red, green and blue. */
+  public static final int CHANNELS = 3;
 
   /** Checks the ranges. */
   public AirSetup {
@@ -38,6 +42,40 @@ public record AirSetup(
     Named wavelength = new Named("wavelengthM", "m", "wavelength of the light");
     Checks.above(wavelengthM, 0, wavelength);
     channelWavelengthsM.forEach(each -> Checks.above(each, 0, wavelength));
+    if (!channelWavelengthsM.isEmpty() && channelWavelengthsM.size() != CHANNELS) {
+      throw new IllegalArgumentException(
+          "channelWavelengthsM has %d entries, must have 3 or none (red, green and blue light)"
+              .formatted(channelWavelengthsM.size()));
+    }
+  }
+
+  /**
+   * The same air for light of another wavelength.
+   *
+   * @param newWavelengthM wavelength in vacuum, m, above 0
+   * @return the changed air
+   */
+  public AirSetup atWavelength(double newWavelengthM) {
+    return new AirSetup(
+        temperatureK,
+        atHeightM,
+        pressurePa,
+        relativeHumidity,
+        co2Ppm,
+        newWavelengthM,
+        channelWavelengthsM);
+  }
+
+  /**
+   * The wavelength of one colour channel.
+   *
+   * @param channel 0 red, 1 green, 2 blue
+   * @return its own wavelength, m; that of the luminance where the channels have none of their own
+   * @throws IndexOutOfBoundsException where there is no such channel
+   */
+  public double wavelengthM(int channel) {
+    Objects.checkIndex(channel, CHANNELS);
+    return channelWavelengthsM.isEmpty() ? wavelengthM : channelWavelengthsM.get(channel);
   }
 
   /**

@@ -4,7 +4,6 @@ import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
-import plumbray.calibration.sight.AirSetup;
 import plumbray.calibration.sight.Sight;
 import plumbray.imaging.fit.SightOptics;
 import plumbray.imaging.photo.Photo;
@@ -83,18 +82,7 @@ final class Redrawing {
   }
 
   private RectifyMap map(int channel) {
-    Sight sight = optics.sight();
-    AirSetup air = sight.air();
-    AirSetup coloured =
-        new AirSetup(
-            air.temperatureK(),
-            air.atHeightM(),
-            air.pressurePa(),
-            air.relativeHumidity(),
-            air.co2Ppm(),
-            air.channelWavelengthsM().get(channel),
-            air.channelWavelengthsM());
-    return map(SightOptics.of(sight.withAir(coloured)));
+    return map(SightOptics.ofChannel(optics.sight(), channel));
   }
 
   private static RectifyMap map(SightOptics optics) {

@@ -59,6 +59,20 @@ public final class SightOptics {
     return of(sight, estimated, distancesInUse(sight));
   }
 
+  /**
+   * The optics for the light of one colour channel, without derivatives. The camera, the air and
+   * what is asked of the mappings are the same as in {@link #of(Sight)}; only the refractive index
+   * is that at the channel's wavelength, so that rays bend by (n_c - 1)/(n - 1) times as much, to
+   * first order.
+   *
+   * @param sight a sight whose profile family is chosen
+   * @param channel 0 red, 1 green, 2 blue; where the sight gives the channels no wavelengths of
+   *     their own, all see as the luminance does
+   */
+  public static SightOptics ofChannel(Sight sight, int channel) {
+    return of(sight.withAir(sight.air().atWavelength(sight.air().wavelengthM(channel))));
+  }
+
   /** The optics for distances of one's own, m. */
   public static SightOptics of(Sight sight, List<String> estimated, double[] distancesM) {
     Camera camera = sight.camera().camera();
