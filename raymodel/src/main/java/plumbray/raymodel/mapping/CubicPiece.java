@@ -1,11 +1,15 @@
 package plumbray.raymodel.mapping;
 
-/** Cubic Hermite interpolation between two nodes. */
-final class CubicPiece {
+/**
+ * Cubic Hermite interpolation between two nodes: s from 0 to 1 over the width, y the values at the
+ * nodes, d the slopes there.
+ */
+public final class CubicPiece {
 
   private CubicPiece() {}
 
-  static double value(double s, double width, double y0, double d0, double y1, double d1) {
+  /** The value at s. */
+  public static double value(double s, double width, double y0, double d0, double y1, double d1) {
     double rise = y1 - y0;
     double a = d0 * width - rise;
     double b = rise - d1 * width;
@@ -13,7 +17,8 @@ final class CubicPiece {
     return y0 + s * rise + s * (1.0 - s) * (a * (1.0 - s) + b * s);
   }
 
-  static double slope(double s, double width, double y0, double d0, double y1, double d1) {
+  /** The slope at s, per unit of the width. */
+  public static double slope(double s, double width, double y0, double d0, double y1, double d1) {
     double rise = y1 - y0;
     double a = d0 * width - rise;
     double b = rise - d1 * width;

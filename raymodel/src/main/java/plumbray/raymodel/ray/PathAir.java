@@ -1,6 +1,7 @@
 package plumbray.raymodel.ray;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 
 /**
@@ -90,8 +91,22 @@ public final class PathAir {
     return parameterCount;
   }
 
+  /**
+   * Evaluates the air at a place, as {@link VaryingMedium#evaluate} does. Not for use by several
+   * threads at once where the media are not.
+   */
+  public void evaluate(double distanceM, double heightM, double[] out, double[] along) {
+    Section section = sectionAfter(distanceM);
+    if (section.varying() == null) {
+      section.stratified().evaluate(heightM, out);
+      Arrays.fill(along, 0.0);
+    } else {
+      section.varying().evaluate(distanceM, heightM, out, along);
+    }
+  }
+
   /** Distances at which one section ends and the next begins, m, rising. */
-  double[] bordersM() {
+  public double[] bordersM() {
     return sections.stream().skip(1).mapToDouble(Section::fromM).toArray();
   }
 
