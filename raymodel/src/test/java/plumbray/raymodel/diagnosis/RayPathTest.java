@@ -15,6 +15,7 @@ import plumbray.raymodel.path.SightPath;
 import plumbray.raymodel.profile.ProfileFamily;
 import plumbray.raymodel.ray.Medium;
 import plumbray.raymodel.ray.PathAir;
+import plumbray.raymodel.ray.RayTrace;
 import plumbray.raymodel.ray.RayTracer;
 
 /** The local bending along a ray, against media and formulas in which it is known. */
@@ -127,6 +128,44 @@ class RayPathTest {
       at = bend.toM();
     }
     assertThat(at).isEqualTo(ray.reachM());
+  }
+
+  /**
+   * The coefficient is that of the traced ray itself, also on a slope where one air passes into
+   * another: -R d(angle in space)/d(length), from the ray's slopes on both sides. The central
+   * difference over 2 m of a blend 100 m long misses by less than 1e-3 of the coefficient.
+   */
+  @Test
+  void itIsTheCurvatureOfTheTracedRayWhereTheAirChangesAlongASlope() {
+    PathAir air =
+        PathAir.of(
+            List.of(
+                new PathAir.Stretch(
+                    0, 0, KnownAir.column(ProfileFamily.EXPONENTIAL, 12.0, 0.25, -0.0098)),
+                new PathAir.Stretch(
+                    300, 100, KnownAir.column(ProfileFamily.EXPONENTIAL, -3.0, 0.5, 0.01))));
+    SightPath path =
+        new SightPath(
+            SightPath.MEAN_EARTH_RADIUS_M,
+            new GroundProfile(new double[] {0, 1000}, new double[] {0, 12.0}),
+            0.0);
+    RayPath ray = new RayFollower(air, path, 1.0, 400.0).follow(11.5e-3);
+    double[] x = ray.distancesM();
+    for (double at : new double[] {100.0, 280.0, 325.0, 390.0}) {
+      int place = Arrays.binarySearch(x, at);
+      double[] around = {at - 1.0, at, at + 1.0};
+      RayTrace trace = new RayTracer(air, path, around, false, 1e-11).trace(1.0, 11.5e-3);
+      double turn = angle(trace, 2) - angle(trace, 0) - 2.0 / path.earthRadiusM();
+      double length = 2.0 / Math.cos(angle(trace, 1));
+      double curvature = -path.earthRadiusM() * turn / length;
+      assertThat(ray.coefficients()[place])
+          .isCloseTo(curvature, within(1e-3 * Math.abs(curvature)));
+    }
+  }
+
+  /** Elevation angle of a ray; heights of metres change nothing in it. */
+  private static double angle(RayTrace trace, int target) {
+    return Math.atan(trace.pathSlope(target));
   }
 
   @Test
