@@ -9,6 +9,13 @@ final class ClearanceWatch {
 
   private static final int ITERATIONS = 60;
 
+  /** As a part of how far the ray comes down in the step. */
+  private static final double CLOSE = 0.05;
+
+  /** Fractions of a step that need no step of their own. */
+  private static final double SHORTEST = 1e-3;
+
+  private final double[] next = new double[3];
   private final double[] left = new double[3];
   private final double[] right = new double[3];
   private final double[] p = new double[6];
@@ -31,6 +38,25 @@ final class ClearanceWatch {
   }
 
   /**
+   * Where within the step of length {@code h} just taken the ray comes so close to what blocks it
+   * that the quintic may be too rough to tell on which side it passes.
+   *
+   * @return the fraction of the step after which the ray is lowest; 1 where the step is good as is
+   */
+  double closerLook(RayState state, double blockedBelowM, double h) {
+    state.clearance(next);
+    next[0] -= blockedBelowM;
+    if (!(right[1] < 0.0 && next[1] > 0.0)) {
+      return 1.0;
+    }
+    fit(right, next, h);
+    double turn = root(1, 0.0, 1.0);
+    double lowest = value(turn);
+    boolean close = Math.abs(lowest) < CLOSE * (Math.max(right[0], next[0]) - lowest);
+    return close && turn > SHORTEST && turn < 1.0 - SHORTEST ? turn : 1.0;
+  }
+
+  /**
    * Looks at the step of length {@code h} just accepted.
    *
    * @return the fraction of the step after which the ray goes under, NaN where it does not
@@ -42,7 +68,7 @@ final class ClearanceWatch {
     double turn = Double.NaN;
     double lowest = right[0];
     if (left[1] < 0.0 && right[1] > 0.0) {
-      fit(h);
+      fit(left, right, h);
       turn = root(1, 0.0, 1.0);
       lowest = Math.min(lowest, value(turn));
     }
@@ -50,11 +76,11 @@ final class ClearanceWatch {
     if (lowest >= 0.0 || left[0] < 0.0) {
       return Double.NaN;
     }
-    fit(h);
+    fit(left, right, h);
     return root(0, 0.0, right[0] < 0.0 && !(value(turn) < 0.0) ? 1.0 : turn);
   }
 
-  private void fit(double h) {
+  private void fit(double[] left, double[] right, double h) {
     p[0] = left[0];
     p[1] = left[1] * h;
     p[2] = 0.5 * left[2] * h * h;

@@ -11,8 +11,15 @@ import java.util.Arrays;
  */
 final class RayState {
 
+  /** Steps keep below the air's scales: one whose error turns out too large is a step wasted. */
+  private static final double OF_SCALE = 0.7;
+
   private final PathAir pathAir;
   private final double earthRadiusM;
+
+  /** 1/earthRadiusM: a product is ready much sooner than a quotient. */
+  private final double curvature;
+
   final int components;
   private final double[] air;
 
@@ -44,6 +51,7 @@ final class RayState {
   RayState(PathAir pathAir, double earthRadiusM, boolean withSensitivities) {
     this.pathAir = pathAir;
     this.earthRadiusM = earthRadiusM;
+    curvature = 1.0 / earthRadiusM;
     components = withSensitivities ? 3 + pathAir.parameterCount() : 1;
     air = new double[3 + 2 * pathAir.parameterCount()];
     along = new double[3 + pathAir.parameterCount()];
@@ -137,10 +145,10 @@ final class RayState {
       double[] a = NystromPair.A[stage];
       double ch = NystromPair.C[stage] * h;
       advance(u, uRate, uForce, a, ch, h * h, uNew);
-      if (coasting) {
-        coast(ch);
-      } else {
+      if (!coasting) {
         advance(x, xRate, xForce, a, ch, h * h, xNew);
+      } else if (stage == NystromPair.STAGES - 1) {
+        coast(ch);
       }
       force(stage, uNew, xNew);
     }
@@ -153,6 +161,7 @@ final class RayState {
     return errorM(h, slopeLengthM);
   }
 
+  /** Position of a stage, or of the step's end: from + ch rate + hh sum of a forces. */
   private void advance(
       double[] from,
       double[] rate,
@@ -161,12 +170,9 @@ final class RayState {
       double ch,
       double hh,
       double[] to) {
+    NystromPair.weightedSum(forces, a, components, to);
     for (int j = 0; j < components; j++) {
-      double sum = 0.0;
-      for (int s = 0; s < a.length; s++) {
-        sum += a[s] * forces[s][j];
-      }
-      to[j] = from[j] + ch * rate[j] + hh * sum;
+      to[j] = from[j] + ch * rate[j] + hh * to[j];
     }
   }
 
@@ -177,12 +183,9 @@ final class RayState {
   }
 
   private void advance(double[] rate, double[][] forces, double h, double[] to) {
+    NystromPair.weightedSum(forces, NystromPair.SLOPE, components, to);
     for (int j = 0; j < components; j++) {
-      double sum = 0.0;
-      for (int s = 0; s < NystromPair.STAGES; s++) {
-        sum += NystromPair.SLOPE[s] * forces[s][j];
-      }
-      to[j] = rate[j] + h * sum;
+      to[j] = rate[j] + h * to[j];
     }
   }
 
@@ -228,6 +231,11 @@ final class RayState {
     xForce[last] = swap;
   }
 
+  /** Goes back to before the step that was taken last; another can be tried from there. */
+  void takeBack() {
+    accept();
+  }
+
   /** Distance at which the step that was tried last ends, m. */
   double triedDistanceM() {
     return xNew[0];
@@ -240,10 +248,10 @@ final class RayState {
 
   /** Fills value, first and second derivative by sigma of the height above the ground. */
   void clearance(double[] out) {
-    double b = 1.0 + elevationM() / earthRadiusM;
+    double b = 1.0 + elevationM() * curvature;
     out[0] = heightM();
     out[1] = b * uRate[0] - groundSlope * xRate[0];
-    out[2] = b * (uForce[0][0] + uRate[0] * uRate[0] / earthRadiusM) - groundSlope * xForce[0][0];
+    out[2] = b * (uForce[0][0] + uRate[0] * uRate[0] * curvature) - groundSlope * xForce[0][0];
   }
 
   /** Elevation above the level surface, m. */
@@ -252,20 +260,21 @@ final class RayState {
   }
 
   private double elevationM(double uM) {
-    double e = uM / earthRadiusM;
+    double e = uM * curvature;
+    double ee = e * e;
     return Math.abs(e) < 1e-3
-        ? uM * (1.0 + e * (0.5 + e * (1.0 / 6 + e * (1.0 / 24 + e / 120))))
+        ? uM + uM * e * (0.5 + e * (1.0 / 6) + ee * (1.0 / 24 + e * (1.0 / 120)))
         : earthRadiusM * Math.expm1(e);
   }
 
   /** dy/dx of the ray. */
   double pathSlope() {
-    return (1.0 + elevationM() / earthRadiusM) * uRate[0] / xRate[0];
+    return (1.0 + elevationM() * curvature) * uRate[0] / xRate[0];
   }
 
   /** Derivative of the elevation at fixed distance by quantity {@code j - 1}. */
   double sensitivity(int j) {
-    double b = 1.0 + elevationM() / earthRadiusM;
+    double b = 1.0 + elevationM() * curvature;
     return b * (u[j] - uRate[0] / xRate[0] * x[j]);
   }
 
@@ -280,16 +289,16 @@ final class RayState {
     double byBend = Math.sqrt(2.0 * scale / Math.abs(uForce[0][0]));
     double byDistance =
         varying == null ? Double.POSITIVE_INFINITY : varying.horizontalScaleM() / xRate[0];
-    return Math.min(byDistance, Math.min(bySlope, byBend));
+    return OF_SCALE * Math.min(byDistance, Math.min(bySlope, byBend));
   }
 
   private void force(int stage, double[] atU, double[] atX) {
     double y = elevationM(atU[0]);
-    double b = 1.0 + y / earthRadiusM;
+    double b = 1.0 + y * curvature;
     evaluateAir(atX[0], y - groundIntercept - groundSlope * atX[0]);
     double n = 1.0 + air[0];
     double m2 = n * n * b * b;
-    double logU = air[1] * b + 1.0 / earthRadiusM;
+    double logU = air[1] * b + curvature;
     double logX = along[0] - air[1] * groundSlope;
     uForce[stage][0] = m2 * logU;
     if (coasting) {
@@ -302,7 +311,7 @@ final class RayState {
 
   /** Forces on the derivatives where ln m depends on u alone. */
   private void upForces(double[] fu, double[] atU, double b, double m2, double logU) {
-    double logUu = air[2] * b * b + air[1] * b / earthRadiusM;
+    double logUu = air[2] * b * b + air[1] * b * curvature;
     double byU = 2.0 * logU * logU + logUu;
     for (int j = 1; j < Math.min(3, components); j++) {
       fu[j] = m2 * byU * atU[j];
@@ -315,9 +324,9 @@ final class RayState {
   /** Forces on the derivatives; ln m = ln n(x, y - G(x)) + u/R has slopes in both directions. */
   private void bothForces(int stage, double[] atU, double[] atX, double b, double m2) {
     double s = groundSlope;
-    double logU = air[1] * b + 1.0 / earthRadiusM;
+    double logU = air[1] * b + curvature;
     double logX = along[0] - air[1] * s;
-    double logUu = air[2] * b * b + air[1] * b / earthRadiusM;
+    double logUu = air[2] * b * b + air[1] * b * curvature;
     double logUx = b * (along[1] - air[2] * s);
     double logXx = along[2] + s * (air[2] * s - 2.0 * along[1]);
     double[] fu = uForce[stage];

@@ -15,8 +15,12 @@ import plumbray.raymodel.path.SightPath;
  */
 public final class RayTracer {
 
-  /** Default bound of the local error of a step, m. */
-  public static final double DEFAULT_TOLERANCE_M = 1e-9;
+  /**
+   * Default bound of the local error of a step, m. Whole rays then err by less than a two-hundredth
+   * of a pixel of 6.7 microradians even through layers of millimetres and over 20 km, and by some
+   * nanometres to a micrometre in common sights.
+   */
+  public static final double DEFAULT_TOLERANCE_M = 1e-8;
 
   private static final double SLOPE_LENGTH_M = 10.0;
   private static final double SAFETY = 0.9;
@@ -29,7 +33,6 @@ public final class RayTracer {
   private final double[] targetsM;
   private final double[] stopsM;
   private final double toleranceM;
-  private final double longestStepM;
   private final RayState state;
   private final ClearanceWatch watch = new ClearanceWatch();
   private double step;
@@ -71,7 +74,6 @@ public final class RayTracer {
     this.targetsM = targetsM.clone();
     this.toleranceM = toleranceM;
     double reach = targetsM[targetsM.length - 1];
-    longestStepM = Math.max(20.0, reach / 50.0);
     stopsM =
         Stream.of(targetsM, path.ground().breaksM(), air.bordersM())
             .flatMapToDouble(DoubleStream::of)
@@ -99,7 +101,7 @@ public final class RayTracer {
     RayTrace trace = new RayTrace(apparentRad, targetsM.length, state.components - 1);
     state.start(cameraHeightM, apparentRad);
     watch.reset();
-    step = 1.0;
+    step = Double.POSITIVE_INFINITY;
     GroundProfile ground = path.ground();
     double from = 0.0;
     for (double stop : stopsM) {
@@ -131,13 +133,20 @@ public final class RayTracer {
   /** Runs to a stop; false where the ray ends before. */
   private boolean run(double stopM, boolean stopping, RayTrace trace) {
     while (stopM - state.x[0] > LANDING_M) {
-      double wanted = Math.min(step, Math.min(longestStepM, state.largestStep()));
+      double wanted = Math.min(step, state.largestStep());
       double toStop = (stopM - state.x[0]) / state.xRate[0];
       boolean landing = wanted >= toStop;
       double h = landing ? toStop : wanted;
       double from = state.x[0];
       h = tryStep(h, landing, stopM, trace);
       state.accept();
+      double closer = watch.closerLook(state, path.blockedBelowM(), h);
+      if (closer < 1.0) {
+        h *= closer;
+        state.takeBack();
+        state.attempt(h, SLOPE_LENGTH_M);
+        state.accept();
+      }
       trace.steps++;
       double under = watch.observe(state, path.blockedBelowM(), h);
       if (stopping && !Double.isNaN(under)) {

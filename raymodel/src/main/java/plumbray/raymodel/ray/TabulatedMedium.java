@@ -41,6 +41,10 @@ public final class TabulatedMedium implements Medium {
   private final ChebyshevFit fit = new ChebyshevFit(NODES);
   private final double[] scratch;
   private final double[] edges;
+  private final double[] middles;
+
+  /** By panel: 1/half its width. */
+  private final double[] perHalf;
 
   /** By panel: for each channel the coefficients of ln n (or its derivative by a parameter). */
   private final double[][] panels;
@@ -64,6 +68,12 @@ public final class TabulatedMedium implements Medium {
     }
     edges = tops.stream().mapToDouble(Double::doubleValue).toArray();
     panels = built.toArray(double[][]::new);
+    middles = new double[panels.length];
+    perHalf = new double[panels.length];
+    for (int i = 0; i < panels.length; i++) {
+      middles[i] = 0.5 * (edges[i] + edges[i + 1]);
+      perHalf[i] = 2.0 / (edges[i + 1] - edges[i]);
+    }
   }
 
   @Override
@@ -88,36 +98,48 @@ public final class TabulatedMedium implements Medium {
       return;
     }
     locate(heightM);
-    double half = 0.5 * (edges[at + 1] - edges[at]);
-    double s = (heightM - edges[at]) / half - 1.0;
-    double[] panel = panels[at];
-    logIndex(panel, s, half, out);
-    for (int c = 1; c < channels; c++) {
-      int base = c * COEFFICIENTS;
-      double value = panel[base + NODES];
-      double slope = 0.0;
-      for (int i = NODES - 1; i >= 0; i--) {
-        slope = slope * s + value;
-        value = value * s + panel[base + i];
-      }
-      out[1 + 2 * c] = value;
-      out[2 + 2 * c] = slope / half;
-    }
+    fill(panels[at], (heightM - middles[at]) * perHalf[at], perHalf[at], out);
   }
 
-  private static void logIndex(double[] panel, double s, double half, double[] out) {
-    double value = panel[NODES];
-    double slope = 0.0;
-    double bend = 0.0;
-    for (int i = NODES - 1; i >= 0; i--) {
-      bend = bend * s + slope;
-      slope = slope * s + value;
-      value = value * s + panel[i];
+  /**
+   * Sums powers instead of nesting them: the sums of all channels share the powers and run beside
+   * each other, while each line of a nested form waits for the one before.
+   */
+  private void fill(double[] c, double s, double perHalf, double[] out) {
+    double s2 = s * s;
+    double s3 = s2 * s;
+    double s4 = s2 * s2;
+    double s5 = s4 * s;
+    double s6 = s3 * s3;
+    double s7 = s6 * s;
+    double s8 = s4 * s4;
+    double bend =
+        2.0 * c[2]
+            + 6.0 * s * c[3]
+            + 12.0 * s2 * c[4]
+            + (20.0 * s3 * c[5] + 30.0 * s4 * c[6])
+            + (42.0 * s5 * c[7] + 56.0 * s6 * c[8]);
+    for (int channel = 0, b = 0; channel < channels; channel++, b += COEFFICIENTS) {
+      double c1 = c[b + 1];
+      double c2 = c[b + 2];
+      double c3 = c[b + 3];
+      double c4 = c[b + 4];
+      double c5 = c[b + 5];
+      double c6 = c[b + 6];
+      double c7 = c[b + 7];
+      double c8 = c[b + 8];
+      double low = c[b] + s * c1 + s2 * c2 + s3 * c3 + s4 * c4;
+      double high = s5 * c5 + s6 * c6 + (s7 * c7 + s8 * c8);
+      double slopeLow = c1 + 2.0 * s * c2 + 3.0 * s2 * c3 + 4.0 * s3 * c4;
+      double slopeHigh = 5.0 * s4 * c5 + 6.0 * s5 * c6 + (7.0 * s6 * c7 + 8.0 * s7 * c8);
+      out[1 + 2 * channel] = low + high;
+      out[2 + 2 * channel] = (slopeLow + slopeHigh) * perHalf;
     }
+    double log = out[1];
     // ln n is below 1e-3, so four terms give n - 1 to the last bit
-    out[0] = value * (1.0 + value * (0.5 + value * (1.0 / 6 + value / 24)));
-    out[1] = slope / half;
-    out[2] = 2.0 * bend / (half * half);
+    out[0] = log + log * log * ((0.5 + log * (1.0 / 6)) + log * log * (1.0 / 24));
+    out[1] = out[2];
+    out[2] = bend * perHalf * perHalf;
   }
 
   private void locate(double heightM) {

@@ -93,14 +93,15 @@ class RayZooTest {
   }
 
   @Test
-  void halvingTheStepsDividesTheErrorBySixtyFour() {
+  void halvingTheStepsDividesTheErrorBy256() {
+    // six times to and fro: long enough that the error is well above rounding
     ZooRay ray =
-        new ZooRay(new MirageMedia.HotGround(1.00026, 5e-5, 0.1), ZooRay.FLAT_M, 1.5, -4e-3, 600);
-    double before = fixedStepError(ray, 40);
-    for (int steps = 80; steps <= 160; steps *= 2) {
+        new ZooRay(new FlatMedia.HyperbolicSecant(1.5, 0.02), ZooRay.FLAT_M, 0.5, 0.02, 3777);
+    double before = fixedStepError(ray, 64);
+    for (int steps = 128; steps <= 512; steps *= 2) {
       double error = fixedStepError(ray, steps);
-      // sixth order: 64 in the limit
-      assertThat(before / error).as("steps %s, error %s", steps, error).isBetween(45.0, 90.0);
+      // eighth order: 256 in the limit
+      assertThat(before / error).as("steps %s, error %s", steps, error).isBetween(200.0, 320.0);
       before = error;
     }
   }
