@@ -35,6 +35,7 @@ public final class AirColumn implements Medium {
   private final double gammaByVapour;
   private final int temperatureParameters;
   private final double[] vapourSlopes;
+  private final double referenceTemperatureK;
   private final double referencePressurePa;
   private final int[] carried;
   private final double[] t;
@@ -47,6 +48,7 @@ public final class AirColumn implements Medium {
     temperature = new TemperatureColumn(profile, state.temperatureK(), referenceHeightM);
     integral = new InverseTemperatureIntegral(temperature, referenceHeightM);
     law = RefractivityLaw.of(state);
+    referenceTemperatureK = state.temperatureK();
     referencePressurePa = state.pressurePa();
     logReferencePressure = Math.log(state.pressurePa());
     gamma = AUTOCONVECTIVE_K_PER_M * (1.0 - VIRTUAL * law.vapourMoleFraction());
@@ -129,6 +131,25 @@ public final class AirColumn implements Medium {
       out[3 + 2 * k] = nk;
       out[4 + 2 * k] = share * (log.byParameter() * log.slope() + log.slopeByParameter()) - g * nk;
     }
+  }
+
+  /**
+   * Pressure falls with the ground's elevation as in level air of the reference temperature, by
+   * gamma/T_ref a metre; the temperature follows the ground.
+   */
+  @Override
+  public double[] lapse() {
+    double[] out = new double[1 + carried.length];
+    double tempK = referenceTemperatureK;
+    out[0] = gamma / tempK;
+    for (int k = 0; k < carried.length; k++) {
+      int stateIndex = carried[k] - (temperatureParameters - 1);
+      if (carried[k] != FOREIGN && stateIndex >= 0) {
+        double byTemperature = stateIndex == 0 ? gamma / tempK : 0.0;
+        out[1 + k] = (gammaByVapour * vapourSlopes[stateIndex] - byTemperature) / tempK;
+      }
+    }
+    return out;
   }
 
   private void differentiate(int k) {

@@ -37,6 +37,11 @@ final class BlendedMedium implements VaryingMedium {
   }
 
   @Override
+  public double[] lapse() {
+    return before.lapse();
+  }
+
+  @Override
   public double verticalScaleM(double distanceM, double heightM) {
     return Math.min(before.verticalScaleM(heightM), after.verticalScaleM(heightM));
   }

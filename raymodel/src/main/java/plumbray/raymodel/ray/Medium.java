@@ -1,6 +1,9 @@
 package plumbray.raymodel.ray;
 
-/** Air whose refractive index n depends on the height above the local ground alone. */
+/**
+ * Air whose refractive index n depends on the height above the local ground, and on that ground's
+ * elevation at most by {@link #lapse}.
+ */
 public interface Medium {
 
   /** How many parameters the index depends on. */
@@ -15,6 +18,15 @@ public interface Medium {
    *     parameterCount()} long
    */
   void evaluate(double heightM, double[] out);
+
+  /**
+   * How the air thins with the elevation of the ground under it: -d ln(n - 1)/dG, 1/m, and then its
+   * derivative by each parameter. Zero where the index depends on nothing but the height above the
+   * ground.
+   */
+  default double[] lapse() {
+    return new double[1 + parameterCount()];
+  }
 
   /**
    * A vertical length, m, over which the index near {@code heightM} is smooth; no step of an

@@ -105,6 +105,12 @@ public final class PathAir {
     }
   }
 
+  /** How the air thins with the elevation of the ground, as at the camera. */
+  double[] lapse() {
+    Section first = sections.get(0);
+    return first.varying() == null ? first.stratified().lapse() : first.varying().lapse();
+  }
+
   /** Distances at which one section ends and the next begins, m, rising. */
   public double[] bordersM() {
     return sections.stream().skip(1).mapToDouble(Section::fromM).toArray();

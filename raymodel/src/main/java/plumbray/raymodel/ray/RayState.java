@@ -14,23 +14,18 @@ final class RayState {
   /** Steps keep below the air's scales: one whose error turns out too large is a step wasted. */
   private static final double OF_SCALE = 0.7;
 
-  private final PathAir pathAir;
+  private final LocalAir local;
   private final double earthRadiusM;
 
   /** 1/earthRadiusM: a product is ready much sooner than a quotient. */
   private final double curvature;
 
   final int components;
+
+  /** As the local air fills them. */
   private final double[] air;
 
-  /** What a varying medium fills; zero where the air is stratified. */
   private final double[] along;
-
-  /** The stratified air here; null where it varies. */
-  private Medium stratified;
-
-  /** The varying air here; null where it is stratified. */
-  private VaryingMedium varying;
 
   double[] u;
   double[] x;
@@ -49,12 +44,12 @@ final class RayState {
   private boolean coasting;
 
   RayState(PathAir pathAir, double earthRadiusM, boolean withSensitivities) {
-    this.pathAir = pathAir;
+    local = new LocalAir(pathAir);
+    air = local.air;
+    along = local.along;
     this.earthRadiusM = earthRadiusM;
     curvature = 1.0 / earthRadiusM;
     components = withSensitivities ? 3 + pathAir.parameterCount() : 1;
-    air = new double[3 + 2 * pathAir.parameterCount()];
-    along = new double[3 + pathAir.parameterCount()];
     u = new double[components];
     x = new double[components];
     uRate = new double[components];
@@ -88,12 +83,8 @@ final class RayState {
   }
 
   private void enterAir(double fromM) {
-    stratified = pathAir.stratifiedAfter(fromM);
-    varying = pathAir.varyingAfter(fromM);
-    if (varying == null) {
-      Arrays.fill(along, 0.0);
-    }
-    coasting = varying == null && groundSlope == 0.0;
+    local.enter(fromM, groundSlope, groundIntercept);
+    coasting = !local.varies() && groundSlope == 0.0;
     if (coasting) {
       for (double[] stage : xForce) {
         Arrays.fill(stage, 0.0);
@@ -101,20 +92,14 @@ final class RayState {
     }
   }
 
-  private void evaluateAir(double distanceM, double heightM) {
-    if (varying == null) {
-      stratified.evaluate(heightM, air);
-    } else {
-      varying.evaluate(distanceM, heightM, air, along);
-    }
-  }
-
   /** Puts the ray at the camera. */
   void start(double cameraHeightM, double apparentRad) {
     Arrays.fill(u, 0.0);
     Arrays.fill(x, 0.0);
+    groundSlope = 0.0;
+    groundIntercept = 0.0;
     enterAir(0.0);
-    evaluateAir(0.0, cameraHeightM);
+    local.evaluate(0.0, cameraHeightM);
     double scale = 1.0 + cameraHeightM / earthRadiusM;
     double m = (1.0 + air[0]) * scale;
     double cos = Math.cos(apparentRad);
@@ -197,7 +182,7 @@ final class RayState {
       slope += NystromPair.SLOPE_ERROR[s] * uForce[s][0];
     }
     double error = Math.max(Math.abs(position) * h * h, Math.abs(slope) * h * slopeLengthM);
-    return varying == null ? error : Math.max(error, alongErrorM(h));
+    return local.varies() ? Math.max(error, alongErrorM(h)) : error;
   }
 
   private double alongErrorM(double h) {
@@ -281,21 +266,17 @@ final class RayState {
   /** Largest step, in sigma, that stays within the air's scales. */
   double largestStep() {
     double heightM = heightM();
-    double scale =
-        varying == null
-            ? stratified.verticalScaleM(heightM)
-            : varying.verticalScaleM(x[0], heightM);
+    double scale = local.verticalScaleM(x[0], heightM);
     double bySlope = scale / Math.abs(uRate[0] - groundSlope * xRate[0]);
     double byBend = Math.sqrt(2.0 * scale / Math.abs(uForce[0][0]));
-    double byDistance =
-        varying == null ? Double.POSITIVE_INFINITY : varying.horizontalScaleM() / xRate[0];
+    double byDistance = local.horizontalScaleM() / xRate[0];
     return OF_SCALE * Math.min(byDistance, Math.min(bySlope, byBend));
   }
 
   private void force(int stage, double[] atU, double[] atX) {
     double y = elevationM(atU[0]);
     double b = 1.0 + y * curvature;
-    evaluateAir(atX[0], y - groundIntercept - groundSlope * atX[0]);
+    local.evaluate(atX[0], y - groundIntercept - groundSlope * atX[0]);
     double n = 1.0 + air[0];
     double m2 = n * n * b * b;
     double logU = air[1] * b + curvature;

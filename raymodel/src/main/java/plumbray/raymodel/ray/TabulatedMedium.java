@@ -86,6 +86,11 @@ public final class TabulatedMedium implements Medium {
     return medium.verticalScaleM(heightM);
   }
 
+  @Override
+  public double[] lapse() {
+    return medium.lapse();
+  }
+
   /** How many polynomials the table is made of. */
   public int panelCount() {
     return panels.length;

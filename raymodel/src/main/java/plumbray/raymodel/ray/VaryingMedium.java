@@ -19,6 +19,11 @@ public interface VaryingMedium {
    */
   void evaluate(double distanceM, double heightM, double[] out, double[] along);
 
+  /** As {@link Medium#lapse}; the same all along the path. */
+  default double[] lapse() {
+    return new double[1 + parameterCount()];
+  }
+
   /** A vertical length, m, as {@link Medium#verticalScaleM} gives it. */
   double verticalScaleM(double distanceM, double heightM);
 

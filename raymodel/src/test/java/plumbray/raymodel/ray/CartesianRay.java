@@ -6,8 +6,8 @@ import plumbray.raymodel.path.SightPath;
  * Another way to the same rays: the equations in elevation y and t = dy/(horizontal way), with the
  * distance x along the level surface as the variable, by the classical fourth-order method in fixed
  * steps: dy/dx = (1 + y/R) t, dt/dx = (1 + t^2) (1/R + (1 + y/R) L_y - t L_x), L = ln n, with L_y =
- * dL/dz and L_x = dL/dx at fixed z less G'(x) dL/dz over ground G(x). Derived from Fermat's
- * principle.
+ * dL/dz and L_x = dL/dx at fixed z less G'(x) dL/dz over ground G(x); n - 1 is thinned by exp(-k
+ * G(x)), k the air's lapse. Derived from Fermat's principle.
  */
 final class CartesianRay {
 
@@ -46,8 +46,14 @@ final class CartesianRay {
   private double[] rates(double x, double y, double t, double ground, double groundSlope) {
     double radius = path.earthRadiusM();
     double b = 1.0 + y / radius;
-    air.evaluate(x, y - ground - groundSlope * x, out, along);
-    double byX = along[0] - groundSlope * out[1];
-    return new double[] {b * t, (1.0 + t * t) * (1.0 / radius + b * out[1] - t * byX)};
+    double groundM = ground + groundSlope * x;
+    air.evaluate(x, y - groundM, out, along);
+    double lapse = air.lapse()[0];
+    double thin = Math.exp(-lapse * groundM);
+    double n = 1.0 + out[0] * thin;
+    double byZ = thin * (1.0 + out[0]) * out[1] / n;
+    double byX = (thin * (1.0 + out[0]) * along[0] - lapse * groundSlope * out[0] * thin) / n;
+    double atElevation = byX - groundSlope * byZ;
+    return new double[] {b * t, (1.0 + t * t) * (1.0 / radius + b * byZ - t * atElevation)};
   }
 }

@@ -66,7 +66,8 @@ class InvariantTest {
         SightPath back = new SightPath(RADIUS_M + y[3], turned(x, y, 1.0 + y[3] / RADIUS_M), 0.0);
         double there = reach * (1.0 + y[3] / RADIUS_M);
         RayTrace home =
-            new RayTracer(column, back, new double[] {there}, false, FINE_M).trace(end, -arrival);
+            new RayTracer(new Raised(column, y[3]), back, new double[] {there}, false, FINE_M)
+                .trace(end, -arrival);
         assertThat(home.arrives(0)).isTrue();
         assertThat(home.elevationM(0) + y[3])
             .as("%s at %s", air, angle)
@@ -84,5 +85,34 @@ class InvariantTest {
       elevations[i] = y[last - i] - y[last];
     }
     return new GroundProfile(distances, elevations);
+  }
+
+  /** Air as over ground that lies higher: the foot of the far end. Values by height alone. */
+  private record Raised(Medium air, double elevationM) implements Medium {
+    @Override
+    public int parameterCount() {
+      return air.parameterCount();
+    }
+
+    @Override
+    public double[] lapse() {
+      return air.lapse();
+    }
+
+    @Override
+    public void evaluate(double heightM, double[] out) {
+      air.evaluate(heightM, out);
+      double thinner = out[0] * Math.exp(-air.lapse()[0] * elevationM);
+      double share = thinner / out[0] * (1.0 + out[0]) / (1.0 + thinner);
+      double slope = share * out[1];
+      out[2] = share * (out[2] + out[1] * out[1]) - slope * slope;
+      out[1] = slope;
+      out[0] = thinner;
+    }
+
+    @Override
+    public double verticalScaleM(double heightM) {
+      return air.verticalScaleM(heightM);
+    }
   }
 }
