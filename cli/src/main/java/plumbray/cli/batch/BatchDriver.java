@@ -15,7 +15,6 @@ import plumbray.cli.document.Digest;
 import plumbray.cli.document.FitDocument;
 import plumbray.cli.document.SummaryCsv;
 import plumbray.cli.document.WholeFile;
-import plumbray.cli.work.FinishedWork;
 import plumbray.cli.work.PhotoTask;
 import plumbray.cli.work.PhotoWorker;
 import plumbray.cli.work.ResultFiles;
@@ -93,7 +92,7 @@ public final class BatchDriver {
   private PhotoOutcome outcome(PhotoTask task) {
     ResultFiles files = new ResultFiles(folder, task.name());
     try {
-      Optional<FitDocument> finished = FinishedWork.find(task, files);
+      Optional<FitDocument> finished = worker.finished(task, files);
       if (finished.isPresent()) {
         return PhotoOutcome.of(task.name(), task.label(), finished.get(), true);
       }

@@ -3,8 +3,10 @@ package plumbray.cli.command;
 import java.io.IOException;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Optional;
 import java.util.concurrent.Callable;
 import picocli.CommandLine.Command;
+import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
 import picocli.CommandLine.ParameterException;
@@ -20,6 +22,7 @@ import plumbray.cli.work.PhotoTask;
 import plumbray.cli.work.PhotoWorker;
 import plumbray.imaging.fit.FitStatus;
 import plumbray.imaging.fit.SightFit;
+import plumbray.imaging.rectify.RedrawOptions;
 
 /** {@code plumbray batch}: fits, redraws and reports every photo of a batch file. */
 @Command(
@@ -50,13 +53,16 @@ final class BatchCommand implements Callable<Integer> {
       description = "Photos worked on at a time; as many as there are processors if left out.")
   private Integer jobs;
 
+  @Mixin private RedrawChoice redraw;
+
   @Override
   public Integer call() throws IOException {
     int side = jobs();
+    RedrawOptions way = redraw.options();
     List<PhotoTask> tasks = BatchReader.read(batchFile).stream().map(PhotoTask::of).toList();
     WholeFile.makeFolder(folder);
     ProgressLine progress = ProgressLine.of(parent.terminal());
-    PhotoWorker worker = new PhotoWorker(new SightFit()::fit, true, 1);
+    PhotoWorker worker = new PhotoWorker(new SightFit()::fit, Optional.of(way), 1);
     BatchDriver driver = new BatchDriver(worker, folder, side, progress);
     List<PhotoOutcome> outcomes =
         driver.run(batchFile.getFileName().toString(), List.of(Digest.of(batchFile)), tasks);

@@ -43,7 +43,7 @@ final class FitCommand implements Callable<Integer> {
   public Integer call() throws IOException {
     PhotoTask task = PhotoTask.of(sightFile, Optional.ofNullable(photoFile));
     int threads = Runtime.getRuntime().availableProcessors();
-    PhotoWorker worker = new PhotoWorker(new SightFit()::fit, false, threads);
+    PhotoWorker worker = new PhotoWorker(new SightFit()::fit, Optional.empty(), threads);
     FitDocument fit = worker.workAlone(task, new ResultFiles(folder, task.name()));
     report(task, fit);
     boolean failed = fit.status() == FitStatus.FAILED;

@@ -4,6 +4,7 @@ import java.io.IOException;
 import java.nio.file.Path;
 import java.util.concurrent.Callable;
 import picocli.CommandLine.Command;
+import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Option;
 import picocli.CommandLine.Parameters;
 import picocli.CommandLine.ParentCommand;
@@ -33,10 +34,13 @@ final class RectifyCommand implements Callable<Integer> {
       description = "Folder for the results.")
   private Path folder;
 
+  @Mixin private RedrawChoice redraw;
+
   @Override
   public Integer call() throws IOException {
     int threads = Runtime.getRuntime().availableProcessors();
-    Path picture = RectifyWorker.rectify(heldFile, photoFile, folder, threads);
+    Path picture =
+        new RectifyWorker(redraw.options(), threads).rectify(heldFile, photoFile, folder);
     parent.terminal().result(picture + " is drawn");
     return ExitStatus.DONE.code();
   }

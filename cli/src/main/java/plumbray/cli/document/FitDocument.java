@@ -33,6 +33,7 @@ import plumbray.imaging.fit.Warning;
  * @param sightLines what can be seen at each distance in use; empty where the fit failed
  * @param inputs what the fit was made from
  * @param outputs the files that were written with it
+ * @param redrawing how the photo was redrawn; empty where it was not
  * @param program version of the program that made it
  */
 public record FitDocument(
@@ -49,12 +50,14 @@ public record FitDocument(
     List<SightLine> sightLines,
     List<Digest> inputs,
     List<Digest> outputs,
+    Optional<String> redrawing,
     String program) {
 
   /** Copies the lists. */
   public FitDocument {
     Objects.requireNonNull(status, "status");
     Objects.requireNonNull(sight, "sight");
+    Objects.requireNonNull(redrawing, "redrawing");
     Objects.requireNonNull(program, "program");
     warnings = List.copyOf(warnings);
     alternatives = List.copyOf(alternatives);
@@ -111,6 +114,7 @@ public record FitDocument(
         sightLines,
         inputs,
         List.of(),
+        Optional.empty(),
         ProgramVersion.name());
   }
 
@@ -118,8 +122,9 @@ public record FitDocument(
    * The same with the files that were written with it.
    *
    * @param written the files
+   * @param way how the photo was redrawn; empty where it was not
    */
-  public FitDocument withOutputs(List<Digest> written) {
+  public FitDocument withOutputs(List<Digest> written, Optional<String> way) {
     return new FitDocument(
         status,
         error,
@@ -134,6 +139,7 @@ public record FitDocument(
         sightLines,
         inputs,
         written,
+        way,
         program);
   }
 

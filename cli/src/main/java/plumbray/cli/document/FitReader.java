@@ -39,6 +39,7 @@ public final class FitReader {
           "sight",
           "inputs",
           "outputs",
+          "redrawing",
           "program");
   private static final Limits COUNT = new Limits("a count", Unit.NONE, 0, Integer.MAX_VALUE);
   private static final Limits SPARE =
@@ -94,6 +95,7 @@ public final class FitReader {
         rows("sightLines", FitReader::sightLine),
         rows("inputs", FitReader::digest),
         rows("outputs", FitReader::digest),
+        root.find("redrawing").map(node -> node.text("how the photo was redrawn")),
         root.text("program", "version of the program"));
   }
 

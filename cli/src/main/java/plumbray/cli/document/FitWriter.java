@@ -66,6 +66,7 @@ public final class FitWriter {
     root.set("sight", SightWriter.write(fit.sight()));
     root.set("inputs", digests(fit.inputs()));
     root.set("outputs", digests(fit.outputs()));
+    fit.redrawing().ifPresent(way -> root.put("redrawing", way));
     return root.put("program", fit.program());
   }
 

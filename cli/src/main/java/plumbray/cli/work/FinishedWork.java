@@ -24,10 +24,12 @@ public final class FinishedWork {
    *
    * @param task the photo and its sight
    * @param files where its results would be
+   * @param way how the photo is to be redrawn
    * @return the fit; empty where the work must be done
    * @throws IOException when a file cannot be read
    */
-  public static Optional<FitDocument> find(PhotoTask task, ResultFiles files) throws IOException {
+  public static Optional<FitDocument> find(PhotoTask task, ResultFiles files, Optional<String> way)
+      throws IOException {
     if (!Files.isRegularFile(files.fit())) {
       return Optional.empty();
     }
@@ -36,7 +38,7 @@ public final class FinishedWork {
         fit.isPresent()
             && fit.get().program().equals(ProgramVersion.name())
             && fit.get().inputs().equals(task.inputs())
-            && isComplete(task, fit.get(), files)
+            && isComplete(task, fit.get(), way)
             && allWhole(fit.get().outputs(), files.folder());
     return same ? fit : Optional.empty();
   }
@@ -50,11 +52,11 @@ public final class FinishedWork {
     }
   }
 
-  /** Whether the photo was redrawn too; the fit alone may have been made before. */
-  private static boolean isComplete(PhotoTask task, FitDocument fit, ResultFiles files) {
-    String mask = files.mask().getFileName().toString();
-    boolean redrawn = fit.outputs().stream().anyMatch(output -> output.name().equals(mask));
-    return redrawn || fit.status() == FitStatus.FAILED || task.photo().isEmpty();
+  /** Whether the photo was redrawn too, and so; the fit alone may have been made before. */
+  private static boolean isComplete(PhotoTask task, FitDocument fit, Optional<String> way) {
+    return fit.redrawing().equals(way)
+        || fit.status() == FitStatus.FAILED
+        || task.photo().isEmpty();
   }
 
   private static boolean allWhole(List<Digest> outputs, Path folder) throws IOException {

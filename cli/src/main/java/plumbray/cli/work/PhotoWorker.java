@@ -24,6 +24,7 @@ import plumbray.imaging.photo.Photo;
 import plumbray.imaging.photo.PhotoException;
 import plumbray.imaging.photo.PhotoReader;
 import plumbray.imaging.rectify.Rectified;
+import plumbray.imaging.rectify.RedrawOptions;
 
 /**
  * Fits one photo and writes all of its results. The fit file comes last and lists the digests of
@@ -31,20 +32,36 @@ import plumbray.imaging.rectify.Rectified;
  */
 public final class PhotoWorker {
   private final Fitting fitting;
-  private final boolean redraw;
+  private final Optional<RedrawOptions> redraw;
   private final int threads;
 
   /**
    * Creates a worker, which may be used by several threads.
    *
    * @param fitting what fits
-   * @param redraw whether to redraw the photo too
+   * @param redraw how to redraw the photo too; empty to leave it alone
    * @param threads how many threads one photo may use
    */
-  public PhotoWorker(Fitting fitting, boolean redraw, int threads) {
+  public PhotoWorker(Fitting fitting, Optional<RedrawOptions> redraw, int threads) {
     this.fitting = fitting;
     this.redraw = redraw;
     this.threads = threads;
+  }
+
+  /**
+   * The fit of a photo whose results are all there and would come out the same again.
+   *
+   * @param task the photo and its sight
+   * @param files where its results would be
+   * @return the fit; empty where the work must be done
+   * @throws IOException when a file cannot be read
+   */
+  public Optional<FitDocument> finished(PhotoTask task, ResultFiles files) throws IOException {
+    return FinishedWork.find(task, files, way());
+  }
+
+  private Optional<String> way() {
+    return redraw.map(RedrawOptions::label);
   }
 
   /**
@@ -123,7 +140,7 @@ public final class PhotoWorker {
     writePage(fitted, Optional.empty(), files);
     FitDocument fit =
         FitDocument.failed(fitted.result(), fitted.inputs())
-            .withOutputs(digests(List.of(files.page())));
+            .withOutputs(digests(List.of(files.page())), Optional.empty());
     WholeFile.write(files.fit(), FitWriter.text(fit));
     return fit;
   }
@@ -134,12 +151,16 @@ public final class PhotoWorker {
     WholeFile.write(files.mapping(), MappingCsv.text(MappingRow.of(optics, result.estimates())));
     List<Path> outputs = new ArrayList<>(List.of(files.mapping(), files.page()));
     Optional<Rectified> redrawn =
-        fitted.photo().filter(p -> redraw).map(new Redrawing(optics, threads)::redraw);
+        fitted
+            .photo()
+            .flatMap(p -> redraw.map(way -> new Redrawing(optics, way, threads).redraw(p)));
     if (redrawn.isPresent()) {
       outputs.addAll(Redrawing.write(redrawn.get(), fitted.task().photo().get(), files));
     }
     writePage(fitted, redrawn, files);
-    FitDocument fit = FitDocument.of(result, optics, fitted.inputs()).withOutputs(digests(outputs));
+    FitDocument fit =
+        FitDocument.of(result, optics, fitted.inputs())
+            .withOutputs(digests(outputs), redrawn.isPresent() ? way() : Optional.empty());
     WholeFile.write(files.fit(), FitWriter.text(fit));
     return fit;
   }

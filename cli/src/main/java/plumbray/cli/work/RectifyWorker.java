@@ -15,10 +15,23 @@ import plumbray.imaging.photo.Photo;
 import plumbray.imaging.photo.PhotoException;
 import plumbray.imaging.photo.PhotoReader;
 import plumbray.imaging.rectify.Rectified;
+import plumbray.imaging.rectify.RedrawOptions;
 
 /** Redraws a photo with a sight of which all is known. */
 public final class RectifyWorker {
-  private RectifyWorker() {}
+  private final RedrawOptions options;
+  private final int threads;
+
+  /**
+   * Creates a worker.
+   *
+   * @param options how to redraw photos
+   * @param threads how many threads to use
+   */
+  public RectifyWorker(RedrawOptions options, int threads) {
+    this.options = options;
+    this.threads = threads;
+  }
 
   /**
    * Writes the redrawn photo, its mask and the mapping.
@@ -26,18 +39,16 @@ public final class RectifyWorker {
    * @param heldFile a fit, or a sight file whose quantities are all held
    * @param photoFile the photo
    * @param folder where the results go
-   * @param threads how many threads to use
    * @return the redrawn photo's file
    * @throws IOException when a file cannot be written
    */
-  public static Path rectify(Path heldFile, Path photoFile, Path folder, int threads)
-      throws IOException {
+  public Path rectify(Path heldFile, Path photoFile, Path folder) throws IOException {
     HeldSight held = HeldSight.read(heldFile);
     SightOptics optics = Tracing.optics(heldFile, held.sight(), held.estimates().names());
     ResultFiles files = new ResultFiles(folder, BatchPhoto.resultName(photoFile));
     Photo photo = photo(held, photoFile);
     WholeFile.makeFolder(folder);
-    Rectified rectified = new Redrawing(optics, threads).redraw(photo);
+    Rectified rectified = new Redrawing(optics, options, threads).redraw(photo);
     List<Path> written = Redrawing.write(rectified, photoFile, files);
     WholeFile.write(files.mapping(), MappingCsv.text(MappingRow.of(optics, held.estimates())));
     return written.get(0);

@@ -14,6 +14,7 @@ import plumbray.imaging.photo.PhotoWriter;
 import plumbray.imaging.rectify.Rectified;
 import plumbray.imaging.rectify.Rectifier;
 import plumbray.imaging.rectify.RectifyMap;
+import plumbray.imaging.rectify.RedrawOptions;
 
 /** Redraws a photo and writes it with its mask. */
 final class Redrawing {
@@ -21,10 +22,12 @@ final class Redrawing {
   private static final int COLOURS = 3;
 
   private final SightOptics optics;
+  private final RedrawOptions options;
   private final int threads;
 
-  Redrawing(SightOptics optics, int threads) {
+  Redrawing(SightOptics optics, RedrawOptions options, int threads) {
     this.optics = optics;
+    this.options = options;
     this.threads = threads;
   }
 
@@ -34,7 +37,7 @@ final class Redrawing {
     boolean colours =
         photo.shape().lightChannels() == COLOURS
             && sight.air().channelWavelengthsM().size() == COLOURS;
-    return colours ? byColours(photo) : Rectifier.rectify(photo, map(optics), threads);
+    return colours ? byColours(photo) : Rectifier.rectify(photo, map(optics), options, threads);
   }
 
   /**
@@ -62,12 +65,14 @@ final class Redrawing {
 
   /** Each colour through the air as it is for its own wavelength; the mask is that of green. */
   private Rectified byColours(Photo photo) {
-    Rectified green = Rectifier.rectify(photo, map(GREEN), threads);
+    Rectified green = Rectifier.rectify(photo, map(GREEN), options, threads);
     PhotoBuilder picture = new PhotoBuilder(photo.shape()).metadata(green.picture().metadata());
     for (int channel = 0; channel < photo.channels(); channel++) {
       boolean other = channel != GREEN && channel < COLOURS;
       Photo source =
-          other ? Rectifier.rectify(photo, map(channel), threads).picture() : green.picture();
+          other
+              ? Rectifier.rectify(photo, map(channel), options, threads).picture()
+              : green.picture();
       copy(source, picture, channel);
     }
     return new Rectified(picture.build(), green.mask());

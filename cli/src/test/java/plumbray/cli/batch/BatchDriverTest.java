@@ -32,6 +32,8 @@ import plumbray.imaging.photo.PhotoBuilder;
 import plumbray.imaging.photo.PhotoException;
 import plumbray.imaging.photo.PhotoShape;
 import plumbray.imaging.photo.PhotoWriter;
+import plumbray.imaging.rectify.Interpolation;
+import plumbray.imaging.rectify.RedrawOptions;
 
 /**
  * Small invented photos and a fit that finds what the sight says already: what is tested is the
@@ -101,7 +103,7 @@ class BatchDriverTest {
 
   private List<PhotoOutcome> run(Fitting fitting, int jobs, Path folder, List<PhotoTask> tasks)
       throws IOException {
-    PhotoWorker worker = new PhotoWorker(fitting, true, 1);
+    PhotoWorker worker = new PhotoWorker(fitting, Optional.of(RedrawOptions.standard()), 1);
     return new BatchDriver(worker, folder, jobs, (outcome, finished, total) -> {})
         .run("day", List.of(), tasks);
   }
@@ -223,9 +225,21 @@ class BatchDriverTest {
   @Test
   void progressCountsEveryPhotoOnce() throws IOException {
     List<Integer> counts = new ArrayList<>();
-    PhotoWorker worker = new PhotoWorker(BatchDriverTest::agreeing, true, 1);
+    PhotoWorker worker =
+        new PhotoWorker(BatchDriverTest::agreeing, Optional.of(RedrawOptions.standard()), 1);
     new BatchDriver(worker, out, 2, (outcome, finished, total) -> counts.add(finished))
         .run("day", List.of(), tasks("{\"file\": \"p*.png\"}"));
     assertThat(counts).containsExactly(1, 2, 3, 4);
+  }
+
+  @Test
+  void aPhotoIsRedrawnAgainWhereItIsToBeDrawnOtherwise() throws IOException {
+    List<PhotoTask> tasks = tasks("{\"file\": \"p0.png\"}");
+    run(tasks);
+    RedrawOptions sharper = new RedrawOptions(Interpolation.LANCZOS, false);
+    PhotoWorker worker = new PhotoWorker(BatchDriverTest::agreeing, Optional.of(sharper), 1);
+    BatchDriver driver = new BatchDriver(worker, out, 1, (outcome, finished, total) -> {});
+    assertThat(driver.run("day", List.of(), tasks).get(0).kept()).isFalse();
+    assertThat(driver.run("day", List.of(), tasks).get(0).kept()).isTrue();
   }
 }

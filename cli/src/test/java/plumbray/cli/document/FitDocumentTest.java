@@ -70,7 +70,7 @@ class FitDocumentTest {
             List.of(),
             0.25);
     return FitDocument.of(result, SightOptics.of(held, estimates.names()), INPUTS)
-        .withOutputs(List.of(Digest.of("a.mask.png", "mask")));
+        .withOutputs(List.of(Digest.of("a.mask.png", "mask")), Optional.of("cubic"));
   }
 
   private static FitDocument read(String text) {

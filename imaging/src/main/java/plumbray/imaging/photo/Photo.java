@@ -59,15 +59,20 @@ public final class Photo {
 
   /** Copies a row of samples, as encoded, to the start of {@code into}. */
   public void row(int y, float[] into) {
+    row(y, into, 0);
+  }
+
+  /** Copies a row of samples, as encoded, to {@code into} from {@code at} on. */
+  public void row(int y, float[] into, int at) {
     int start = index(0, y);
     int count = shape.rowSamples();
     if (bytes != null) {
       for (int i = 0; i < count; i++) {
-        into[i] = bytes[start + i] & 0xff;
+        into[at + i] = bytes[start + i] & 0xff;
       }
     } else {
       for (int i = 0; i < count; i++) {
-        into[i] = shorts[start + i] & 0xffff;
+        into[at + i] = shorts[start + i] & 0xffff;
       }
     }
   }

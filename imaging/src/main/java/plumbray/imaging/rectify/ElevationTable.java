@@ -33,6 +33,9 @@ final class ElevationTable {
 
     double apparentRad;
 
+    /** True elevation at the region's distance on the axis. */
+    double onAxisRad;
+
     /** Source pixels that one output pixel is high. */
     double stretch;
   }
@@ -75,6 +78,7 @@ final class ElevationTable {
    */
   void look(double trueRad, double fartherShare, Answer answer) {
     double onAxisRad = trueRad - fartherShare * pieces[index(trueRad)].lagRad(trueRad);
+    answer.onAxisRad = onAxisRad;
     answer.piece = index(onAxisRad);
     TablePiece piece = pieces[answer.piece];
     answer.code = piece.code();

@@ -153,6 +153,11 @@ public final class RectifyMap {
       return place;
     }
 
+    /** True elevation on the axis at which the table answered, rad. */
+    double onAxisRad() {
+      return answer.onAxisRad;
+    }
+
     /** Starts a stretch of pixels, after which {@link #isSteady} is asked. */
     void startStretch() {
       tested.clear();

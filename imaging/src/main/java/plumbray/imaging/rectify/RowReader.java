@@ -1,31 +1,37 @@
 package plumbray.imaging.rectify;
 
 /**
- * Looks whole rows up. Within one piece of one region the map bends little over a few dozen
- * columns: it is then looked up at a few columns and continued by the parabola through them.
+ * Looks whole rows up. Within one piece of one region the map bends little: it is looked up at a
+ * few columns and continued by the parabola through them. Where that does not hold over a whole row
+ * it is tried on halves of it, down to a few dozen columns, and those are looked up one by one.
  */
 final class RowReader {
-  /** Columns handled at once. Fixed places, so that how rows are shared out changes nothing. */
+  /** Fewest columns that are looked up at once. */
   static final int TILE = 64;
 
   /** Below this many columns, looking each one up is as quick. */
   private static final int SHORTEST = 8;
 
   /** How well the parabola must foretell the map at a further column, px. */
-  private static final double FORETOLD_PX = 5e-4;
+  private static final double FORETOLD_PX = 2e-4;
 
   /** How well it must foretell how many source rows make a pixel. */
   private static final double FORETOLD_STRETCH = 1e-2;
 
   private final RectifyMap.Cursor cursor;
-  private final RowMap row;
+  private final int width;
+  private final RowSpans spans = new RowSpans();
 
-  /** Columns looked up in a tile, and what was found there. */
-  private final Node[] nodes = {new Node(), new Node(), new Node(), new Node()};
+  /** The ends and the middle, which the parabola goes through, and the places it is checked at. */
+  private final Node[] nodes = {
+    new Node(), new Node(), new Node(), new Node(), new Node(), new Node()
+  };
+
+  private final Span.Parabola elevation = new Span.Parabola();
 
   RowReader(RectifyMap map) {
     this.cursor = map.cursor();
-    this.row = new RowMap(map.widthPx());
+    this.width = map.widthPx();
   }
 
   private static final class Node {
@@ -35,28 +41,39 @@ final class RowReader {
     double u;
     double v;
     double stretch;
+    double onAxisRad;
   }
 
   /** The map of output row y; overwritten by the next call. */
-  RowMap read(int y) {
-    for (int from = 0; from < row.width(); from += TILE) {
-      int to = Math.min(row.width(), from + TILE);
-      if (!foretold(from, to - 1, y)) {
-        for (int x = from; x < to; x++) {
-          lookUp(x, y);
-        }
-      }
+  RowSpans read(int y) {
+    spans.clear();
+    read(0, width, y);
+    return spans;
+  }
+
+  private void read(int from, int to, int y) {
+    if (foretold(from, to - 1, y)) {
+      return;
     }
-    return row;
+    if (to - from > TILE) {
+      int tiles = (to - from + TILE - 1) / TILE;
+      int middle = from + tiles / 2 * TILE;
+      read(from, middle, y);
+      read(middle, to, y);
+      return;
+    }
+    for (int x = from; x < to; x++) {
+      lookUp(x, y);
+    }
   }
 
   private void lookUp(int x, int y) {
     cursor.look(x, y);
-    row.codes[x] = cursor.code();
-    if (cursor.isShown()) {
-      row.u[x] = cursor.sourceU();
-      row.v[x] = cursor.sourceV();
-      row.stretch[x] = cursor.stretch();
+    Span span = spans.add(x, x + 1, cursor.code());
+    if (span.isShown()) {
+      span.u.constant(cursor.sourceU() - x);
+      span.v.constant(cursor.sourceV() - y);
+      span.stretch.constant(cursor.stretch());
     }
   }
 
@@ -70,17 +87,15 @@ final class RowReader {
     look(nodes[1], middle, y);
     look(nodes[2], last, y);
     look(nodes[3], (first + middle) / 2, y);
+    look(nodes[4], (middle + last) / 2, y);
+    look(nodes[5], turningColumn(first, middle, last), y);
     Node a = nodes[0];
     for (Node node : nodes) {
       if (node.place != a.place || node.code != a.code) {
         return false;
       }
     }
-    if (!cursor.isSteady()) {
-      return false;
-    }
-    boolean shown = a.code == MaskPlane.UPRIGHT || a.code == MaskPlane.INVERTED;
-    return shown ? parabola(first, last, y) : fill(first, last, a.code);
+    return cursor.isSteady() && continued(first, last);
   }
 
   private void look(Node node, int x, int y) {
@@ -88,50 +103,52 @@ final class RowReader {
     node.x = x;
     node.place = cursor.place();
     node.code = cursor.code();
+    node.onAxisRad = cursor.onAxisRad();
     // relative to the pixel, so that a map that moves nothing is continued without rounding
     node.u = cursor.sourceU() - x;
     node.v = cursor.sourceV() - y;
     node.stretch = cursor.stretch();
   }
 
-  private boolean fill(int first, int last, int code) {
-    for (int x = first; x <= last; x++) {
-      row.codes[x] = code;
+  /** Where along the row the elevation looked up is greatest or least: it may be beyond an edge. */
+  private int turningColumn(int first, int middle, int last) {
+    double[] seen = {nodes[0].onAxisRad, nodes[1].onAxisRad, nodes[2].onAxisRad};
+    elevation.through(seen, middle - first, last - first);
+    double turn = -elevation.slope / (2 * elevation.bend);
+    boolean inside = turn > 0 && turn < last - first;
+    return inside ? first + (int) Math.round(turn) : middle;
+  }
+
+  private boolean continued(int first, int last) {
+    Span span = spans.add(first, last + 1, nodes[0].code);
+    if (!span.isShown()) {
+      return true;
+    }
+    double middle = nodes[1].x - first;
+    double end = last - first;
+    span.u.through(new double[] {nodes[0].u, nodes[1].u, nodes[2].u}, middle, end);
+    span.v.through(new double[] {nodes[0].v, nodes[1].v, nodes[2].v}, middle, end);
+    span.stretch.through(
+        new double[] {nodes[0].stretch, nodes[1].stretch, nodes[2].stretch}, middle, end);
+    if (!isFollowed(span)) {
+      spans.dropLast();
+      return false;
     }
     return true;
   }
 
-  private boolean parabola(int first, int last, int y) {
-    Node check = nodes[3];
-    double t = along(check.x);
-    boolean good =
-        Math.abs(parabola(t, nodes[0].u, nodes[1].u, nodes[2].u) - check.u) < FORETOLD_PX
-            && Math.abs(parabola(t, nodes[0].v, nodes[1].v, nodes[2].v) - check.v) < FORETOLD_PX
-            && Math.abs(stretch(t) - check.stretch) < FORETOLD_STRETCH * check.stretch;
-    for (int x = first; x <= last && good; x++) {
-      double s = along(x);
-      row.codes[x] = nodes[0].code;
-      row.u[x] = x + parabola(s, nodes[0].u, nodes[1].u, nodes[2].u);
-      row.v[x] = y + parabola(s, nodes[0].v, nodes[1].v, nodes[2].v);
-      row.stretch[x] = stretch(s);
+  private boolean isFollowed(Span span) {
+    for (int i = 3; i < nodes.length; i++) {
+      Node check = nodes[i];
+      double t = check.x - span.from;
+      boolean good =
+          Math.abs(span.u.at(t) - check.u) < FORETOLD_PX
+              && Math.abs(span.v.at(t) - check.v) < FORETOLD_PX
+              && Math.abs(span.stretch.at(t) - check.stretch) < FORETOLD_STRETCH * check.stretch;
+      if (!good) {
+        return false;
+      }
     }
-    return good;
-  }
-
-  private double stretch(double t) {
-    return parabola(t, nodes[0].stretch, nodes[1].stretch, nodes[2].stretch);
-  }
-
-  /** Place between the first (0) and last (1) node. */
-  private double along(int x) {
-    return (double) (x - nodes[0].x) / (nodes[2].x - nodes[0].x);
-  }
-
-  /** Newton's form through (0, a), (middle, b), (1, c). */
-  private double parabola(double t, double a, double b, double c) {
-    double m = along(nodes[1].x);
-    double slope = (b - a) / m;
-    double bend = (c - a - slope) / (1 - m);
-    return a + t * (slope + (t - m) * bend);
+    return true;
   }
 }

@@ -3,6 +3,7 @@ package plumbray.imaging.rectify;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import java.util.Optional;
 import java.util.Random;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -15,11 +16,15 @@ class ResamplerTest {
   /** Results are handed on as floats: 24 bits of 65535. */
   private static final double FLOAT_LSB = 0.01;
 
+  private static Resampler resampler(Photo photo) {
+    return new Resampler(new FloatRows(photo, Optional.empty()), new CubicKernel(), photo.shape());
+  }
+
   @ParameterizedTest
   @CsvSource({"1,8,1", "3,16,1", "3,8,2.7", "1,16,9.5"})
   void agreesWithTheFormulaWrittenOut(int channels, int bits, double stretch) {
     Photo photo = SampleImages.noise(new PhotoShape(40, 50, channels, bits), 8);
-    Resampler resampler = new Resampler(photo);
+    Resampler resampler = resampler(photo);
     Random random = new Random(3);
     float[] out = new float[channels];
     for (int i = 0; i < 2000; i++) {
@@ -66,7 +71,7 @@ class ResamplerTest {
         builder.sample(x, y, 0, 1000 + 7 * x * x + 11 * y * y - 3 * x * y);
       }
     }
-    Resampler resampler = new Resampler(builder.build());
+    Resampler resampler = resampler(builder.build());
     float[] out = new float[1];
     for (double u = 3; u < 16; u += 0.37) {
       for (double v = 3; v < 16; v += 0.41) {
@@ -85,7 +90,7 @@ class ResamplerTest {
         builder.sample(x, y, 0, 200);
       }
     }
-    Resampler resampler = new Resampler(builder.build());
+    Resampler resampler = resampler(builder.build());
     float[] out = new float[1];
     for (double v = 100; v < 300; v += 1.3) {
       resampler.sample(4, v, 8, out, 0);
@@ -102,7 +107,7 @@ class ResamplerTest {
         builder.sample(x, y, 0, x < 4 ? 90 : 255).sample(x, y, 1, x < 4 ? 255 : 0);
       }
     }
-    Resampler resampler = new Resampler(builder.build());
+    Resampler resampler = resampler(builder.build());
     float[] out = new float[2];
     resampler.sample(3.5, 4, 1, out, 0);
     assertThat((double) out[0]).isCloseTo(90, within(FLOAT_LSB));

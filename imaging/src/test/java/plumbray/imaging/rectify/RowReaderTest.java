@@ -33,16 +33,24 @@ class RowReaderTest {
     RectifyMap.Cursor cursor = map.cursor();
     int shown = 0;
     for (int y = 0; y < 300; y++) {
-      RowMap row = reader.read(y);
-      for (int x = 0; x < 500; x++) {
-        cursor.look(x, y);
-        assertThat(row.codes[x]).as("(%d, %d)", x, y).isEqualTo(cursor.code());
-        if (cursor.isShown()) {
-          shown++;
-          assertThat(row.u[x]).isCloseTo(cursor.sourceU(), within(CONTINUED_PX));
-          assertThat(row.v[x]).isCloseTo(cursor.sourceV(), within(CONTINUED_PX));
+      RowSpans row = reader.read(y);
+      int next = 0;
+      for (int i = 0; i < row.count(); i++) {
+        Span span = row.get(i);
+        assertThat(span.from).isEqualTo(next);
+        next = span.to;
+        for (int x = span.from; x < span.to; x++) {
+          cursor.look(x, y);
+          assertThat(span.code).as("(%d, %d)", x, y).isEqualTo(cursor.code());
+          if (cursor.isShown()) {
+            shown++;
+            double t = x - span.from;
+            assertThat(x + span.u.at(t)).isCloseTo(cursor.sourceU(), within(CONTINUED_PX));
+            assertThat(y + span.v.at(t)).isCloseTo(cursor.sourceV(), within(CONTINUED_PX));
+          }
         }
       }
+      assertThat(next).isEqualTo(500);
     }
     assertThat(shown).isBetween(50_000, 149_000);
   }

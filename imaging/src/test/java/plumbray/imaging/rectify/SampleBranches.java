@@ -47,6 +47,48 @@ final class SampleBranches {
     };
   }
 
+  /** Straight rays, all seen higher by {@code byRad}. */
+  static ApparentBranch shifted(
+      StraightRay straight, double distanceM, double byRad, double lowestRad, double highestRad) {
+    ApparentBranch plain = constantRefraction(straight, distanceM, lowestRad, highestRad);
+    return new ApparentBranch() {
+      @Override
+      public boolean upright() {
+        return true;
+      }
+
+      @Override
+      public double lowestRad() {
+        return lowestRad + byRad;
+      }
+
+      @Override
+      public double highestRad() {
+        return highestRad + byRad;
+      }
+
+      @Override
+      public double lowestElevationM() {
+        return plain.lowestElevationM();
+      }
+
+      @Override
+      public double highestElevationM() {
+        return plain.highestElevationM();
+      }
+
+      @Override
+      public double apparentRad(double elevationM) {
+        return plain.apparentRad(elevationM) + byRad;
+      }
+
+      @Override
+      public double pathSlope(double apparentRad) {
+        return plain.pathSlope(apparentRad - byRad);
+      }
+    };
+  }
+
   /**
    * A parabola: elevation y = lowestM + (angle from the vanishing line)^2 * bendM, upright above
    * the line, inverted below, down or up to {@code endRad}.
