@@ -2,9 +2,12 @@ package plumbray.cli.command;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
 import java.util.OptionalDouble;
 import plumbray.cli.document.FitDocument;
 import plumbray.cli.document.Numbers;
+import plumbray.cli.report.ZoneWords;
+import plumbray.imaging.diagnosis.StretchZones;
 import plumbray.imaging.fit.SightLine;
 
 /** Says results shortly, a line each. */
@@ -29,6 +32,19 @@ final class ResultLines {
 
   private static void add(List<String> parts, String text, OptionalDouble value, int decimals) {
     value.ifPresent(number -> parts.add(text.formatted(Numbers.fixed(number, decimals))));
+  }
+
+  /** At which heights the air is steeper than autoconvective, a line a stretch of the path. */
+  static List<String> steepAir(List<StretchZones> stretches) {
+    return stretches.stream()
+        .map(
+            stretch ->
+                (stretches.size() == 1
+                        ? "air"
+                        : ZoneWords.from(stretch.fromM()).toLowerCase(Locale.ROOT) + ": air")
+                    + " steeper than autoconvective "
+                    + ZoneWords.of(stretch.zones()))
+        .toList();
   }
 
   /** What was estimated, a line each, by the sight file's names and units. */

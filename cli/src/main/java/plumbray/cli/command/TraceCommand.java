@@ -16,7 +16,18 @@ import plumbray.cli.work.TraceWorker;
     name = "trace",
     description = {
       "Says what the air does to this sight: mapping, table, picture; no photo is needed.",
-      "Quantities that are to be estimated count at their values."
+      "Quantities that are to be estimated count at their values.",
+      "",
+      "Writes, named after the sight file:",
+      "  NAME.html             the page to read",
+      "  NAME.mapping.csv      each traced ray: where seen, what height it reaches",
+      "  NAME.temperature.csv  temperature against height",
+      "  NAME.felt.csv         heights (m) of the air that shifts round heights",
+      "  NAME.bends.csv        where (m) their rays are concave, where convex",
+      "  NAME.rays.csv         their ways, with the local refraction coefficient",
+      "  NAME.steep.csv        heights (m) of air steeper than autoconvective",
+      "  NAME.channels.csv     what the colours show (px), given their wavelengths",
+      ""
     },
     sortOptions = false)
 final class TraceCommand implements Callable<Integer> {
@@ -35,8 +46,9 @@ final class TraceCommand implements Callable<Integer> {
   @Override
   public Integer call() throws IOException {
     ResultFiles files = new ResultFiles(folder, BatchPhoto.resultName(sightFile));
-    TraceWorker.trace(sightFile, files)
-        .forEach(line -> parent.terminal().result(ResultLines.sightLine(line)));
+    TraceWorker.Traced traced = TraceWorker.trace(sightFile, files);
+    traced.lines().forEach(line -> parent.terminal().result(ResultLines.sightLine(line)));
+    ResultLines.steepAir(traced.steep()).forEach(line -> parent.terminal().result(line));
     return ExitStatus.DONE.code();
   }
 }

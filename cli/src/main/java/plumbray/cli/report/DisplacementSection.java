@@ -5,6 +5,7 @@ import java.util.List;
 import java.util.stream.DoubleStream;
 import plumbray.cli.report.markup.Markup;
 import plumbray.cli.report.markup.NumberText;
+import plumbray.imaging.diagnosis.TargetHeights;
 import plumbray.imaging.fit.Estimates;
 import plumbray.imaging.fit.SightOptics;
 import plumbray.imaging.measure.HeightReader;
@@ -57,7 +58,7 @@ final class DisplacementSection implements Section {
                   "Height (m)", "Seen", "Row (px)", "Displacement (mm)", "\u03c3 of a height (mm)")
               : new Table("Height (m)", "Seen", "Row (px)", "Displacement (mm)");
       table.words(1);
-      double top = MappingSection.topM(optics.sight(), mapping.distanceM());
+      double top = TargetHeights.topM(optics.sight(), mapping);
       DoubleStream.of(HEIGHTS_M).filter(h -> h <= top).forEach(h -> addRows(table, mapping, h));
       table.addTo(page);
       page.close();

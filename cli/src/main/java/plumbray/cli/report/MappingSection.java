@@ -6,9 +6,6 @@ import java.util.List;
 import java.util.OptionalDouble;
 import java.util.Set;
 import java.util.stream.DoubleStream;
-import plumbray.calibration.sight.Reference;
-import plumbray.calibration.sight.Sight;
-import plumbray.calibration.sight.StaffTarget;
 import plumbray.cli.report.markup.Markup;
 import plumbray.cli.report.markup.NumberText;
 import plumbray.cli.report.plot.Axis;
@@ -19,6 +16,7 @@ import plumbray.cli.report.plot.Line;
 import plumbray.cli.report.plot.Plot;
 import plumbray.cli.report.plot.Stroke;
 import plumbray.cli.report.plot.Stroke.Dash;
+import plumbray.imaging.diagnosis.TargetHeights;
 import plumbray.imaging.fit.SightOptics;
 import plumbray.raymodel.mapping.Branch;
 import plumbray.raymodel.mapping.Sense;
@@ -34,9 +32,6 @@ final class MappingSection implements Section {
   private static final double HEIGHT_PX = 400;
   private static final double SMALL_WIDTH_PX = 430;
   private static final double SMALL_HEIGHT_PX = 300;
-
-  /** Heights of interest reach so many times as high as the camera. */
-  private static final double REACH = 2.0;
 
   private final SightOptics optics;
 
@@ -55,7 +50,10 @@ final class MappingSection implements Section {
             + " nothing is seen. Beside the large plots, on its scale of elevations, stands a striped"
             + " staff: at the left as it is, at the right as the camera sees it.");
     List<SightMapping> all = optics.mappings();
-    List<SightMapping> large = all.stream().filter(m -> all.size() <= 2 || holds(m)).toList();
+    List<SightMapping> large =
+        all.stream()
+            .filter(m -> all.size() <= 2 || ShownDistances.holdsReference(optics, m))
+            .toList();
     List<SightMapping> small = all.stream().filter(m -> !large.contains(m)).toList();
     large.forEach(mapping -> addLarge(page, mapping));
     page.open("div", "class", "pair");
@@ -63,14 +61,8 @@ final class MappingSection implements Section {
     page.close().close();
   }
 
-  /** Whether a reference stands at the distance. */
-  private boolean holds(SightMapping mapping) {
-    return optics.sight().references().stream()
-        .anyMatch(reference -> reference.distanceM() == mapping.distanceM());
-  }
-
   private void addLarge(Markup page, SightMapping mapping) {
-    double top = topM(optics.sight(), mapping.distanceM());
+    double top = TargetHeights.topM(optics.sight(), mapping);
     List<Line> lines = lines(mapping, top);
     Axis y = apparentAxis(lines);
     page.open("div", "class", "mapping");
@@ -84,7 +76,7 @@ final class MappingSection implements Section {
   }
 
   private void addSmall(Markup page, SightMapping mapping) {
-    double top = topM(optics.sight(), mapping.distanceM());
+    double top = TargetHeights.topM(optics.sight(), mapping);
     List<Line> lines = lines(mapping, top);
     page.open("div", "class", "mapping");
     page.leaf("h3", "At " + Metres.text(mapping.distanceM()));
@@ -100,18 +92,6 @@ final class MappingSection implements Section {
     return Axis.around(
         "Apparent elevation (mrad)",
         lines.stream().flatMapToDouble(line -> DoubleStream.of(line.ys())));
-  }
-
-  /** Greatest height above the ground that is of interest at a distance, m. */
-  static double topM(Sight sight, double distanceM) {
-    double top = REACH * sight.camera().heightM().value();
-    for (Reference reference : sight.references()) {
-      if (reference.distanceM() == distanceM && reference.kind() instanceof StaffTarget staff) {
-        double[] edges = staff.edgesM();
-        top = Math.max(top, 1.05 * (edges[edges.length - 1] + reference.footM().value()));
-      }
-    }
-    return top;
   }
 
   private List<Line> lines(SightMapping mapping, double topM) {

@@ -53,6 +53,31 @@ public record ResultFiles(Path folder, String name) {
     return of(".temperature.csv");
   }
 
+  /** What the colour channels see. */
+  public Path channels() {
+    return of(".channels.csv");
+  }
+
+  /** The heights that the light felt. */
+  public Path felt() {
+    return of(".felt.csv");
+  }
+
+  /** Where lines of sight are concave and convex. */
+  public Path bends() {
+    return of(".bends.csv");
+  }
+
+  /** The ways of the rays. */
+  public Path rays() {
+    return of(".rays.csv");
+  }
+
+  /** Heights at which the air is steeper than autoconvective. */
+  public Path steep() {
+    return of(".steep.csv");
+  }
+
   /** The page to read. */
   public Path page() {
     return of(".html");

@@ -25,6 +25,7 @@ import plumbray.imaging.fit.FitResult;
 import plumbray.imaging.fit.FitStatus;
 import plumbray.imaging.fit.SightOptics;
 import plumbray.imaging.fit.Warning;
+import plumbray.raymodel.diagnosis.HeightZone;
 import plumbray.raymodel.mapping.Branch;
 import plumbray.raymodel.mapping.Sense;
 
@@ -58,9 +59,14 @@ class PagesTest {
     return FitDocument.of(result, SightOptics.of(result.sight()), List.of());
   }
 
+  private static String planned(Sight sight, Estimates known) {
+    SightFindings findings = SightFindings.of(SightOptics.of(sight, known.names()), known);
+    return new SightReport("plan", findings, ReportSamples.provenance()).html();
+  }
+
   private static String sightPage() {
     Sight sight = ReportSamples.asked(15.0);
-    return new SightReport("plan", sight, Estimates.none(), ReportSamples.provenance()).html();
+    return planned(sight, Estimates.none());
   }
 
   private static String failedPage() {
@@ -172,7 +178,7 @@ class PagesTest {
             List.of("camera.pitchRad"),
             new double[] {parameters.values()[pitch]},
             new double[][] {{4e-6}});
-    String page = new SightReport("plan", sight, known, ReportSamples.provenance()).html();
+    String page = planned(sight, known);
     assertThat(page).contains("\u03c3 of a height (mm)");
     assertThat(sightPage()).doesNotContain("\u03c3 of a height (mm)");
   }
@@ -194,8 +200,7 @@ class PagesTest {
             one.references(),
             regions,
             0.13);
-    String page =
-        new SightReport("plan", many, Estimates.none(), ReportSamples.provenance()).html();
+    String page = planned(many, Estimates.none());
     List<String> titles = titles(WellFormed.parse(page));
     assertThat(titles)
         .contains(
@@ -204,6 +209,40 @@ class PagesTest {
             "Apparent elevation against height at 1500 m");
     assertThat(titles).containsOnlyOnce("A staff as it stands and as it is seen");
     assertThat(page).contains("rays of k = 0.13");
+  }
+
+  @Test
+  void aPlannedSightShowsTheWaysOfItsLight() {
+    assertThat(titles(WellFormed.parse(sightPage())))
+        .contains(
+            "Rays to 640 m",
+            "Magnification at 640 m",
+            "Heights felt at 640 m",
+            "Refraction coefficient along the way to 640 m",
+            "Refractive index less 1 (millionths) against height")
+        .doesNotContain("Colour fringes at 640 m");
+    assertThat(sightPage()).contains("to the inverted image", "vanishing line", "grazing");
+  }
+
+  /** Steep below h ln[E/(h (g/R_d - 0.0098))] with E = 15 K, h = 0.1 m, by hand: 0.873 m. */
+  @Test
+  void aPlannedSightSaysInWordsWhereTheAirIsSteep() {
+    assertThat(sightPage())
+        .containsPattern("The air is steeper than autoconvective below 0\\.87\\d m: there")
+        .containsPattern(
+            "The line of sight to 0\\.\\d+ m at 640 m is convex to the ground from \\d+ to \\d+ m");
+  }
+
+  @Test
+  void zonesOfHeightAreNamedByTheirBorders() {
+    HeightZone low = new HeightZone(0.0, 0.4213);
+    HeightZone layer = new HeightZone(2.0, 2.5);
+    HeightZone open = new HeightZone(7.0, Double.POSITIVE_INFINITY);
+    assertThat(ZoneWords.of(List.of())).isEqualTo("nowhere");
+    assertThat(ZoneWords.of(List.of(low, layer, open)))
+        .isEqualTo("below 0.421 m and from 2 m to 2.5 m and above 7 m");
+    assertThat(ZoneWords.of(List.of(new HeightZone(0.0, Double.POSITIVE_INFINITY))))
+        .isEqualTo("at all heights");
   }
 
   /** The straight-line mapping of the page must agree with the numbers behind it. */

@@ -34,12 +34,14 @@ public final class SightOptics {
   private final Sight sight;
   private final Camera camera;
   private final AirColumn column;
+  private final PathAir air;
   private final RayFan fan;
 
-  private SightOptics(Sight sight, Camera camera, AirColumn column, RayFan fan) {
+  private SightOptics(Sight sight, Camera camera, AirColumn column, PathAir air, RayFan fan) {
     this.sight = sight;
     this.camera = camera;
     this.column = column;
+    this.air = air;
     this.fan = fan;
   }
 
@@ -93,10 +95,9 @@ public final class SightOptics {
             targets.stream().mapToDouble(Double::doubleValue).toArray(),
             TOLERANCE_PX * camera.radPerPx(),
             !estimated.isEmpty());
-    RayFan fan =
-        RayFan.trace(
-            air(sight, estimated), sight.path().path(), request, RayTracer.DEFAULT_TOLERANCE_M);
-    return new SightOptics(sight, camera, column, fan);
+    PathAir air = air(sight, estimated);
+    RayFan fan = RayFan.trace(air, sight.path().path(), request, RayTracer.DEFAULT_TOLERANCE_M);
+    return new SightOptics(sight, camera, column, air, fan);
   }
 
   /**
@@ -128,7 +129,7 @@ public final class SightOptics {
   }
 
   /** Apparent elevations that the picture spans, with a margin, rad. */
-  static double[] elevationRange(Camera camera) {
+  public static double[] elevationRange(Camera camera) {
     double lowest = Double.POSITIVE_INFINITY;
     double highest = Double.NEGATIVE_INFINITY;
     double[] direction = new double[2];
@@ -186,6 +187,11 @@ public final class SightOptics {
   /** The air at the camera; for one thread at a time. */
   public AirColumn column() {
     return column;
+  }
+
+  /** The air along the path, tabulated; for one thread at a time. */
+  public PathAir air() {
+    return air;
   }
 
   /** The rays. */

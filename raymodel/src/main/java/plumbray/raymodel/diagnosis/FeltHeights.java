@@ -20,6 +20,9 @@ public final class FeltHeights {
 
   private static final int HALVINGS = 50;
 
+  /** Quantiles are searched to this, m. */
+  private static final double SEARCHED_M = 1e-7;
+
   private final double reachM;
   private final double[] distancesM;
   private final double[] heightsM;
@@ -95,7 +98,7 @@ public final class FeltHeights {
   public double quantileM(double share) {
     double low = lowestM;
     double high = highestM;
-    for (int i = 0; i < HALVINGS && high - low > 1e-9; i++) {
+    for (int i = 0; i < HALVINGS && high - low > SEARCHED_M; i++) {
       double mid = 0.5 * (low + high);
       if (shareBelow(mid) < share) {
         low = mid;

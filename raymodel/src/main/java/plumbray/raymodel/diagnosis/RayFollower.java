@@ -12,7 +12,7 @@ import plumbray.raymodel.ray.RayTracer;
 public final class RayFollower {
 
   /** Places along a ray, evenly spaced; bends of the ground and borders of the air come on top. */
-  private static final int PLACES = 320;
+  private static final int PLACES = 240;
 
   private final SightPath path;
   private final double cameraHeightM;

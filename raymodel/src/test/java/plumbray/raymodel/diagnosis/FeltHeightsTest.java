@@ -22,7 +22,7 @@ class FeltHeightsTest {
   private static final double REACH_M = 800.0;
   private static final double CAMERA_M = 2.0;
 
-  /** Heights are searched to 1e-9 m, and the tracer keeps 1e-9 m a step. */
+  /** Heights are searched to 1e-7 m, and the tracer keeps 1e-9 m a step. */
   private static final double SEARCHED_M = 1e-6;
 
   private static FeltHeights straight(double endM) {
@@ -70,7 +70,7 @@ class FeltHeightsTest {
 
   /**
    * Why the weight is D - s: the displacement of the end from a straight ray is the integral of (D
-   * - s) k/R, for rays a few milliradians steep to some 1e-5; the trapezoids over 320 places miss
+   * - s) k/R, for rays a few milliradians steep to some 1e-5; the trapezoids over 240 places miss
    * less than 1e-3.
    */
   @Test

@@ -42,9 +42,11 @@ public final class Plot {
     List<Tick> up = y.ticks((int) Math.max(3.0, heightPx / 45.0));
     double left =
         LABEL_PX + TICK_PX + up.stream().mapToDouble(t -> TextWidth.px(t.label())).max().orElse(0);
-    Legend legend = new Legend(marks, widthPx - left - RIGHT_PX);
+    double right =
+        across.stream().mapToDouble(t -> TextWidth.px(t.label()) / 2.0).reduce(RIGHT_PX, Math::max);
+    Legend legend = new Legend(marks, widthPx - left - right);
     double top = ABOVE_PX + legend.heightPx();
-    Frame frame = new Frame(x, y, widthPx - left - RIGHT_PX, heightPx - top - BELOW_PX);
+    Frame frame = new Frame(x, y, widthPx - left - right, heightPx - top - BELOW_PX);
     Markup svg = new Markup();
     svg.open(
         "svg",
