@@ -1,6 +1,7 @@
 package plumbray.raymodel.diagnosis;
 
 import plumbray.raymodel.path.SightPath;
+import plumbray.raymodel.ray.LocalAir;
 import plumbray.raymodel.ray.PathAir;
 
 /**
@@ -18,16 +19,12 @@ import plumbray.raymodel.ray.PathAir;
  */
 final class LocalBending {
 
-  private final PathAir air;
   private final SightPath path;
-  private final double[] out;
-  private final double[] along;
+  private final LocalAir air;
 
   LocalBending(PathAir air, SightPath path) {
-    this.air = air;
     this.path = path;
-    out = new double[3 + 2 * air.parameterCount()];
-    along = new double[3 + air.parameterCount()];
+    this.air = new LocalAir(air);
   }
 
   /**
@@ -38,12 +35,14 @@ final class LocalBending {
    * @param pathSlope dy/dx of the ray there
    */
   double coefficient(double distanceM, double elevationM, double pathSlope) {
-    double heightM = elevationM - path.ground().elevationM(distanceM);
-    air.evaluate(distanceM, heightM, out, along);
+    double groundM = path.ground().elevationM(distanceM);
+    double groundSlope = path.ground().slope(distanceM);
+    air.enter(distanceM, groundSlope, groundM - groundSlope * distanceM);
+    air.evaluate(distanceM, elevationM - groundM);
     double scale = 1.0 + elevationM / path.earthRadiusM();
     double tan = pathSlope / scale;
     double cos = 1.0 / Math.sqrt(1.0 + tan * tan);
-    double forward = (along[0] - path.ground().slope(distanceM) * out[1]) / scale;
-    return -path.earthRadiusM() * cos * (out[1] - tan * forward);
+    double forward = air.forwardPerM() / scale;
+    return -path.earthRadiusM() * cos * (air.upwardPerM() - tan * forward);
   }
 }

@@ -12,7 +12,7 @@ import java.util.Arrays;
  * distance or parameter of a logarithm, and those of ln n follow from those of ln n_0 with q = F
  * n_0/n and w = N F/n.
  */
-final class LocalAir {
+public final class LocalAir {
 
   private final PathAir pathAir;
   private final double[] lapse;
@@ -33,7 +33,8 @@ final class LocalAir {
   private double groundIntercept;
   private boolean lifted;
 
-  LocalAir(PathAir pathAir) {
+  /** The air along a path, before any piece of ground is entered. */
+  public LocalAir(PathAir pathAir) {
     this.pathAir = pathAir;
     lapse = pathAir.lapse();
     air = new double[3 + 2 * pathAir.parameterCount()];
@@ -41,7 +42,7 @@ final class LocalAir {
   }
 
   /** Ground y = intercept + slope x and the air just after {@code fromM} hold from here on. */
-  void enter(double fromM, double slope, double intercept) {
+  public void enter(double fromM, double slope, double intercept) {
     stratified = pathAir.stratifiedAfter(fromM);
     varying = pathAir.varyingAfter(fromM);
     groundSlope = slope;
@@ -55,8 +56,8 @@ final class LocalAir {
     return varying != null;
   }
 
-  /** Fills {@link #air} and {@link #along}. */
-  void evaluate(double distanceM, double heightM) {
+  /** Looks at a place: the distance along the level surface and the height above the ground, m. */
+  public void evaluate(double distanceM, double heightM) {
     if (varying == null) {
       stratified.evaluate(heightM, air);
     } else {
@@ -65,6 +66,16 @@ final class LocalAir {
     if (lifted) {
       lift(groundIntercept + groundSlope * distanceM);
     }
+  }
+
+  /** d ln n/dy of the place looked at, y the elevation, 1/m. */
+  public double upwardPerM() {
+    return air[1];
+  }
+
+  /** d ln n/dx of the place looked at, at fixed elevation, 1/m. */
+  public double forwardPerM() {
+    return along[0] - air[1] * groundSlope;
   }
 
   private void lift(double groundM) {

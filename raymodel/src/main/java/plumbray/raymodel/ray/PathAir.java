@@ -1,7 +1,6 @@
 package plumbray.raymodel.ray;
 
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.List;
 
 /**
@@ -89,20 +88,6 @@ public final class PathAir {
   /** How many parameters the index depends on. */
   public int parameterCount() {
     return parameterCount;
-  }
-
-  /**
-   * Evaluates the air at a place, as {@link VaryingMedium#evaluate} does. Not for use by several
-   * threads at once where the media are not.
-   */
-  public void evaluate(double distanceM, double heightM, double[] out, double[] along) {
-    Section section = sectionAfter(distanceM);
-    if (section.varying() == null) {
-      section.stratified().evaluate(heightM, out);
-      Arrays.fill(along, 0.0);
-    } else {
-      section.varying().evaluate(distanceM, heightM, out, along);
-    }
   }
 
   /** How the air thins with the elevation of the ground, as at the camera. */
