@@ -99,45 +99,6 @@ class CommandsTest {
   }
 
   @Test
-  void traceTellsWhatTheLightWentThrough() {
-    assertThat(run("trace", path("held.sight.json"), "--out", path("out"))).isZero();
-    assertThat(folder.resolve("out/held.felt.csv"))
-        .content()
-        .startsWith("distance_m,height_m,sense,apparent_elevation_mrad,row_px,lowest_ray_height_m,")
-        .containsPattern("(?m)^500,1,upright,");
-    assertThat(folder.resolve("out/held.bends.csv"))
-        .content()
-        .startsWith("distance_m,height_m,sense,from_m,to_m,curving\r\n")
-        .containsPattern("(?m)^500,1,upright,0.000,[0-9.]+,(concave|convex)$");
-    assertThat(folder.resolve("out/held.rays.csv"))
-        .content()
-        .containsPattern("(?m)^500,1,upright,500.000,");
-    assertThat(folder.resolve("out/held.steep.csv"))
-        .content()
-        .containsPattern(
-            "^stretch_from_m,lowest_height_m,highest_height_m\r\n0,0.000000,[0-9.]+\r\n$");
-    assertThat(folder.resolve("out/held.channels.csv")).doesNotExist();
-    assertThat(out.toString()).contains("air steeper than autoconvective below ");
-  }
-
-  @Test
-  void traceWritesWhatTheColourChannelsSeeWhereTheirWavelengthsAreGiven() throws IOException {
-    String one = Files.readString(folder.resolve("held.sight.json"));
-    Files.writeString(
-        folder.resolve("colours.sight.json"),
-        one.replace(
-            "\"temperatureC\":", "\"channelWavelengthsNm\": [610, 540, 460], \"temperatureC\":"));
-    assertThat(run("trace", path("colours.sight.json"), "--out", path("out"))).isZero();
-    assertThat(folder.resolve("out/colours.channels.csv"))
-        .content()
-        .startsWith(
-            "distance_m,apparent_elevation_mrad,row_px,height_m,sense,"
-                + "red_elevation_m,red_shift_px,green_elevation_m,green_shift_px,"
-                + "blue_elevation_m,blue_shift_px\r\n500,");
-    assertThat(folder.resolve("out/colours.html")).content().contains("610, 540 and 460 nm");
-  }
-
-  @Test
   void traceShowsTheAirOfEachStretchOfThePath() throws IOException {
     overTwoGrounds("two.sight.json", "4");
     assertThat(run("trace", path("two.sight.json"), "--out", path("out"))).isZero();
