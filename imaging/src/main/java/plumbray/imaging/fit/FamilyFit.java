@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.Supplier;
 import plumbray.calibration.estimate.LeastSquares;
 import plumbray.calibration.estimate.Loss;
 import plumbray.calibration.estimate.Problem;
@@ -72,9 +73,38 @@ final class FamilyFit {
     }
   }
 
-  /** The best first adjustment; see {@link FirstFit#best}. */
-  Optional<Adjusted> first(List<Start> locks, boolean thorough) {
-    return new FirstFit(sight, references, thorough).best(locks);
+  /**
+   * The best first adjustment: where the strips themselves tell which edge is which, along that;
+   * otherwise from a search.
+   *
+   * @param locks starts of single exponentials that follow the staffs' pattern, where they are
+   *     needed
+   */
+  Optional<Adjusted> first(Supplier<List<Start>> locks) {
+    FirstFit fit = new FirstFit(sight, references, true);
+    Optional<Adjusted> along = fit.alongTrails();
+    if (along.filter(fit::clearlyFound).isPresent()) {
+      return along;
+    }
+    Optional<Adjusted> searched = fit.best(locks.get());
+    return along.isPresent() && searched.isPresent()
+        ? Optional.of(fit.better(along.get(), searched.get()))
+        : along.or(() -> searched);
+  }
+
+  /** The best first adjustment along what the strips tell; empty where they do not. */
+  Optional<Adjusted> alongTrails() {
+    return new FirstFit(sight, references, false).alongTrails();
+  }
+
+  /** Whether an adjustment leaves less unexplained than any wrong reading of the bars would. */
+  boolean clearlyFound(Adjusted adjusted) {
+    return new FirstFit(sight, references, false).clearlyFound(adjusted);
+  }
+
+  /** The best first adjustment from a search. */
+  Optional<Adjusted> searched(List<Start> locks) {
+    return new FirstFit(sight, references, false).best(locks);
   }
 
   static Solution solve(

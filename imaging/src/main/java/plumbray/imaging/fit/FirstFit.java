@@ -3,18 +3,14 @@ package plumbray.imaging.fit;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Comparator;
-import java.util.HashMap;
 import java.util.List;
-import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import java.util.TreeSet;
 import plumbray.calibration.estimate.LeastSquares;
 import plumbray.calibration.estimate.Loss;
 import plumbray.calibration.estimate.Solution;
-import plumbray.calibration.quantity.Parameter;
 import plumbray.calibration.sight.CameraSetup;
-import plumbray.calibration.sight.ProfileSetup;
 import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.SightParameters;
 import plumbray.imaging.fit.FamilyFit.Adjusted;
@@ -49,6 +45,7 @@ final class FirstFit {
   private static final double BETTER = 2.0;
 
   private static final double[] CHASE_REACHES_PX = {80.0, 50.0, 30.0, 15.0, 8.0};
+  private static final double[] NEAR_REACHES_PX = {10.0, 5.0};
   private static final int CHASE_EVALUATIONS = 12;
   private static final int LOCKS = 3;
   private static final int STEP_STARTS = 12;
@@ -90,11 +87,38 @@ final class FirstFit {
         .map(this::besideBars);
   }
 
+  /**
+   * The best first adjustment where the strips themselves tell which edge is which; empty where
+   * they do not.
+   */
+  Optional<Adjusted> alongTrails() {
+    if (references.staffs().isEmpty()) {
+      return Optional.empty();
+    }
+    return new TrailStarts(sight, references)
+        .values().stream()
+            .map(values -> chased(values, NEAR_REACHES_PX))
+            .map(this::still)
+            .filter(a -> Double.isFinite(a.solution().cost()))
+            .min(Comparator.comparingDouble(this::looks))
+            .map(this::besideBars);
+  }
+
+  /** Whether an adjustment leaves less unexplained than any wrong reading of the bars would. */
+  boolean clearlyFound(Adjusted adjusted) {
+    return clearlyFound(looks(adjusted));
+  }
+
+  /** The one of two adjustments that explains more of the strips. */
+  Adjusted better(Adjusted a, Adjusted b) {
+    return looks(a) <= looks(b) ? a : b;
+  }
+
   /** Values to which the starts lead once edges are drawn onto edges; the best of them. */
   private List<double[]> bestLooking(List<Start> starts) {
     List<double[]> values = new ArrayList<>();
     for (Start start : starts) {
-      values.add(chased(startValues(start)));
+      values.add(chased(StartValues.of(parameters, start)));
     }
     if (references.staffs().isEmpty() || values.isEmpty()) {
       return values;
@@ -121,7 +145,8 @@ final class FirstFit {
   private double[] climbed(double[] values) {
     Sight at = parameters.sightAt(Arrays.copyOf(values, parameters.parameters().size()));
     Start start = new StartSearch(at, new SlideScore(at, references)).climbedFromOwnValues();
-    return startValues(
+    return StartValues.of(
+        parameters,
         new Start(
             start.profile(),
             at.camera().pitchRad().value()
@@ -187,38 +212,18 @@ final class FirstFit {
         .orElse(Double.POSITIVE_INFINITY);
   }
 
-  private double[] startValues(Start start) {
-    Map<String, Double> values = valuesByName(start.profile());
-    List<Parameter> list = parameters.parameters();
-    double[] out = parameters.values();
-    for (int k = 0; k < out.length; k++) {
-      Parameter p = list.get(k);
-      if (p.name().equals("camera.pitchRad")) {
-        out[k] += start.pitchShiftRad();
-      }
-      out[k] = values.getOrDefault(p.name(), out[k]);
-    }
-    return within(out);
-  }
-
-  private static Map<String, Double> valuesByName(ProfileSetup profile) {
-    Map<String, Double> values = new HashMap<>();
-    List<ProfileSetup> stretches = profile.stretches();
-    for (int i = 0; i < stretches.size(); i++) {
-      String prefix = profile.prefix(i);
-      stretches.get(i).quantities().forEach((key, q) -> values.put(prefix + key, q.value()));
-    }
-    return values;
-  }
-
   /**
    * Draws the predicted edges onto the edges that the strips show, as points whose nearest partners
    * are taken anew after each adjustment. Brightness itself draws only over the width of a point
    * spread; this draws over half a bar.
    */
   private double[] chased(double[] from) {
+    return chased(from, CHASE_REACHES_PX);
+  }
+
+  private double[] chased(double[] from, double[] reachesPx) {
     double[] values = from;
-    for (double reach : CHASE_REACHES_PX) {
+    for (double reach : reachesPx) {
       values = drawn(values, Relabel.NONE, reach, Loss.CAUCHY);
     }
     return values;
@@ -326,13 +331,5 @@ final class FirstFit {
       relabels.add(new Relabel(place, 2));
     }
     return relabels;
-  }
-
-  private double[] within(double[] values) {
-    List<Parameter> list = parameters.parameters();
-    for (int k = 0; k < values.length; k++) {
-      values[k] = Math.max(list.get(k).lowest(), Math.min(list.get(k).highest(), values[k]));
-    }
-    return values;
   }
 }

@@ -33,6 +33,7 @@ import plumbray.raymodel.mapping.Sense;
 record References(List<StaffScene> staffs, List<PointObservation> points) {
 
   private static final double TRACKED_FREE_PX = 15.0;
+  private static final int MOST_WAYS = 4;
   private static final double TRACKED_SIGMA_PX = 1.5;
 
   /** Edges drawn from afar are no outliers until they are this many times nearer. */
@@ -134,6 +135,29 @@ record References(List<StaffScene> staffs, List<PointObservation> points) {
               new PointTarget(marks)));
     }
     return new References(List.of(), all);
+  }
+
+  /**
+   * The staffs' edges as points where the strips alone tell which is which; several ways to read
+   * them, the likeliest first, none where a strip does not tell. Points stay as they are.
+   */
+  List<References> trailed(Sight sight, double sigmaPx) {
+    double radPerPx = sight.camera().camera().radPerPx();
+    List<List<PointObservation>> ways = new ArrayList<>();
+    ways.add(points);
+    for (StaffScene staff : staffs) {
+      Reference reference = sight.references().get(staff.reference());
+      List<List<PointObservation>> longer = new ArrayList<>();
+      for (List<PointMark> marks : staff.trails(reference.distanceM() * radPerPx, sigmaPx)) {
+        for (List<PointObservation> way : ways) {
+          List<PointObservation> all = new ArrayList<>(way);
+          all.add(new PointObservation(staff.reference(), reference, new PointTarget(marks)));
+          longer.add(all);
+        }
+      }
+      ways = longer;
+    }
+    return ways.stream().limit(MOST_WAYS).map(way -> new References(List.of(), way)).toList();
   }
 
   /**

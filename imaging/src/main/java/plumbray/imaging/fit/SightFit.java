@@ -7,6 +7,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.function.Function;
 import plumbray.calibration.quantity.Quantity;
 import plumbray.calibration.sight.ProfileSetup;
 import plumbray.calibration.sight.Sight;
@@ -35,7 +36,7 @@ public final class SightFit {
     References references = References.read(sight, photo);
     if (sight.profile().family().isPresent()) {
       FamilyFit fit = new FamilyFit(sight, references);
-      return fit.first(locks(sight, references), true)
+      return fit.first(() -> locks(sight, references))
           .map(fit::refine)
           .map(adjusted -> alongRoll(sight, photo, adjusted))
           .map(adjusted -> FitReport.of(sight, adjusted, List.of()))
@@ -100,13 +101,7 @@ public final class SightFit {
   }
 
   private FitResult best(Sight sight, References references) {
-    List<SlideScore.Start> locks = locks(sight, references);
-    List<Candidate> first =
-        Arrays.stream(ProfileFamily.values())
-            .parallel()
-            .map(family -> candidate(sight.withProfile(open(family)), family, references, locks))
-            .flatMap(Optional::stream)
-            .toList();
+    List<Candidate> first = candidates(sight, references);
     if (first.isEmpty()) {
       return FitResult.failed(sight, noStart());
     }
@@ -144,10 +139,32 @@ public final class SightFit {
         result.jitterPx());
   }
 
-  private static Optional<Candidate> candidate(
-      Sight open, ProfileFamily family, References references, List<SlideScore.Start> locks) {
-    FamilyFit fit = new FamilyFit(open, references);
-    return fit.first(locks, false).map(a -> new Candidate(family, open, fit, a));
+  /**
+   * All families along what the strips tell; where none of them explains the strips, from a search.
+   */
+  private static List<Candidate> candidates(Sight sight, References references) {
+    List<Candidate> along = candidates(sight, references, FamilyFit::alongTrails);
+    if (along.stream().anyMatch(c -> c.fit().clearlyFound(c.adjusted()))) {
+      return along;
+    }
+    List<SlideScore.Start> locks = locks(sight, references);
+    List<Candidate> all = new ArrayList<>(along);
+    all.addAll(candidates(sight, references, fit -> fit.searched(locks)));
+    return all;
+  }
+
+  private static List<Candidate> candidates(
+      Sight sight, References references, Function<FamilyFit, Optional<Adjusted>> first) {
+    return Arrays.stream(ProfileFamily.values())
+        .parallel()
+        .map(
+            family -> {
+              Sight open = sight.withProfile(open(family));
+              FamilyFit fit = new FamilyFit(open, references);
+              return first.apply(fit).map(a -> new Candidate(family, open, fit, a));
+            })
+        .flatMap(Optional::stream)
+        .toList();
   }
 
   /** A family with every quantity open, within what air near the ground does. */

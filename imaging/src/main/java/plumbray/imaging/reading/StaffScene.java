@@ -131,6 +131,28 @@ public final class StaffScene {
     return marks;
   }
 
+  /**
+   * The staff's edges as points where the strip alone, without any idea of the air, tells which
+   * edge is which; the best ways to read it, best first, none where it does not tell.
+   *
+   * @param nominalMPerPx metres a row where rays are straight
+   * @param sigmaPx standard deviation to give the points, px
+   */
+  public List<List<PointMark>> trails(double nominalMPerPx, double sigmaPx) {
+    List<StripEdges.Edge> seen = StripEdges.of(strip);
+    return EdgeTrail.of(bars, seen, nominalMPerPx).stream()
+        .map(trail -> trail.stream().map(step -> mark(step, seen, sigmaPx)).toList())
+        .toList();
+  }
+
+  private PointMark mark(EdgeTrail.Step step, List<StripEdges.Edge> seen, double sigmaPx) {
+    return new PointMark(
+        bars.edgeM(step.edge()),
+        new PixelPoint(strip.columnPx(), seen.get(step.seen()).row()),
+        sigmaPx,
+        step.upright() ? SenseWanted.UPRIGHT : SenseWanted.INVERTED);
+  }
+
   /** Indices of the strip's values that show bars, or lie next to some, through a sight. */
   public int[] rowsInUse(TracedSight sight) {
     int[] top = new int[1];
