@@ -2,6 +2,7 @@ package plumbray.imaging.fit;
 
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Supplier;
@@ -14,6 +15,8 @@ import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.SightParameters;
 import plumbray.imaging.fit.ShimmerSearch.Found;
 import plumbray.imaging.fit.SlideScore.Start;
+import plumbray.imaging.reading.EdgeImage;
+import plumbray.imaging.reading.GroundEdge;
 import plumbray.imaging.reading.ReferenceObservation;
 import plumbray.imaging.reading.Shimmer;
 import plumbray.imaging.reading.StaffObservation;
@@ -34,6 +37,11 @@ final class FamilyFit {
 
   static final Found FIRST_GUESS = new Found(1.5, new Shimmer(0.25, 30.0));
 
+  /** Results with and without the ground's edge may differ by this many standard deviations. */
+  private static final double AGREEING = 4.0;
+
+  private static final double LEAST_STRAY_PX = 0.2;
+
   /** Rows farther off than this many standard deviations count less. */
   private static final double STRAYED = 2.5;
 
@@ -53,13 +61,36 @@ final class FamilyFit {
    * @param observation what was observed
    * @param solution the estimates
    * @param found noise and shimmer that were assumed
+   * @param ground edge of the ground that was found in the picture and counts
    */
-  record Adjusted(SightObservation observation, Solution solution, Found found) {
+  record Adjusted(
+      SightObservation observation,
+      Solution solution,
+      Found found,
+      Optional<GroundEdgeSearch.Found> ground) {
+
+    /** Without an edge of the ground. */
+    Adjusted(SightObservation observation, Solution solution, Found found) {
+      this(observation, solution, found, Optional.empty());
+    }
 
     /** Values of the sight's own quantities. */
     double[] sightValues() {
       int n = observation.sightParameters().parameters().size();
       return Arrays.copyOf(solution.values(), n);
+    }
+
+    Adjusted with(GroundEdgeSearch.Found edge) {
+      return new Adjusted(observation, solution, found, Optional.of(edge));
+    }
+
+    /** Edges of the ground that count in the strip of a reference of the observation. */
+    List<GroundEdge> groundEdges(int reference) {
+      return ground
+          .filter(g -> g.reference() == reference)
+          .map(GroundEdgeSearch.Found::edge)
+          .stream()
+          .toList();
     }
 
     /** Criterion of Schwarz (1978) with the edges and points as data. */
@@ -82,24 +113,19 @@ final class FamilyFit {
    */
   Optional<Adjusted> first(Supplier<List<Start>> locks) {
     FirstFit fit = new FirstFit(sight, references, true);
-    Optional<Adjusted> along = fit.alongTrails();
-    if (along.filter(fit::clearlyFound).isPresent()) {
-      return along;
+    Optional<FirstFit.Along> along = fit.alongTrails();
+    if (along.filter(FirstFit.Along::sure).isPresent()) {
+      return along.map(FirstFit.Along::adjusted);
     }
     Optional<Adjusted> searched = fit.best(locks.get());
     return along.isPresent() && searched.isPresent()
-        ? Optional.of(fit.better(along.get(), searched.get()))
-        : along.or(() -> searched);
+        ? Optional.of(fit.better(along.get().adjusted(), searched.get()))
+        : along.map(FirstFit.Along::adjusted).or(() -> searched);
   }
 
   /** The best first adjustment along what the strips tell; empty where they do not. */
-  Optional<Adjusted> alongTrails() {
+  Optional<FirstFit.Along> alongTrails() {
     return new FirstFit(sight, references, false).alongTrails();
-  }
-
-  /** Whether an adjustment leaves less unexplained than any wrong reading of the bars would. */
-  boolean clearlyFound(Adjusted adjusted) {
-    return new FirstFit(sight, references, false).clearlyFound(adjusted);
   }
 
   /** The best first adjustment from a search. */
@@ -122,20 +148,72 @@ final class FamilyFit {
     if (references.staffs().isEmpty()) {
       return points(first);
     }
-    Adjusted best = shimmering(first, FIRST_GUESS);
+    int blocked = parameters.indexOf("path.blockedBelowM");
+    Optional<GroundEdgeSearch.Found> ground =
+        blocked < 0 ? Optional.empty() : new GroundEdgeSearch(first).findBlocked(blocked);
+    Adjusted best =
+        ground.isEmpty()
+            ? shimmering(first, FIRST_GUESS)
+            : shimmering(first.with(ground.get()), ground.get().sightValues(), FIRST_GUESS);
     for (int round = 0; round < ROUNDS; round++) {
       best = shimmering(best, found(best));
     }
-    return best;
+    return withGround(best);
+  }
+
+  /**
+   * Adjusts on with the edge of the ground, where it is found and agrees with all the rest: where
+   * grass or a kerb stands in front, or the family does not hold next to the ground, it does not.
+   * Where it counts already, it is looked for once more, now that all is known better.
+   */
+  private Adjusted withGround(Adjusted without) {
+    Optional<GroundEdgeSearch.Found> ground = new GroundEdgeSearch(without).find();
+    if (ground.isEmpty()) {
+      return without;
+    }
+    Adjusted with =
+        shimmering(without.with(ground.get()), ground.get().sightValues(), without.found());
+    with = shimmering(with, found(with));
+    boolean believed =
+        without.ground().isEmpty()
+            ? agrees(without, with)
+            : with.solution().cost() < without.solution().cost();
+    return believed ? with : without;
+  }
+
+  /** Whether no estimate leaves its former spread, and the edge no more than shimmer moves it. */
+  private static boolean agrees(Adjusted without, Adjusted with) {
+    double[] before = without.sightValues();
+    double[] after = with.sightValues();
+    double[] sigmas = without.solution().sigmas();
+    boolean within = Double.isFinite(with.solution().cost());
+    for (int k = 0; k < before.length; k++) {
+      within &= Math.abs(after[k] - before[k]) <= AGREEING * sigmas[k] + 1e-12;
+    }
+    GroundEdgeSearch.Found ground = with.ground().orElseThrow();
+    int r = ground.reference();
+    StaffObservation staff = (StaffObservation) with.observation().references().get(r);
+    double[] own = with.observation().own(with.solution().values(), r);
+    double strayed =
+        staff.edges().stream()
+            .filter(e -> e.edge() == StaffScene.GROUND_EDGE)
+            .mapToDouble(e -> Math.abs(staff.displacementPx(own, e)))
+            .max()
+            .orElse(Double.POSITIVE_INFINITY);
+    return within && strayed <= AGREEING * with.found().shimmer().sigmaPx() + LEAST_STRAY_PX;
   }
 
   /** Adjusts with noise and shimmer that are given. */
   Adjusted shimmering(Adjusted from, Found found) {
-    SightObservation observation = observation(from, found);
-    double[] values = startAt(from, observation);
+    return shimmering(from, from.sightValues(), found);
+  }
+
+  private Adjusted shimmering(Adjusted from, double[] sightValues, Found found) {
+    SightObservation observation = observation(from, sightValues, found);
+    double[] values = startAt(from, sightValues, observation);
     Solution solution =
         solve(new LeastSquares(MOST_EVALUATIONS, TOLERANCE), observation, values, Loss.NONE);
-    return new Adjusted(observation, solution, found);
+    return new Adjusted(observation, solution, found, from.ground());
   }
 
   private Adjusted points(Adjusted first) {
@@ -146,19 +224,34 @@ final class FamilyFit {
     return new Adjusted(fine, solution, first.found());
   }
 
-  private SightObservation observation(Adjusted from, Found found) {
-    FitTrace trace = from.observation().trace(from.solution().values(), false);
+  private SightObservation observation(Adjusted from, double[] sightValues, Found found) {
+    double[] values = from.solution().values();
+    System.arraycopy(sightValues, 0, values, 0, sightValues.length);
+    FitTrace trace = from.observation().trace(values, false);
     int[] index = {0};
     return new SightObservation(
         parameters,
         references.observations(
-            s ->
-                StaffObservation.shimmering(
-                    s,
-                    settings(s, from, trace, found, index[0]++),
-                    s.edges(trace),
-                    found.shimmer())),
+            s -> {
+              int reference = index[0]++;
+              return StaffObservation.shimmering(
+                  s,
+                  settings(s, from, trace, found, reference),
+                  edges(s, trace, from.groundEdges(reference)),
+                  found.shimmer());
+            }),
         SightObservation.FINE_PX);
+  }
+
+  /** The edges that shimmer displaces: the bars', and the ground's where it was found. */
+  private static List<EdgeImage> edges(
+      StaffScene scene, FitTrace trace, List<GroundEdge> groundEdges) {
+    List<EdgeImage> edges = new ArrayList<>(scene.edges(trace));
+    scene.groundEdges(trace).stream()
+        .filter(e -> groundEdges.stream().anyMatch(g -> g.image() == e.image()))
+        .forEach(edges::add);
+    edges.sort(Comparator.comparingDouble(EdgeImage::row));
+    return edges;
   }
 
   /**
@@ -176,7 +269,8 @@ final class FamilyFit {
         noise[i] *= Math.sqrt(Math.max(1.0, Math.abs(strayed[i]) / STRAYED));
       }
     }
-    return new StripModelSettings(scene.rowsInUse(trace), noise, own[0]);
+    int[] rows = scene.rowsInUse(trace, from.groundEdges(reference), StaffScene.GROUND_BORDER_PX);
+    return new StripModelSettings(rows, noise, own[0]);
   }
 
   static double[] even(StaffScene scene, double factor) {
@@ -186,9 +280,9 @@ final class FamilyFit {
   }
 
   /** Values for another observation: the sight's, the point spreads, and the displacements kept. */
-  private double[] startAt(Adjusted from, SightObservation to) {
+  private double[] startAt(Adjusted from, double[] sightValues, SightObservation to) {
     List<Double> values = new ArrayList<>();
-    for (double v : from.sightValues()) {
+    for (double v : sightValues) {
       values.add(v);
     }
     for (int r = 0; r < to.references().size(); r++) {
@@ -203,7 +297,9 @@ final class FamilyFit {
   }
 
   private Found found(Adjusted at) {
-    SightObservation plain = observation(at, new Found(1.0, at.found().shimmer()));
-    return new ShimmerSearch(plain, startAt(at, plain)).find(at.found());
+    Found plain = new Found(1.0, at.found().shimmer());
+    SightObservation observation = observation(at, at.sightValues(), plain);
+    double[] values = startAt(at, at.sightValues(), observation);
+    return new ShimmerSearch(observation, values).find(at.found());
   }
 }

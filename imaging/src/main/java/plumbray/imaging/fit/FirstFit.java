@@ -88,25 +88,32 @@ final class FirstFit {
   }
 
   /**
+   * A first adjustment, and whether there is nothing to look for beyond it.
+   *
+   * @param adjusted the adjustment
+   * @param sure whether the bars themselves leave no doubt which edge is which
+   */
+  record Along(Adjusted adjusted, boolean sure) {}
+
+  /**
    * The best first adjustment where the strips themselves tell which edge is which; empty where
    * they do not.
    */
-  Optional<Adjusted> alongTrails() {
+  Optional<Along> alongTrails() {
     if (references.staffs().isEmpty()) {
       return Optional.empty();
     }
     return new TrailStarts(sight, references)
         .values().stream()
-            .map(values -> chased(values, NEAR_REACHES_PX))
-            .map(this::still)
-            .filter(a -> Double.isFinite(a.solution().cost()))
-            .min(Comparator.comparingDouble(this::looks))
-            .map(this::besideBars);
+            .map(led -> new Along(still(chased(led.values(), NEAR_REACHES_PX)), led.sure()))
+            .filter(a -> Double.isFinite(a.adjusted().solution().cost()))
+            .min(Comparator.comparingDouble(a -> looks(a.adjusted())))
+            .map(a -> a.sure() ? a : beside(a));
   }
 
-  /** Whether an adjustment leaves less unexplained than any wrong reading of the bars would. */
-  boolean clearlyFound(Adjusted adjusted) {
-    return clearlyFound(looks(adjusted));
+  private Along beside(Along along) {
+    Adjusted moved = besideBars(along.adjusted());
+    return new Along(moved, clearlyFound(looks(moved)));
   }
 
   /** The one of two adjustments that explains more of the strips. */

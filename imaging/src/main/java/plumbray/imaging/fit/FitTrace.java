@@ -1,6 +1,7 @@
 package plumbray.imaging.fit;
 
 import java.util.List;
+import java.util.Optional;
 import java.util.TreeSet;
 import plumbray.calibration.camera.Camera;
 import plumbray.calibration.camera.RowSensitivity;
@@ -9,6 +10,7 @@ import plumbray.calibration.sight.Sight;
 import plumbray.imaging.reading.TracedSight;
 import plumbray.raymodel.mapping.Branch;
 import plumbray.raymodel.mapping.FanRequest;
+import plumbray.raymodel.mapping.GrazingRay;
 import plumbray.raymodel.mapping.RayFan;
 import plumbray.raymodel.mapping.Sense;
 import plumbray.raymodel.mapping.SightMapping;
@@ -110,14 +112,38 @@ final class FitTrace implements TracedSight {
       if (index >= 0) {
         out[i] = -perM * branch.sensitivity(elevationRad, index);
       } else {
-        out[i] =
-            switch (layout.name(i)) {
-              case "camera.pitchRad" -> row.dvdPitch();
-              case "camera.rollRad" -> row.dvdRoll();
-              case "camera.focalLengthM" -> row.dvdFocalPx() / sight.camera().pixelPitchM();
-              default -> layout.name(i).equals(foot) ? perM : 0.0;
-            };
+        out[i] = layout.name(i).equals(foot) ? perM : byCamera(layout.name(i), row);
       }
     }
+  }
+
+  @Override
+  public boolean endDerivatives(double apparentRad, double azimuthRad, double[] out) {
+    Optional<GrazingRay> ray = fan.grazingRay(apparentRad);
+    if (ray.isEmpty()) {
+      return false;
+    }
+    RowSensitivity row = camera.rowSensitivity(apparentRad, azimuthRad);
+    for (int i = 0; i < layout.size(); i++) {
+      int index = layout.sensitivityIndex(i);
+      if (index >= 0) {
+        out[i] = row.dvdElevation() * ray.get().byQuantity()[index];
+      } else if (layout.name(i).equals("path.blockedBelowM")) {
+        out[i] = row.dvdElevation() * ray.get().byBlockedHeight();
+      } else {
+        out[i] = byCamera(layout.name(i), row);
+      }
+    }
+    return true;
+  }
+
+  /** Derivative of a row by a quantity of the camera's attitude or focal length. */
+  private double byCamera(String name, RowSensitivity row) {
+    return switch (name) {
+      case "camera.pitchRad" -> row.dvdPitch();
+      case "camera.rollRad" -> row.dvdRoll();
+      case "camera.focalLengthM" -> row.dvdFocalPx() / sight.camera().pixelPitchM();
+      default -> 0.0;
+    };
   }
 }

@@ -24,7 +24,7 @@ final class ShimmerSearch {
   private static final double FIRST_STEP = 0.8;
   private static final double LAST_STEP = 0.08;
 
-  private final List<double[]> edgeRows = new ArrayList<>();
+  private final List<List<EdgeImage>> edgesOf = new ArrayList<>();
   private final List<Integer> edgeColumns = new ArrayList<>();
   private final double[][] normal;
   private final double[] gradient;
@@ -87,7 +87,7 @@ final class ShimmerSearch {
           ofShimmer[row + i] = true;
         }
         int edges = staff.edges().size();
-        edgeRows.add(staff.edges().stream().mapToDouble(EdgeImage::row).toArray());
+        edgesOf.add(staff.edges());
         edgeColumns.add(column + 1);
         System.arraycopy(values, column + 1, displacement, column + 1, edges);
       }
@@ -170,13 +170,13 @@ final class ShimmerSearch {
   /** Adds the shimmer's precision for every staff and returns the logarithm of its determinant. */
   private double addShimmer(double[][] a, Shimmer shimmer) {
     double sum = 0.0;
-    for (int s = 0; s < edgeRows.size(); s++) {
-      if (edgeRows.get(s).length == 0) {
+    for (int s = 0; s < edgesOf.size(); s++) {
+      if (edgesOf.get(s).isEmpty()) {
         continue;
       }
       CholeskyDecomposition k =
           new CholeskyDecomposition(
-              new Array2DRowRealMatrix(shimmer.covariance(edgeRows.get(s)), false), 1e-9, 0.0);
+              new Array2DRowRealMatrix(shimmer.covariance(edgesOf.get(s)), false), 1e-9, 0.0);
       double[][] precision = k.getSolver().getInverse().getData();
       int at = edgeColumns.get(s);
       for (int i = 0; i < precision.length; i++) {

@@ -90,8 +90,10 @@ public final class SightFit {
    * @param sight the sight with that family
    * @param fit its fit
    * @param adjusted its adjustment
+   * @param sure whether the bars themselves leave no doubt which edge is which
    */
-  private record Candidate(ProfileFamily family, Sight sight, FamilyFit fit, Adjusted adjusted) {}
+  private record Candidate(
+      ProfileFamily family, Sight sight, FamilyFit fit, Adjusted adjusted, boolean sure) {}
 
   private static List<SlideScore.Start> locks(Sight sight, References references) {
     return references.staffs().isEmpty()
@@ -116,7 +118,7 @@ public final class SightFit {
           references.staffs().isEmpty()
               ? c.fit().refine(c.adjusted())
               : c.fit().shimmering(c.adjusted(), led.found());
-      compared.add(new Candidate(c.family(), c.sight(), c.fit(), adjusted));
+      compared.add(new Candidate(c.family(), c.sight(), c.fit(), adjusted, c.sure()));
     }
     compared.sort(Comparator.comparingDouble(c -> c.adjusted().informationCriterion()));
     Candidate chosen = compared.get(0);
@@ -144,24 +146,32 @@ public final class SightFit {
    */
   private static List<Candidate> candidates(Sight sight, References references) {
     List<Candidate> along = candidates(sight, references, FamilyFit::alongTrails);
-    if (along.stream().anyMatch(c -> c.fit().clearlyFound(c.adjusted()))) {
+    if (along.stream().anyMatch(Candidate::sure)) {
       return along;
     }
     List<SlideScore.Start> locks = locks(sight, references);
     List<Candidate> all = new ArrayList<>(along);
-    all.addAll(candidates(sight, references, fit -> fit.searched(locks)));
+    all.addAll(
+        candidates(
+            sight, references, fit -> fit.searched(locks).map(a -> new FirstFit.Along(a, false))));
     return all;
   }
 
+  private static Candidate better(Candidate a, Candidate b) {
+    return a.adjusted().solution().cost() <= b.adjusted().solution().cost() ? a : b;
+  }
+
   private static List<Candidate> candidates(
-      Sight sight, References references, Function<FamilyFit, Optional<Adjusted>> first) {
+      Sight sight, References references, Function<FamilyFit, Optional<FirstFit.Along>> first) {
     return Arrays.stream(ProfileFamily.values())
         .parallel()
         .map(
             family -> {
               Sight open = sight.withProfile(open(family));
               FamilyFit fit = new FamilyFit(open, references);
-              return first.apply(fit).map(a -> new Candidate(family, open, fit, a));
+              return first
+                  .apply(fit)
+                  .map(a -> new Candidate(family, open, fit, a.adjusted(), a.sure()));
             })
         .flatMap(Optional::stream)
         .toList();

@@ -22,6 +22,9 @@ final class TrailStarts {
   private static final double TOLERANCE = 0.05;
   private static final double SIGMA_PX = 1.0;
 
+  /** Edges followed within this many spreads, in the median, are followed. */
+  private static final double FOLLOWED = 1.5;
+
   /** A grid's nearest profile may leave edges this wrong, squared, in their spreads. */
   private static final double CAP = 1e5;
 
@@ -35,31 +38,49 @@ final class TrailStarts {
     this.parameters = SightParameters.of(sight);
   }
 
-  /** Sets of the sight's values; best first for each way to read the strips. */
-  List<double[]> values() {
-    List<double[]> all = new ArrayList<>();
-    for (References way : references.trailed(sight, SIGMA_PX)) {
-      SlideScore score = new SlideScore(sight, way, CAP);
+  /**
+   * Where one way to read the strips leads.
+   *
+   * @param values the sight's values
+   * @param sure whether it is the only way, and the family follows the edges so read
+   */
+  record Led(double[] values, boolean sure) {}
+
+  /** Where each way to read the strips leads, the likeliest first. */
+  List<Led> values() {
+    List<References> ways = references.trailed(sight, SIGMA_PX);
+    List<Led> all = new ArrayList<>();
+    for (References way : ways) {
       SightObservation points =
           new SightObservation(parameters, way.observations(s -> null), SightObservation.ROUGH_PX);
-      List<Solution> solutions = new ArrayList<>();
-      for (Start start : starts(way, score)) {
-        LeastSquares solver = new LeastSquares(EVALUATIONS, TOLERANCE);
-        double[] from = StartValues.of(parameters, start);
-        solutions.add(FamilyFit.solve(solver, points, from, Loss.CAUCHY));
-      }
-      solutions.stream()
+      starts(way).stream()
+          .map(start -> adjusted(points, start))
           .filter(s -> Double.isFinite(s.cost()))
-          .min(Comparator.comparingDouble(Solution::cost))
-          .map(s -> Arrays.copyOf(s.values(), parameters.parameters().size()))
+          .min(Comparator.comparingDouble(TrailStarts::typicalMiss))
+          .map(s -> new Led(sightValues(s), ways.size() == 1 && typicalMiss(s) < FOLLOWED))
           .ifPresent(all::add);
     }
     return all;
   }
 
-  private List<Start> starts(References way, SlideScore score) {
+  private Solution adjusted(SightObservation points, Start start) {
+    double[] from = StartValues.of(parameters, start);
+    return FamilyFit.solve(new LeastSquares(EVALUATIONS, TOLERANCE), points, from, Loss.CAUCHY);
+  }
+
+  private double[] sightValues(Solution solution) {
+    return Arrays.copyOf(solution.values(), parameters.parameters().size());
+  }
+
+  /** Median of the residuals' sizes. */
+  private static double typicalMiss(Solution solution) {
+    double[] sizes = Arrays.stream(solution.residuals()).map(Math::abs).sorted().toArray();
+    return sizes[sizes.length / 2];
+  }
+
+  private List<Start> starts(References way) {
     return sight.profile().stretches().size() > 1
         ? new StretchStarts(sight, way).of(List.of())
-        : new StartSearch(sight, score).coarseOfOwnFamily(STARTS);
+        : new StartSearch(sight, new SlideScore(sight, way, CAP)).coarseOfOwnFamily(STARTS);
   }
 }

@@ -14,6 +14,7 @@ final class WeakPriors {
   /** Centre and standard deviation by quantity, SI. */
   private static final Map<String, double[]> OF =
       Map.ofEntries(
+          Map.entry("path.blockedBelowM", new double[] {0.0, 0.1}),
           Map.entry("profile.surfaceExcessK", new double[] {0.0, 50.0}),
           Map.entry("profile.upperExcessK", new double[] {0.0, 50.0}),
           Map.entry("profile.scaleHeightM", new double[] {0.2, 2.0}),

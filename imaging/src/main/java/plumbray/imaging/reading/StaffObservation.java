@@ -46,11 +46,10 @@ public final class StaffObservation implements ReferenceObservation {
   /** The strip with edges displaced by shimmer. */
   public static StaffObservation shimmering(
       StaffScene scene, StripModelSettings settings, List<EdgeImage> edges, Shimmer shimmer) {
-    double[] rows = edges.stream().mapToDouble(EdgeImage::row).toArray();
-    if (rows.length == 0) {
+    if (edges.isEmpty()) {
       return still(scene, settings);
     }
-    RealMatrix k = new Array2DRowRealMatrix(shimmer.covariance(rows), false);
+    RealMatrix k = new Array2DRowRealMatrix(shimmer.covariance(edges), false);
     RealMatrix lower = new CholeskyDecomposition(k, 1e-9, 0.0).getL();
     RealMatrix inverse = MatrixUtils.inverse(lower);
     return new StaffObservation(scene, settings, List.copyOf(edges), inverse.getData());
@@ -132,6 +131,11 @@ public final class StaffObservation implements ReferenceObservation {
     return new StripLook(settings.used(), model.predicted(), model.contrast());
   }
 
+  /** The settings of the strip's model. */
+  public StripModelSettings settings() {
+    return settings;
+  }
+
   /** The staff and its strip. */
   public StaffScene scene() {
     return scene;
@@ -211,19 +215,10 @@ public final class StaffObservation implements ReferenceObservation {
     double[][] columns = new double[estimates][settings.used().length];
     double[] byEstimate = new double[estimates];
     for (int e = 0; e < events.size(); e++) {
-      StripEvent event = events.get(e);
-      if (event.branch().isEmpty()) {
+      if (!eventDerivatives(events.get(e), sight, byEstimate)) {
         continue;
       }
       double[] byRow = model.byEventRow(e);
-      sight.rowDerivatives(
-          scene.place().reference(),
-          new TracedSight.Place(
-              event.branch().get(),
-              event.apparentRad(),
-              scene.azimuthRad(sight.camera()),
-              LEAST_SLOPE_SHARE),
-          byEstimate);
       for (int k = 0; k < estimates; k++) {
         for (int r = 0; r < byRow.length; r++) {
           columns[k][r] += byRow[r] * byEstimate[k];
@@ -237,6 +232,20 @@ public final class StaffObservation implements ReferenceObservation {
       put(model.levelsFollowing(columns[k]), k, into);
     }
     put(model.bySpread(), into.firstOwn(), into);
+  }
+
+  /** Derivatives of an event's row; false where nothing tells how it moves. */
+  private boolean eventDerivatives(StripEvent event, TracedSight sight, double[] out) {
+    double azimuth = scene.azimuthRad(sight.camera());
+    if (event.branch().isEmpty()) {
+      return sight.endDerivatives(event.apparentRad(), azimuth, out);
+    }
+    sight.rowDerivatives(
+        scene.place().reference(),
+        new TracedSight.Place(
+            event.branch().get(), event.apparentRad(), azimuth, LEAST_SLOPE_SHARE),
+        out);
+    return true;
   }
 
   private static void put(double[] column, int at, Rows into) {

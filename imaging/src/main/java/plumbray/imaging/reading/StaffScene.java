@@ -1,7 +1,6 @@
 package plumbray.imaging.reading;
 
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.List;
 import java.util.stream.IntStream;
 import plumbray.calibration.camera.Camera;
@@ -19,7 +18,11 @@ public final class StaffScene {
   /** Share of a strip's row that must be bars, or lie this near to one, for the row to count. */
   private static final double BORDER_PX = 6.0;
 
-  private static final double GROUND_BORDER_PX = 8.0;
+  /** Rows to either side of the ground's edge that show it. */
+  public static final double GROUND_BORDER_PX = 8.0;
+
+  /** Number of the edge where the ground begins. */
+  public static final int GROUND_EDGE = StripEvent.LOWER_END;
 
   private final String name;
   private final StaffBars bars;
@@ -95,6 +98,39 @@ public final class StaffScene {
     return seen;
   }
 
+  /**
+   * The edges of the ground that cut off inverted images of bars, within the strip, as a sight
+   * predicts them; as edges of number {@link #GROUND_EDGE}.
+   */
+  public List<EdgeImage> groundEdges(TracedSight sight) {
+    List<Branch> branches = sight.mapping(place.distanceM()).branches();
+    List<EdgeImage> ends = new ArrayList<>();
+    for (StripEvent event : StripEvents.of(bars, strip, sight, place, new int[1])) {
+      if (event.edge() == GROUND_EDGE
+          && bars.isBar(event.above())
+          && event.row() >= strip.firstRow()
+          && event.row() <= strip.firstRow() + strip.rows() - 1) {
+        Sense sense = branches.get(branches.size() - 1 - event.image()).sense();
+        if (sense == Sense.INVERTED) {
+          ends.add(
+              new EdgeImage(event.edge(), Double.NaN, event.image(), sense, event.row(), 0, 1));
+        }
+      }
+    }
+    return ends;
+  }
+
+  /**
+   * Derivatives, by the estimated quantities, of the row in which the ground cuts off an image.
+   *
+   * @return whether they are known
+   */
+  public boolean groundEdgeDerivatives(TracedSight sight, int image, double[] out) {
+    return StripEvents.of(bars, strip, sight, place, new int[1]).stream()
+        .filter(e -> e.edge() == GROUND_EDGE && e.image() == image)
+        .anyMatch(e -> sight.endDerivatives(e.apparentRad(), azimuthRad(sight.camera()), out));
+  }
+
   private int step(StripEvent event) {
     if (!bars.isBar(event.above()) || !bars.isBar(event.below())) {
       return 0;
@@ -155,6 +191,17 @@ public final class StaffScene {
 
   /** Indices of the strip's values that show bars, or lie next to some, through a sight. */
   public int[] rowsInUse(TracedSight sight) {
+    return rowsInUse(sight, List.of(), GROUND_BORDER_PX);
+  }
+
+  /**
+   * Indices of the strip's values that show bars, or lie next to some, through a sight; those near
+   * the ground's edges too where these were found.
+   *
+   * @param found edges of the ground that were found
+   * @param reachPx how near to one, px
+   */
+  public int[] rowsInUse(TracedSight sight, List<GroundEdge> found, double reachPx) {
     int[] top = new int[1];
     List<StripEvent> events = StripEvents.of(bars, strip, sight, place, top);
     boolean[] use = new boolean[strip.rows()];
@@ -166,24 +213,23 @@ public final class StaffScene {
       from = event.row();
     }
     mark(use, what, from, strip.firstRow() + strip.rows());
-    events.stream().filter(e -> e.branch().isEmpty()).forEach(e -> unmark(use, e.row()));
-    int[] indices = new int[use.length];
-    int n = 0;
-    for (int i = 0; i < use.length; i++) {
-      if (use[i]) {
-        indices[n++] = i;
-      }
-    }
-    return Arrays.copyOf(indices, n);
+    events.stream()
+        .filter(e -> e.branch().isEmpty())
+        .filter(
+            e ->
+                e.edge() != GROUND_EDGE
+                    || found.stream().noneMatch(ground -> ground.image() == e.image()))
+        .forEach(e -> set(use, e.row(), GROUND_BORDER_PX, false));
+    found.forEach(ground -> set(use, ground.row(), reachPx, true));
+    return IntStream.range(0, use.length).filter(i -> use[i]).toArray();
   }
 
-  /** The ground's edge in front of an image does not count: what grows there is not known. */
-  private void unmark(boolean[] use, double row) {
-    int first = (int) Math.max(0, Math.ceil(row - GROUND_BORDER_PX - strip.firstRow()));
-    int last =
-        (int) Math.min(use.length - 1, Math.floor(row + GROUND_BORDER_PX - strip.firstRow()));
+  /** What is next to the ground's edge counts only where the edge itself was found. */
+  private void set(boolean[] use, double row, double reachPx, boolean value) {
+    int first = (int) Math.max(0, Math.ceil(row - reachPx - strip.firstRow()));
+    int last = (int) Math.min(use.length - 1, Math.floor(row + reachPx - strip.firstRow()));
     for (int i = first; i <= last; i++) {
-      use[i] = false;
+      use[i] = value;
     }
   }
 

@@ -7,7 +7,8 @@ import plumbray.raymodel.mapping.Branch;
  * A place along a strip, going down, where what is seen changes.
  *
  * @param row row, px, at the strip's column
- * @param edge index of the staff's edge; -1 where an image ends in the ground
+ * @param edge index of the staff's edge; {@link #LOWER_END} or {@link #UPPER_END} where an image
+ *     ends in the ground
  * @param branch image in which the edge is seen; empty for the end of an image
  * @param image number of the image, counted downwards from the top of the fan
  * @param apparentRad apparent elevation, rad
@@ -21,4 +22,11 @@ record StripEvent(
     int image,
     double apparentRad,
     int above,
-    int below) {}
+    int below) {
+
+  /** The lower end of an image: the ground in front of it begins. */
+  static final int LOWER_END = -1;
+
+  /** The upper end of an image. */
+  static final int UPPER_END = -2;
+}

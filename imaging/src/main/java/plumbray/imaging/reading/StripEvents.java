@@ -75,12 +75,12 @@ final class StripEvents {
         if (!begun) {
           what[0] = StaffBars.GROUND;
         }
-        end(from, branches.size() - 1 - i, seen);
+        end(StripEvent.UPPER_END, from, branches.size() - 1 - i, seen);
       }
       begun = true;
       cross(branch, from, to, branches.size() - 1 - i);
       if (to > bottom && !touches(branches, i - 1)) {
-        end(to, branches.size() - 1 - i, StaffBars.GROUND);
+        end(StripEvent.LOWER_END, to, branches.size() - 1 - i, StaffBars.GROUND);
       }
     }
     if (!begun) {
@@ -125,8 +125,8 @@ final class StripEvents {
     return apparent;
   }
 
-  private void end(double apparentRad, int image, int next) {
-    add(apparentRad, -1, Optional.empty(), image, next);
+  private void end(int end, double apparentRad, int image, int next) {
+    add(apparentRad, end, Optional.empty(), image, next);
   }
 
   private void add(double apparentRad, int edge, Optional<Branch> branch, int image, int next) {

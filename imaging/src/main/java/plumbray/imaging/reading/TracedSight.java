@@ -30,6 +30,16 @@ public interface TracedSight {
   void rowDerivatives(int reference, Place place, double[] out);
 
   /**
+   * Derivatives, by the estimated quantities, of the row in which an image ends in the ground.
+   *
+   * @param apparentRad a branch's lowest or highest apparent elevation, rad
+   * @param azimuthRad azimuth, rad
+   * @param out filled with one derivative a quantity, px per unit
+   * @return whether there is such an end there, and its derivatives are known
+   */
+  boolean endDerivatives(double apparentRad, double azimuthRad, double[] out);
+
+  /**
    * Where an elevation is seen.
    *
    * @param branch the image

@@ -10,6 +10,7 @@ import org.apache.commons.math3.linear.EigenDecomposition;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
+import plumbray.raymodel.mapping.Sense;
 
 class ShimmerTest {
   private static final double ROUNDING = 1e-12;
@@ -32,7 +33,12 @@ class ShimmerTest {
   @Test
   void theMatrixOfRowsIsSymmetricAndPositiveDefiniteEvenWhereRowsCoincide() {
     double[] rows = {10.0, 10.0, 10.001, 30.0, 300.0};
-    double[][] k = new Shimmer(0.5, 80.0).covariance(rows);
+    double[][] k =
+        new Shimmer(0.5, 80.0)
+            .covariance(
+                Arrays.stream(rows)
+                    .mapToObj(row -> new EdgeImage(0, 0.0, 0, Sense.UPRIGHT, row, 1, 1.0))
+                    .toList());
     for (int i = 0; i < rows.length; i++) {
       assertThat(k[i][i]).isCloseTo(0.25, within(0.25 * 2.0 * TRACE_OF_NOISE));
       for (int j = 0; j < rows.length; j++) {

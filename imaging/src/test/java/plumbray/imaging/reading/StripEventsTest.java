@@ -47,6 +47,11 @@ class StripEventsTest {
     public void rowDerivatives(int reference, Place place, double[] out) {
       throw new UnsupportedOperationException("no derivatives were asked for");
     }
+
+    @Override
+    public boolean endDerivatives(double apparentRad, double azimuthRad, double[] out) {
+      return false;
+    }
   }
 
   private static StaffScene scene(Sight sight) {

@@ -50,6 +50,9 @@ final class FanTracer {
 
   private final FanRequest request;
   private final double[] distancesM;
+  private final PathAir air;
+  private final SightPath path;
+  private final double traceToleranceM;
   private final RayTracer tracer;
   private final double endRad;
 
@@ -57,11 +60,15 @@ final class FanTracer {
   private final double[][] largest;
 
   private final List<RayTrace> traces = new ArrayList<>();
+  private final List<GrazingRay> grazing = new ArrayList<>();
   private int budget;
   private boolean exhausted;
 
   FanTracer(PathAir air, SightPath path, FanRequest request, double traceToleranceM) {
     this.request = request;
+    this.air = air;
+    this.path = path;
+    this.traceToleranceM = traceToleranceM;
     this.distancesM = request.distancesM();
     endRad = Math.max(FINEST_RAD, END_SHARE * request.toleranceRad());
     largest = new double[distancesM.length][2 + air.parameterCount()];
@@ -84,6 +91,11 @@ final class FanTracer {
       left = right;
     }
     return traces;
+  }
+
+  /** The grazing rays that were met with, where derivatives were asked for. */
+  List<GrazingRay> grazingRays() {
+    return grazing;
   }
 
   /** Whether the rays allowed did not suffice for the accuracy asked for. */
@@ -153,9 +165,29 @@ final class FanTracer {
     }
     RayTrace before = ray(low);
     RayTrace after = ray(high);
+    if (request.sensitivities()) {
+      addGrazing(rightArrives ? after : before, target);
+    }
     refine(a, before, depth + 1);
     traces.add(after);
     refine(after, b, depth + 1);
+  }
+
+  /** Keeps how the direction of a ray that grazes before target {@code i} varies. */
+  private void addGrazing(RayTrace ray, int i) {
+    double atM = ray.arrives(i) ? ray.lowestAtM(i) : Double.NaN;
+    if (!(atM > 0.0)) {
+      return;
+    }
+    budget--;
+    RayTracer toThere = new RayTracer(air, path, new double[] {atM}, true, traceToleranceM);
+    RayTrace there = toThere.traceThrough(request.cameraHeightM(), ray.apparentRad());
+    double byAngle = there.sensitivity(0, 0);
+    double[] byQuantity = new double[there.sensitivityCount() - 1];
+    for (int k = 0; k < byQuantity.length; k++) {
+      byQuantity[k] = -there.sensitivity(0, k + 1) / byAngle;
+    }
+    grazing.add(new GrazingRay(ray.apparentRad(), atM, byQuantity, 1.0 / byAngle));
   }
 
   /** Illinois step, kept off the ends; every third step halves, so that it cannot stall. */

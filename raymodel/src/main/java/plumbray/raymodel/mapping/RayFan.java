@@ -2,6 +2,7 @@ package plumbray.raymodel.mapping;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import plumbray.raymodel.path.SightPath;
 import plumbray.raymodel.ray.Medium;
 import plumbray.raymodel.ray.PathAir;
@@ -15,15 +16,17 @@ public final class RayFan {
   private static final double SAME_GROUND = 1e-3;
 
   private final List<SightMapping> mappings;
+  private final List<GrazingRay> grazingRays;
   private final GroundView ground;
   private final int rayCount;
   private final boolean accurate;
 
-  private RayFan(List<SightMapping> mappings, GroundView ground, int rayCount, boolean accurate) {
+  private RayFan(FanTracer tracer, List<RayTrace> traces, List<SightMapping> mappings) {
     this.mappings = List.copyOf(mappings);
-    this.ground = ground;
-    this.rayCount = rayCount;
-    this.accurate = accurate;
+    grazingRays = List.copyOf(tracer.grazingRays());
+    ground = GroundView.of(groundRuns(traces));
+    rayCount = traces.size();
+    accurate = !tracer.exhausted() && traces.stream().allMatch(RayTrace::accurate);
   }
 
   /** Traces a fan. */
@@ -56,8 +59,7 @@ public final class RayFan {
       mappings.add(
           new SightMapping(distances[d], path.ground().elevationM(distances[d]), runs(traces, d)));
     }
-    boolean accurate = !tracer.exhausted() && traces.stream().allMatch(RayTrace::accurate);
-    return new RayFan(mappings, GroundView.of(groundRuns(traces)), traces.size(), accurate);
+    return new RayFan(tracer, traces, mappings);
   }
 
   /** Runs of neighbouring rays that arrive at distance d. */
@@ -128,6 +130,16 @@ public final class RayFan {
         .findFirst()
         .orElseThrow(
             () -> new IllegalArgumentException("the fan was not traced to " + distanceM + " m"));
+  }
+
+  /**
+   * The ray that just clears the ground in a direction in which an image ends; empty elsewhere, and
+   * where derivatives were not asked for.
+   *
+   * @param apparentRad a branch's lowest or highest apparent elevation, rad
+   */
+  public Optional<GrazingRay> grazingRay(double apparentRad) {
+    return grazingRays.stream().filter(g -> g.apparentRad() == apparentRad).findFirst();
   }
 
   /** The ground as the fan sees it. */

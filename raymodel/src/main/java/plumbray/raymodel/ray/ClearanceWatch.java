@@ -20,21 +20,35 @@ final class ClearanceWatch {
   private final double[] right = new double[3];
   private final double[] p = new double[6];
   private double lowestM;
+  private double lowestAtM;
 
   /** Starts a ray or a new piece of ground at the state's place. */
   void begin(RayState state, double blockedBelowM) {
     state.clearance(right);
     right[0] -= blockedBelowM;
-    lowestM = Math.min(lowestM, right[0]);
+    note(right[0], state.x[0]);
+  }
+
+  private void note(double clearanceM, double atM) {
+    if (clearanceM < lowestM) {
+      lowestM = clearanceM;
+      lowestAtM = atM;
+    }
   }
 
   void reset() {
     lowestM = Double.POSITIVE_INFINITY;
+    lowestAtM = 0.0;
   }
 
   /** Lowest clearance so far, m. */
   double lowestM() {
     return lowestM;
+  }
+
+  /** Distance at which it is, m. */
+  double lowestAtM() {
+    return lowestAtM;
   }
 
   /**
@@ -59,9 +73,10 @@ final class ClearanceWatch {
   /**
    * Looks at the step of length {@code h} just accepted.
    *
+   * @param fromM distance at which the step began, m
    * @return the fraction of the step after which the ray goes under, NaN where it does not
    */
-  double observe(RayState state, double blockedBelowM, double h) {
+  double observe(RayState state, double blockedBelowM, double h, double fromM) {
     System.arraycopy(right, 0, left, 0, 3);
     state.clearance(right);
     right[0] -= blockedBelowM;
@@ -71,8 +86,9 @@ final class ClearanceWatch {
       fit(left, right, h);
       turn = root(1, 0.0, 1.0);
       lowest = Math.min(lowest, value(turn));
+      note(value(turn), fromM + turn * (state.x[0] - fromM));
     }
-    lowestM = Math.min(lowestM, lowest);
+    note(right[0], state.x[0]);
     if (lowest >= 0.0 || left[0] < 0.0) {
       return Double.NaN;
     }

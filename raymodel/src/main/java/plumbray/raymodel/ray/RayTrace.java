@@ -13,6 +13,7 @@ public final class RayTrace {
   final double[] elevationsM;
   final double[] pathSlopes;
   final double[] clearancesM;
+  final double[] lowestAtM;
   final double[][] sensitivities;
   int reached;
   double endDistanceM = Double.NaN;
@@ -25,6 +26,7 @@ public final class RayTrace {
     elevationsM = filled(targets);
     pathSlopes = filled(targets);
     clearancesM = filled(targets);
+    lowestAtM = filled(targets);
     sensitivities = new double[targets][];
   }
 
@@ -62,6 +64,11 @@ public final class RayTrace {
   /** Lowest height above what blocks rays, from the camera to target {@code i}, m. */
   public double clearanceM(int i) {
     return clearancesM[i];
+  }
+
+  /** Distance at which the ray is lowest above what blocks rays, before target {@code i}, m. */
+  public double lowestAtM(int i) {
+    return lowestAtM[i];
   }
 
   /**

@@ -124,6 +124,7 @@ public final class RayTracer {
     trace.elevationsM[i] = state.elevationM();
     trace.pathSlopes[i] = state.pathSlope();
     trace.clearancesM[i] = watch.lowestM();
+    trace.lowestAtM[i] = watch.lowestAtM();
     trace.sensitivities[i] = new double[state.components - 1];
     for (int j = 1; j < state.components; j++) {
       trace.sensitivities[i][j - 1] = state.sensitivity(j);
@@ -148,7 +149,7 @@ public final class RayTracer {
         state.accept();
       }
       trace.steps++;
-      double under = watch.observe(state, path.blockedBelowM(), h);
+      double under = watch.observe(state, path.blockedBelowM(), h, from);
       if (stopping && !Double.isNaN(under)) {
         trace.endDistanceM = from + under * (state.x[0] - from);
         return false;
