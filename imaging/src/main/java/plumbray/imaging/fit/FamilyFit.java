@@ -41,6 +41,10 @@ final class FamilyFit {
   private static final double AGREEING = 4.0;
 
   private static final double LEAST_STRAY_PX = 0.2;
+  private static final int GROUND_ROUNDS = 3;
+
+  /** A better place for the ground's edge must lower chi square by this much. */
+  private static final double GAIN = 1.0;
 
   /** Rows farther off than this many standard deviations count less. */
   private static final double STRAYED = 2.5;
@@ -167,18 +171,21 @@ final class FamilyFit {
    * Where it counts already, it is looked for once more, now that all is known better.
    */
   private Adjusted withGround(Adjusted without) {
-    Optional<GroundEdgeSearch.Found> ground = new GroundEdgeSearch(without).find();
-    if (ground.isEmpty()) {
-      return without;
+    Adjusted best = without;
+    for (int round = 0; round < GROUND_ROUNDS; round++) {
+      Optional<GroundEdgeSearch.Found> ground = new GroundEdgeSearch(best).find();
+      if (ground.isEmpty()) {
+        break;
+      }
+      Adjusted with = shimmering(best.with(ground.get()), ground.get().sightValues(), best.found());
+      if (best.ground().isPresent() && with.solution().cost() > best.solution().cost() - GAIN) {
+        break;
+      }
+      best = shimmering(with, found(with));
     }
-    Adjusted with =
-        shimmering(without.with(ground.get()), ground.get().sightValues(), without.found());
-    with = shimmering(with, found(with));
-    boolean believed =
-        without.ground().isEmpty()
-            ? agrees(without, with)
-            : with.solution().cost() < without.solution().cost();
-    return believed ? with : without;
+    return without.ground().isPresent() || best == without || agrees(without, best)
+        ? best
+        : without;
   }
 
   /** Whether no estimate leaves its former spread, and the edge no more than shimmer moves it. */
@@ -200,7 +207,7 @@ final class FamilyFit {
             .mapToDouble(e -> Math.abs(staff.displacementPx(own, e)))
             .max()
             .orElse(Double.POSITIVE_INFINITY);
-    return within && strayed <= AGREEING * with.found().shimmer().sigmaPx() + LEAST_STRAY_PX;
+    return within && strayed <= STRAYED * with.found().shimmer().sigmaPx() + LEAST_STRAY_PX;
   }
 
   /** Adjusts with noise and shimmer that are given. */

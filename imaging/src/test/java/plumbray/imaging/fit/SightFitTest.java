@@ -71,6 +71,57 @@ class SightFitTest {
     assertThat(result.estimates().sigmas()[1]).isLessThan(0.6);
   }
 
+  /** Share of the excess's spread that is left once the ground's edge is seen. */
+  private static final double MUCH_BETTER = 0.3;
+
+  @Test
+  void theGroundsEdgeTellsTheExcessAndItIsLeftOutWhereSomethingHidesIt() {
+    Shimmer shimmer = new Shimmer(0.3, 0.1, 60, 12);
+    Sensor sensor = new Sensor(0.8, 1, 4000, 6, 8);
+    Photo photo = SmallSights.photo(skin(0.0, 5.0), shimmer, sensor, 5L);
+    FitResult whole = new SightFit().fit(open(markedDownTo(396)), Optional.of(photo));
+    // the same photo, the staff marked down to just above the ground's edge at row 376
+    FitResult above = new SightFit().fit(open(markedDownTo(371)), Optional.of(photo));
+    double sigma = whole.estimates().sigmas()[1];
+    assertThat(sigma).isLessThan(MUCH_BETTER * above.estimates().sigmas()[1]);
+    assertThat(whole.estimates().values()[1]).isCloseTo(5.0, within(3.0 * sigma));
+    // stubble of 5 cm, of which the sight says nothing, moves the edge by many spreads
+    Photo hidden = SmallSights.photo(skin(0.05, 5.0), shimmer, sensor, 12L);
+    FitResult without = new SightFit().fit(open(markedDownTo(396)), Optional.of(hidden));
+    assertThat(without.estimates().values()[1])
+        .isCloseTo(5.0, within(3.0 * without.estimates().sigmas()[1]));
+  }
+
+  /** A staff at 1 km over a thin hot skin, of which stubble hides the lowest part. */
+  private static Sight skin(double blockedBelowM, double excessK) {
+    return SmallSights.sight(
+        SmallSights.camera(Quantity.held(SmallSights.PITCH_RAD)),
+        Quantity.held(blockedBelowM),
+        SmallSights.known(excessK, 0.05),
+        markedDownTo(396));
+  }
+
+  private static Reference markedDownTo(int row) {
+    return SmallSights.staff(
+        1000.0, Quantity.held(0.0), new ImageBox(8, 60, SmallSights.WIDTH_PX - 9, row));
+  }
+
+  @Test
+  void theHeightOfStubbleIsFoundFromTheGroundsEdge() {
+    Sight open =
+        SmallSights.sight(
+            SmallSights.camera(Quantity.prior(0, 2e-3)),
+            Quantity.free(0.005).within(0.0, 0.3),
+            SmallSights.open(),
+            markedDownTo(396));
+    FitResult result =
+        new SightFit().fit(open, Optional.of(SmallSights.stillPhoto(skin(0.03, 7.0))));
+    assertThat(result.status()).isEqualTo(FitStatus.GOOD);
+    int blocked = result.estimates().names().indexOf("path.blockedBelowM");
+    assertThat(result.estimates().values()[blocked]).isCloseTo(0.03, within(2e-3));
+    assertThat(result.estimates().sigmas()[blocked]).isLessThan(5e-3);
+  }
+
   @Test
   void aFlatPhotoASteepRampAndABoxOfOneRowFailInsteadOfCrashing() {
     Photo black = StripPhotos.of(SmallSights.WIDTH_PX, SmallSights.HEIGHT_PX, v -> 0.0);

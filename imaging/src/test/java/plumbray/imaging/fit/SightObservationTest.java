@@ -22,6 +22,7 @@ import plumbray.calibration.sight.SenseWanted;
 import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.SightParameters;
 import plumbray.imaging.reading.EdgeImage;
+import plumbray.imaging.reading.GroundEdge;
 import plumbray.imaging.reading.ReferenceObservation;
 import plumbray.imaging.reading.Shimmer;
 import plumbray.imaging.reading.StaffObservation;
@@ -50,6 +51,7 @@ class SightObservationTest {
       case "camera.heightM", "references[0].footM" -> 0.013;
       case "camera.pitchRad" -> 2e-5;
       case "camera.rollRad" -> 2e-3;
+      case "path.blockedBelowM" -> 1e-3;
       case "profile.surfaceExcessK", "profile.stepK" -> 0.5;
       case "profile.scaleHeightM" -> 0.02;
       case "profile.centreM", "profile.halfWidthM" -> 0.1;
@@ -125,6 +127,43 @@ class SightObservationTest {
             edges,
             new Shimmer(0.2, 30.0));
     agree(new SightObservation(parameters, List.of(staff), TIGHT_PX));
+  }
+
+  @Test
+  void theGroundsEdgeMovesAsItsDerivativesSay() {
+    ProfileSetup skin =
+        SmallSights.profile(
+            ProfileFamily.EXPONENTIAL,
+            Quantity.free(5.0),
+            Quantity.free(0.05),
+            Quantity.free(-0.01));
+    Reference far =
+        SmallSights.staff(
+            1000.0, Quantity.free(0.05), new ImageBox(4, 60, 20, SmallSights.HEIGHT_PX - 2));
+    Sight sight = SmallSights.sight(wobbly(), Quantity.free(0.002), skin, far);
+    SightParameters parameters = SightParameters.of(sight);
+    References references =
+        References.read(
+            sight, Optional.of(SmallSights.stillPhoto(parameters.heldAt(parameters.values()))));
+    StaffScene scene = references.staffs().get(0);
+    FitTrace trace =
+        new SightObservation(parameters, List.of(still(scene)), TIGHT_PX)
+            .trace(parameters.values(), false);
+    List<EdgeImage> ground = scene.groundEdges(trace);
+    assertThat(ground).hasSize(1);
+    GroundEdge found = new GroundEdge(ground.get(0).image(), ground.get(0).row());
+    StripModelSettings nearIt =
+        new StripModelSettings(
+            Arrays.stream(scene.rowsInUse(trace, List.of(found), 8.0)).toArray(),
+            FamilyFit.even(scene, 1.0),
+            0.8);
+    StaffObservation staff =
+        StaffObservation.shimmering(scene, nearIt, ground, new Shimmer(0.2, 30.0));
+    SightObservation observation = new SightObservation(parameters, List.of(staff), TIGHT_PX);
+    assertThat(observation.allParameters())
+        .extracting(Parameter::name)
+        .contains("path.blockedBelowM");
+    agree(observation);
   }
 
   private static StaffObservation still(StaffScene scene) {

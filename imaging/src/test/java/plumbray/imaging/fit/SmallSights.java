@@ -121,10 +121,16 @@ public final class SmallSights {
 
   /** A sight along level ground. */
   public static Sight sight(CameraSetup camera, ProfileSetup profile, Reference... references) {
+    return sight(camera, Quantity.held(0), profile, references);
+  }
+
+  /** A sight along level ground on which something stops rays below a height. */
+  public static Sight sight(
+      CameraSetup camera, Quantity blockedBelowM, ProfileSetup profile, Reference... references) {
     return new Sight(
         "small",
         camera,
-        new PathSetup(6_371_000, GroundProfile.level(), Quantity.held(0)),
+        new PathSetup(6_371_000, GroundProfile.level(), blockedBelowM),
         new AirSetup(
             Quantity.held(304.65),
             CAMERA_M,
