@@ -91,14 +91,24 @@ class SamplePhotosTest {
     }
   }
 
-  /** Where one layer holds all of the excess; two layers share theirs less surely. */
   @ParameterizedTest
-  @ValueSource(strings = {"morning", "noon"})
-  void theGroundsExcessIsKnownToAFewPercent(String name) {
+  @ValueSource(strings = {"morning", "noon", "afternoon"})
+  void theGroundsExcessAndAllTemperaturesAreKnownToAFewPercentOfIt(String name) {
     Sample sample = samples.get(name);
     double found = excess(sample.result().sight());
     double truth = excess(sample.truth());
     assertThat(found).isCloseTo(truth, within(EXCESS * truth));
+    AirColumn air = SightOptics.column(sample.truth(), List.of());
+    double camera = sample.truth().camera().heightM().value();
+    double whole = air.temperatureK(0.0) - air.temperatureK(camera);
+    for (TemperatureRow row :
+        TemperatureRow.of(sample.result().sight(), sample.result().estimates())) {
+      if (row.heightM() <= camera) {
+        assertThat(row.temperatureK())
+            .as("at %.3f m", row.heightM())
+            .isCloseTo(air.temperatureK(row.heightM()), within(EXCESS * whole));
+      }
+    }
   }
 
   private static double excess(Sight sight) {
