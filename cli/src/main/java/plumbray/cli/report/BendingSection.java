@@ -13,6 +13,7 @@ import plumbray.cli.report.plot.Plot;
 import plumbray.cli.report.plot.Stroke;
 import plumbray.cli.report.plot.Stroke.Dash;
 import plumbray.imaging.diagnosis.TargetRay;
+import plumbray.imaging.fit.SightOptics;
 import plumbray.raymodel.mapping.Sense;
 import plumbray.raymodel.mapping.SightMapping;
 
@@ -23,14 +24,17 @@ final class BendingSection implements Section {
   private static final double HEIGHT_PX = 330;
   private static final List<Ink> INKS = List.of(Ink.BLUE, Ink.VERMILION, Ink.GREEN);
 
-  private final SightFindings findings;
+  private final SightOptics optics;
 
-  BendingSection(SightFindings findings) {
-    this.findings = findings;
+  BendingSection(SightOptics optics) {
+    this.optics = optics;
   }
 
   @Override
   public void addTo(Markup page) {
+    if (ShownDistances.seen(optics).isEmpty()) {
+      return;
+    }
     page.open("section");
     page.leaf("h2", "Bending along the way");
     page.leaf(
@@ -39,9 +43,8 @@ final class BendingSection implements Section {
             + " the ray is concave to the ground, at 1 it follows the curvature of the Earth, below 0"
             + " it is convex to the ground. The scale of k is by the square root.");
     page.open("div", "class", "pair");
-    double camera = findings.optics().sight().camera().heightM().value();
-    for (SightMapping mapping : ShownDistances.of(findings.optics())) {
-      List<TargetRay> rays = PickedRays.of(findings.targetsAt(mapping), camera);
+    for (SightMapping mapping : ShownDistances.seen(optics)) {
+      List<TargetRay> rays = PickedRays.of(optics, mapping);
       if (!rays.isEmpty()) {
         page.open("div");
         page.leaf("h3", "To " + Metres.text(mapping.distanceM()));

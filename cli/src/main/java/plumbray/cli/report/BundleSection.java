@@ -44,6 +44,9 @@ final class BundleSection implements Section {
 
   @Override
   public void addTo(Markup page) {
+    if (ShownDistances.seen(optics).isEmpty()) {
+      return;
+    }
     page.open("section");
     page.leaf("h2", "The ways of the light");
     page.leaf(
@@ -51,7 +54,7 @@ final class BundleSection implements Section {
         "Rays from the camera, at the left, to evenly spaced heights at the distance, and some that"
             + " end in the ground before. Heights are much exaggerated. Where two rays meet at the"
             + " right, one thing is seen twice.");
-    for (SightMapping mapping : ShownDistances.of(optics)) {
+    for (SightMapping mapping : ShownDistances.seen(optics)) {
       page.leaf("h3", "To " + Metres.text(mapping.distanceM()));
       page.add(plot(mapping).svg(WIDTH_PX, HEIGHT_PX));
     }

@@ -40,6 +40,9 @@ final class FeltSection implements Section {
 
   @Override
   public void addTo(Markup page) {
+    if (ShownDistances.seen(optics).isEmpty()) {
+      return;
+    }
     page.open("section");
     page.leaf("h2", "Heights that the light feels");
     page.leaf(
@@ -48,7 +51,7 @@ final class FeltSection implements Section {
             + " distance s from the camera shifts a thing at D by its angle times D \u2212 s, so"
             + " that air near the camera counts most. The bands hold half, and nine tenths, of that"
             + " weight.");
-    for (SightMapping mapping : ShownDistances.of(optics)) {
+    for (SightMapping mapping : ShownDistances.seen(optics)) {
       page.leaf("h3", "To " + Metres.text(mapping.distanceM()));
       page.open("div", "class", "pair");
       page.open("div").add(plot(mapping).svg(WIDTH_PX, HEIGHT_PX)).close();

@@ -43,7 +43,7 @@ final class FringeSection implements Section {
 
   @Override
   public void addTo(Markup page) {
-    if (rows.isEmpty()) {
+    if (rows.isEmpty() || ShownDistances.seen(optics).isEmpty()) {
       return;
     }
     page.open("section");
@@ -57,7 +57,7 @@ final class FringeSection implements Section {
             + " nm each shows the same height; what is negative is seen higher. Broken lines belong"
             + " to the inverted image.");
     page.open("div", "class", "pair");
-    for (SightMapping mapping : ShownDistances.of(optics)) {
+    for (SightMapping mapping : ShownDistances.seen(optics)) {
       page.open("div");
       page.leaf("h3", "At " + Metres.text(mapping.distanceM()));
       page.add(plot(mapping).svg(WIDTH_PX, HEIGHT_PX)).close();

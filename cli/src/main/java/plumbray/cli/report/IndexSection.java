@@ -90,7 +90,7 @@ final class IndexSection implements Section {
     return plot(
         "Refraction coefficient k",
         AxisKind.SQUARE_ROOT,
-        z -> -radius * column.logIndexGradientPerM(z),
+        z -> column.refractionCoefficient(z, radius),
         zones,
         List.of(straight));
   }

@@ -16,15 +16,12 @@ import plumbray.cli.report.plot.Stroke;
 import plumbray.cli.report.plot.Stroke.Dash;
 import plumbray.imaging.diagnosis.TargetHeights;
 import plumbray.imaging.fit.SightOptics;
+import plumbray.imaging.measure.Magnification;
 import plumbray.raymodel.mapping.Branch;
 import plumbray.raymodel.mapping.Sense;
 import plumbray.raymodel.mapping.SightMapping;
-import plumbray.raymodel.ray.StraightRay;
 
-/**
- * How much larger than straight rays would the air shows things upwards: d(apparent elevation) over
- * d(straight elevation), negative where the image stands on its head.
- */
+/** How much larger than they are the air shows things upwards. */
 final class MagnificationSection implements Section {
 
   private static final double WIDTH_PX = 430;
@@ -40,9 +37,6 @@ final class MagnificationSection implements Section {
   /** Curves are broken off this many times as far out, where only rounding is left. */
   private static final double FAR = 20.0;
 
-  /** Step of the differences of the closed-form straight ray, in parts of the distance. */
-  private static final double STEP = 1e-4;
-
   private final SightOptics optics;
 
   MagnificationSection(SightOptics optics) {
@@ -51,6 +45,9 @@ final class MagnificationSection implements Section {
 
   @Override
   public void addTo(Markup page) {
+    if (ShownDistances.seen(optics).isEmpty()) {
+      return;
+    }
     page.open("section");
     page.leaf("h2", "Magnification");
     page.leaf(
@@ -62,7 +59,7 @@ final class MagnificationSection implements Section {
             + ": 1 as they are, less where the air squeezes them, negative where they stand on"
             + " their heads. At the vanishing line it grows without bound.");
     page.open("div", "class", "pair");
-    for (SightMapping mapping : ShownDistances.of(optics)) {
+    for (SightMapping mapping : ShownDistances.seen(optics)) {
       page.open("div");
       page.leaf("h3", "At " + Metres.text(mapping.distanceM()));
       page.add(plot(mapping).svg(WIDTH_PX, HEIGHT_PX)).close();
@@ -138,14 +135,7 @@ final class MagnificationSection implements Section {
   }
 
   private double magnification(double distanceM, Branch branch, double apparentRad) {
-    StraightRay straight = optics.straight();
-    double elevation = branch.elevationM(apparentRad);
-    double step = STEP * distanceM;
-    double straightPerM =
-        (straight.apparentRad(elevation + step, distanceM)
-                - straight.apparentRad(elevation - step, distanceM))
-            / (2.0 * step);
-    double magnification = 1.0 / (branch.slopeMPerRad(apparentRad) * straightPerM);
-    return Math.abs(magnification) < FAR * MOST ? magnification : Double.NaN;
+    double value = new Magnification(optics.straight(), distanceM).at(branch, apparentRad);
+    return Math.abs(value) < FAR * MOST ? value : Double.NaN;
   }
 }

@@ -3,6 +3,7 @@ package plumbray.cli.report;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import plumbray.imaging.diagnosis.StretchZones;
 import plumbray.imaging.fit.FitResult;
 import plumbray.imaging.fit.FitStatus;
 import plumbray.imaging.fit.SightLine;
@@ -45,6 +46,7 @@ public final class PhotoReport {
 
   private void addAir(List<Section> sections, SightOptics optics, List<SightLine> lines) {
     FitResult result = input.result();
+    sections.add(new PlainWords(optics, StretchZones.of(result.sight())));
     sections.add(new MappingSection(optics));
     sections.add(new DisplacementSection(optics, result.estimates()));
     sections.add(new SightLineSection(lines));

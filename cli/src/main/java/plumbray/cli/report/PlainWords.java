@@ -9,6 +9,7 @@ import plumbray.cli.report.markup.Markup;
 import plumbray.cli.report.markup.NumberText;
 import plumbray.imaging.diagnosis.StretchZones;
 import plumbray.imaging.diagnosis.TargetRay;
+import plumbray.imaging.fit.SightOptics;
 import plumbray.raymodel.diagnosis.Bend;
 import plumbray.raymodel.mapping.Sense;
 import plumbray.raymodel.mapping.SightMapping;
@@ -21,10 +22,12 @@ final class PlainWords implements Section {
   private static final Map<Sense, String> SENSES =
       Map.of(Sense.UPRIGHT, "upright", Sense.INVERTED, "inverted");
 
-  private final SightFindings findings;
+  private final SightOptics optics;
+  private final List<StretchZones> steep;
 
-  PlainWords(SightFindings findings) {
-    this.findings = findings;
+  PlainWords(SightOptics optics, List<StretchZones> steep) {
+    this.optics = optics;
+    this.steep = steep;
   }
 
   @Override
@@ -32,15 +35,19 @@ final class PlainWords implements Section {
     page.open("section");
     page.leaf("h2", "In plain words");
     page.open("ul", "class", "words");
-    findings.steep().forEach(stretch -> page.leaf("li", steep(stretch)));
-    ShownDistances.of(findings.optics()).forEach(mapping -> addDistance(page, mapping));
+    steep.forEach(stretch -> page.leaf("li", steep(stretch)));
+    ShownDistances.of(optics).forEach(mapping -> addDistance(page, mapping));
     page.close().close();
   }
 
   private void addDistance(Markup page, SightMapping mapping) {
-    double camera = findings.optics().sight().camera().heightM().value();
+    List<TargetRay> rays = PickedRays.of(optics, mapping);
+    if (rays.isEmpty()) {
+      page.leaf(
+          "li", "Nothing is seen at " + Metres.text(mapping.distanceM()) + " in the picture.");
+    }
     Map<Double, List<TargetRay>> byHeight =
-        PickedRays.of(findings.targetsAt(mapping), camera).stream()
+        rays.stream()
             .collect(Collectors.groupingBy(TargetRay::heightM, TreeMap::new, Collectors.toList()));
     byHeight.forEach(
         (height, images) -> page.leaf("li", line(mapping, height, images) + felt(images)));
@@ -63,7 +70,7 @@ final class PlainWords implements Section {
   }
 
   private String steep(StretchZones stretch) {
-    boolean one = findings.steep().size() == 1;
+    boolean one = steep.size() == 1;
     String where = one ? "The air is " : ZoneWords.from(stretch.fromM()) + " the air is ";
     String zones = ZoneWords.of(stretch.zones());
     return stretch.zones().isEmpty()

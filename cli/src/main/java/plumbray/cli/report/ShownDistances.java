@@ -22,6 +22,11 @@ final class ShownDistances {
     return referred.isEmpty() ? all.subList(all.size() - 1, all.size()) : referred;
   }
 
+  /** Those of them of which the picture shows anything. */
+  static List<SightMapping> seen(SightOptics optics) {
+    return of(optics).stream().filter(mapping -> !mapping.branches().isEmpty()).toList();
+  }
+
   /** Whether a reference stands at the distance. */
   static boolean holdsReference(SightOptics optics, SightMapping mapping) {
     return optics.sight().references().stream()

@@ -32,7 +32,7 @@ public final class SightReport {
     Sight sight = optics.sight();
     List<Section> sections = new ArrayList<>();
     sections.add(SightReport::lead);
-    sections.add(new PlainWords(findings));
+    sections.add(new PlainWords(optics, findings.steep()));
     sections.add(new SightLineSection(findings.lines()));
     sections.add(new BundleSection(optics));
     sections.add(new MappingSection(optics));
@@ -40,7 +40,7 @@ public final class SightReport {
     sections.add(new DisplacementSection(optics, findings.known()));
     sections.add(new FringeSection(optics, findings.channels()));
     sections.add(new FeltSection(findings));
-    sections.add(new BendingSection(findings));
+    sections.add(new BendingSection(optics));
     sections.addAll(AirSection.of(sight, findings.known()));
     sections.add(new IndexSection(sight, findings.steep()));
     sections.add(new GivenSection(sight, List.of()));

@@ -20,6 +20,9 @@ public final class RayBundle {
   /** A ray lowest beyond this part of the way shows the foot of the thing and does not graze. */
   private static final double BEFORE_FOOT = 0.97;
 
+  /** Rays that come so near to the ground, in parts of the camera's height, touch it. */
+  private static final double TOUCHING = 0.02;
+
   /** Grazing rays are followed by this part of a pixel to the side on which they pass. */
   private static final double INSIDE_PX = 1e-4;
 
@@ -97,7 +100,11 @@ public final class RayBundle {
   private void addWhereGrazing(double apparentRad, List<BundleRay> into) {
     RayPath path = rays.follow(apparentRad);
     double lowestAt = path.distancesM()[path.lowestPlace()];
-    if (lowestAt < BEFORE_FOOT * mapping.distanceM()) {
+    double lowest = path.heightsM()[path.lowestPlace()];
+    double touching =
+        optics.sight().path().blockedBelowM().value()
+            + TOUCHING * optics.sight().camera().heightM().value();
+    if (lowest < touching && lowestAt < BEFORE_FOOT * mapping.distanceM()) {
       into.add(new BundleRay(Role.GRAZING, path));
     }
   }

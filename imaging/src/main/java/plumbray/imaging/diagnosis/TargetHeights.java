@@ -18,11 +18,14 @@ public final class TargetHeights {
   private static final double ABOVE_STAFF = 1.05;
   private static final double ABOVE_FOLD = 1.2;
 
+  private static final double ABOVE_LOWEST = 1.5;
+
   /** Images far above the camera are looked at up to this many times the usual height. */
   private static final double MOST = 8.0;
 
   private static final double[] ROUND_M = {
-    0.1, 0.2, 0.3, 0.5, 0.75, 1.0, 1.5, 2.0, 3.0, 5.0, 7.5, 10.0, 15.0, 20.0, 30.0, 50.0, 100.0
+    0.1, 0.2, 0.3, 0.5, 0.75, 1.0, 1.5, 2.0, 3.0, 5.0, 7.5, 10.0, 15.0, 20.0, 30.0, 50.0, 100.0,
+    200.0, 500.0
   };
 
   private TargetHeights() {}
@@ -30,11 +33,13 @@ public final class TargetHeights {
   /**
    * Greatest height above the ground that is of interest at a distance, m: so many times the
    * camera's, and up to the tops of staffs, and to where an inverted image meets an upright one
-   * below it.
+   * below it, and beyond the lowest height seen.
    */
   public static double topM(Sight sight, SightMapping mapping) {
     double usual = REACH * sight.camera().heightM().value();
     double top = Math.min(MOST * usual, Math.max(usual, ABOVE_FOLD * foldM(mapping)));
+    double lowest = mapping.lowestVisibleElevationM().orElse(mapping.groundM());
+    top = Math.max(top, ABOVE_LOWEST * (lowest - mapping.groundM()));
     double distanceM = mapping.distanceM();
     for (Reference reference : sight.references()) {
       if (reference.distanceM() == distanceM && reference.kind() instanceof StaffTarget staff) {

@@ -29,8 +29,10 @@ public record SightLine(
   /** One entry a distance in use. */
   public static List<SightLine> of(SightOptics optics) {
     double k =
-        -optics.sight().path().earthRadiusM()
-            * optics.column().logIndexGradientPerM(optics.sight().camera().heightM().value());
+        optics
+            .column()
+            .refractionCoefficient(
+                optics.sight().camera().heightM().value(), optics.sight().path().earthRadiusM());
     return optics.mappings().stream().map(m -> of(optics, m, k)).toList();
   }
 

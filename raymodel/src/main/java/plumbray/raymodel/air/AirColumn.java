@@ -197,6 +197,14 @@ public final class AirColumn implements Medium {
     return law.refractivity(temperatureK(heightM), pressurePa(heightM));
   }
 
+  /**
+   * Refraction coefficient of level light, -R d(ln n)/dz: positive where it is curved like the
+   * Earth, of radius R (m).
+   */
+  public double refractionCoefficient(double heightM, double earthRadiusM) {
+    return -earthRadiusM * logIndexGradientPerM(heightM);
+  }
+
   /** d ln n/dz, 1/m. */
   public double logIndexGradientPerM(double heightM) {
     double[] out = new double[3 + 2 * parameterCount()];

@@ -18,6 +18,9 @@ public final class Plot {
   private static final double RIGHT_PX = 14.0;
   private static final double LABEL_PX = 24.0;
 
+  /** Part of a label that may reach beyond the end of its axis: half, and some to be safe. */
+  private static final double OVERHANG = 0.62;
+
   private final String title;
   private final Axis x;
   private final Axis y;
@@ -43,7 +46,9 @@ public final class Plot {
     double left =
         LABEL_PX + TICK_PX + up.stream().mapToDouble(t -> TextWidth.px(t.label())).max().orElse(0);
     double right =
-        across.stream().mapToDouble(t -> TextWidth.px(t.label()) / 2.0).reduce(RIGHT_PX, Math::max);
+        across.stream()
+            .mapToDouble(t -> OVERHANG * TextWidth.px(t.label()))
+            .reduce(RIGHT_PX, Math::max);
     Legend legend = new Legend(marks, widthPx - left - right);
     double top = ABOVE_PX + legend.heightPx();
     Frame frame = new Frame(x, y, widthPx - left - right, heightPx - top - BELOW_PX);
