@@ -1,10 +1,14 @@
 package plumbray.imaging.photo;
 
 import java.io.ByteArrayOutputStream;
-import java.nio.charset.StandardCharsets;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.TreeMap;
+import plumbray.imaging.metadata.ExifBlock;
+import plumbray.imaging.metadata.Resolution;
 import plumbray.imaging.photo.JpegSegments.Segment;
 
 /**
@@ -15,12 +19,16 @@ import plumbray.imaging.photo.JpegSegments.Segment;
  * JFIF nor Adobe says what three components mean, which is then YCbCr, as cameras write it.
  */
 final class JpegFile {
-  private static final String EXIF = "Exif\0\0";
+  static final String EXIF = "Exif\0\0";
+  static final String XMP = "http://ns.adobe.com/xap/1.0/\0";
+  static final String XMP_EXTENSION = "http://ns.adobe.com/xmp/extension/\0";
+  static final String PROFILE = "ICC_PROFILE\0";
+  private static final String JFIF = "JFIF\0";
   private static final String ADOBE = "Adobe";
-  private static final String PROFILE = "ICC_PROFILE\0";
   private static final int PROFILE_HEADER = PROFILE.length() + 2;
-  private static final int PROFILE_PART_MOST = 65519;
   private static final int PRECISION = 8;
+  private static final int BLOCK_PIXELS = 64;
+  private static final int JFIF_BYTES = 12;
   private static final byte[] START = {(byte) 0xff, (byte) JpegSegments.SOI};
   private static final byte[] JFIF_SEGMENT = {
     (byte) 0xff, (byte) JpegSegments.APP0, 0, 16, 'J', 'F', 'I', 'F', 0, 1, 2, 0, 0, 1, 0, 1, 0, 0
@@ -29,11 +37,14 @@ final class JpegFile {
   private final byte[] file;
   private final JpegSegments segments;
   private final byte[] frame;
+  private final JpegCoding coding;
 
-  private JpegFile(byte[] file, JpegSegments segments, byte[] frame) {
+  private JpegFile(byte[] file, JpegSegments segments, byte[] frame) throws UnreadableException {
     this.file = file;
     this.segments = segments;
     this.frame = frame;
+    requireSupported();
+    this.coding = JpegCoding.of(frame, segments);
   }
 
   static JpegFile of(byte[] file) throws UnreadableException {
@@ -49,13 +60,11 @@ final class JpegFile {
     if (frame == null || frame.length < 9 || !scan) {
       throw UnreadableException.broken("a JPEG without picture data");
     }
-    JpegFile jpeg = new JpegFile(file, segments, frame);
-    jpeg.requireSupported();
-    return jpeg;
+    return new JpegFile(file, segments, frame);
   }
 
   private void requireSupported() throws UnreadableException {
-    int components = frame[5] & 0xff;
+    int components = components();
     if (components != 1 && components != 3) {
       throw UnreadableException.unsupported(
           components == 4 ? "CMYK colours" : components + " colour components");
@@ -65,18 +74,87 @@ final class JpegFile {
     }
   }
 
+  private int components() {
+    return frame[5] & 0xff;
+  }
+
   FileFacts facts() {
     int height = (frame[1] & 0xff) << 8 | frame[2] & 0xff;
     int width = (frame[3] & 0xff) << 8 | frame[4] & 0xff;
-    return new FileFacts(width, height, orientation(), iccProfile());
+    // every block of 8 x 8 samples takes one bit at least
+    double blocks = (double) width * height / BLOCK_PIXELS * coding.samplesPerPixel();
+    boolean filled = blocks / 8 <= file.length;
+    PhotoMetadata metadata = metadata();
+    Orientation orientation =
+        metadata.exif().map(e -> new Orientation(e.orientation())).orElse(Orientation.AS_STORED);
+    return new FileFacts(width, height, components(), filled, orientation, metadata);
   }
 
-  private Orientation orientation() {
+  /** Grey, or red green blue. */
+  PhotoShape shape(FileFacts facts) {
+    return new PhotoShape(facts.widthPx(), facts.heightPx(), components(), PRECISION);
+  }
+
+  private PhotoMetadata metadata() {
+    PhotoMetadata metadata =
+        PhotoMetadata.none()
+            .withPieces(pieces())
+            .withCoding(new FileCoding(Optional.of(coding), true));
+    metadata = iccProfile().map(metadata::withIccProfile).orElse(metadata);
+    metadata =
+        named(JpegSegments.APP1, EXIF)
+            .flatMap(ExifBlock::of)
+            .map(metadata::withExif)
+            .orElse(metadata);
+    metadata = resolution().map(metadata::withResolution).orElse(metadata);
+    return named(JpegSegments.APP1, XMP)
+        .map(c -> Arrays.copyOfRange(c, XMP.length(), c.length))
+        .map(metadata::withXmp)
+        .orElse(metadata);
+  }
+
+  private Optional<byte[]> named(int marker, String name) {
     return segments.all().stream()
-        .filter(s -> s.marker() == JpegSegments.APP1 && segments.isNamed(s, EXIF))
-        .map(s -> Orientation.ofExif(segments.content(s)))
-        .findFirst()
-        .orElse(Orientation.AS_STORED);
+        .filter(s -> s.marker() == marker && segments.isNamed(s, name))
+        .map(segments::content)
+        .findFirst();
+  }
+
+  /** The density of the JFIF header (ITU-T T.871, 10.1). */
+  private Optional<Resolution> resolution() {
+    return named(JpegSegments.APP0, JFIF)
+        .filter(c -> c.length >= JFIF_BYTES)
+        .flatMap(
+            c -> {
+              int across = (c[8] & 0xff) << 8 | c[9] & 0xff;
+              int down = (c[10] & 0xff) << 8 | c[11] & 0xff;
+              Resolution.Unit unit =
+                  switch (c[7]) {
+                    case 1 -> Resolution.Unit.INCH;
+                    case 2 -> Resolution.Unit.CENTIMETRE;
+                    default -> Resolution.Unit.NONE;
+                  };
+              boolean plain = unit == Resolution.Unit.NONE && across == 1 && down == 1;
+              return plain || across == 0 || down == 0
+                  ? Optional.empty()
+                  : Optional.of(new Resolution(unit, across, down));
+            });
+  }
+
+  /** Comments, captions and the further parts of a long XMP packet. */
+  private List<FilePiece> pieces() {
+    List<FilePiece> pieces = new ArrayList<>();
+    for (Segment segment : segments.all()) {
+      boolean carried =
+          segment.marker() == JpegSegments.COMMENT
+              || segment.marker() == JpegSegments.APP13
+              || segment.marker() == JpegSegments.APP1 && segments.isNamed(segment, XMP_EXTENSION);
+      if (carried) {
+        String marker = String.valueOf(segment.marker());
+        pieces.add(new FilePiece(PhotoFormat.JPEG, marker, segments.content(segment)));
+      }
+    }
+    return pieces;
   }
 
   /** The profile, put together from its numbered parts (ICC.1, annex B.4). */
@@ -127,30 +205,7 @@ final class JpegFile {
 
   /** Whether the components are called R, G and B, and no JFIF header says otherwise. */
   private boolean namesRgb() {
-    boolean jfif =
-        segments.all().stream()
-            .anyMatch(s -> s.marker() == JpegSegments.APP0 && segments.isNamed(s, "JFIF"));
+    boolean jfif = named(JpegSegments.APP0, "JFIF").isPresent();
     return !jfif && frame.length >= 15 && frame[6] == 'R' && frame[9] == 'G' && frame[12] == 'B';
-  }
-
-  /** An encoded JPEG with the profile put in behind its start and JFIF header. */
-  static byte[] withProfile(byte[] encoded, byte[] profile) throws UnreadableException {
-    Segment first = JpegSegments.of(encoded).all().get(0);
-    int split = first.marker() == JpegSegments.APP0 ? first.to() : START.length;
-    ByteArrayOutputStream out = new ByteArrayOutputStream(encoded.length + profile.length + 256);
-    out.write(encoded, 0, split);
-    int parts = (profile.length + PROFILE_PART_MOST - 1) / PROFILE_PART_MOST;
-    for (int part = 0; part < parts; part++) {
-      int from = part * PROFILE_PART_MOST;
-      int count = Math.min(PROFILE_PART_MOST, profile.length - from);
-      int length = 2 + PROFILE_HEADER + count;
-      out.writeBytes(new byte[] {(byte) 0xff, (byte) JpegSegments.APP2});
-      out.writeBytes(new byte[] {(byte) (length >> 8), (byte) length});
-      out.writeBytes(PROFILE.getBytes(StandardCharsets.ISO_8859_1));
-      out.writeBytes(new byte[] {(byte) (part + 1), (byte) parts});
-      out.write(profile, from, count);
-    }
-    out.write(encoded, split, encoded.length - split);
-    return out.toByteArray();
   }
 }

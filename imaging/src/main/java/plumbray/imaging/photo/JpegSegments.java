@@ -10,12 +10,14 @@ final class JpegSegments {
   static final int SOI = 0xd8;
   static final int EOI = 0xd9;
   static final int SOS = 0xda;
+  static final int DQT = 0xdb;
   static final int APP0 = 0xe0;
   static final int APP1 = 0xe1;
   static final int APP2 = 0xe2;
+  static final int APP13 = 0xed;
   static final int APP14 = 0xee;
+  static final int COMMENT = 0xfe;
   private static final int APP15 = 0xef;
-  private static final int COMMENT = 0xfe;
   private static final int MARKER_BYTES = 2;
   private static final int HEADER_BYTES = 4;
 

@@ -1,6 +1,8 @@
 package plumbray.imaging.photo;
 
 import java.util.Arrays;
+import java.util.Optional;
+import plumbray.imaging.light.LightLaw;
 
 /** A photo in memory: unsigned samples of 8 or 16 bit, as they stand in the file. Immutable. */
 public final class Photo {
@@ -78,20 +80,20 @@ public final class Photo {
   }
 
   /**
-   * Linear-light luminance of a box, relative to white: samples decoded as sRGB, colours weighted
-   * by Rec. 709; alpha is not looked at.
+   * Linear-light luminance of a box, relative to white: by the embedded colour profile, or as sRGB
+   * where there is none that can be used; alpha is not looked at.
    *
    * @throws IllegalArgumentException where the box reaches beyond the photo
    */
   public GreyPlane linearLuminance(PixelBox box) {
     box.requireInside(shape);
-    float[] light = LinearLight.ofSample(shape.bits());
+    float[][] luminances = luminances();
     float[] values = new float[box.widthPx() * box.heightPx()];
     int next = 0;
     for (int y = box.topPx(); y < box.topPx() + box.heightPx(); y++) {
       int at = index(box.leftPx(), y);
       for (int x = 0; x < box.widthPx(); x++, at += shape.channels()) {
-        values[next++] = luminanceAt(at, light);
+        values[next++] = luminanceAt(at, luminances);
       }
     }
     return new GreyPlane(box.widthPx(), box.heightPx(), values);
@@ -107,11 +109,33 @@ public final class Photo {
     return new Photo(shape, other, samples());
   }
 
-  private float luminanceAt(int at, float[] light) {
-    float first = light[sampleAt(at)];
-    return shape.lightChannels() == 1
-        ? first
-        : LinearLight.luminance(first, light[sampleAt(at + 1)], light[sampleAt(at + 2)]);
+  /** Why the embedded colour profile is not used for the luminance, in one line. */
+  public Optional<String> profileComplaint() {
+    return light().complaint();
+  }
+
+  private LightLaw light() {
+    return metadata
+        .iccProfile()
+        .map(profile -> LightLaw.of(profile, shape.lightChannels()))
+        .orElseGet(() -> LightLaw.srgb(shape.lightChannels()));
+  }
+
+  private float[][] luminances() {
+    LightLaw light = light();
+    float[][] luminances = new float[shape.lightChannels()][];
+    for (int c = 0; c < luminances.length; c++) {
+      luminances[c] = light.luminances(c, shape.bits());
+    }
+    return luminances;
+  }
+
+  private float luminanceAt(int at, float[]... luminances) {
+    float sum = luminances[0][sampleAt(at)];
+    for (int c = 1; c < luminances.length; c++) {
+      sum += luminances[c][sampleAt(at + c)];
+    }
+    return sum;
   }
 
   private int sampleAt(int index) {

@@ -1,7 +1,6 @@
 package plumbray.imaging.photo;
 
 import java.awt.image.BufferedImage;
-import java.io.ByteArrayInputStream;
 import java.io.EOFException;
 import java.io.IOException;
 import java.nio.file.Files;
@@ -10,17 +9,16 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
+import javax.imageio.ImageReadParam;
 import javax.imageio.ImageReader;
-import javax.imageio.stream.FileImageInputStream;
 import javax.imageio.stream.ImageInputStream;
-import javax.imageio.stream.MemoryCacheImageInputStream;
 
 /**
  * Reads photos: JPEG, PNG and TIFF, told apart by their first bytes, not by their names.
  *
  * <p>Grey and colour, 8 and 16 bit, with or without alpha, samples exactly as stored; palettes are
- * written out, a stored orientation is undone. A file that is damaged, cut short or of another kind
- * is refused, never half read.
+ * written out, a stored orientation is undone. A file that is damaged, cut short, too large for the
+ * memory or of another kind is refused, never half read.
  */
 public final class PhotoReader {
   /** Most pixels; above what cameras and stitched panoramas have, and below what harms. */
@@ -39,10 +37,7 @@ public final class PhotoReader {
    */
   public static Photo read(Path file) throws PhotoException {
     try {
-      if (!Files.isRegularFile(file)) {
-        throw new UnreadableException("is not a file", "name an existing photo");
-      }
-      return readAs(formatOf(file), file);
+      return readChecked(file);
     } catch (UnreadableException e) {
       throw new PhotoException(file, e.getMessage(), e.whatToDo(), e);
     } catch (EOFException e) {
@@ -53,6 +48,19 @@ public final class PhotoReader {
     }
   }
 
+  private static Photo readChecked(Path file) throws IOException, UnreadableException {
+    if (!Files.isRegularFile(file)) {
+      throw new UnreadableException("is not a file", "name an existing photo");
+    }
+    PhotoFormat format = formatOf(file);
+    try {
+      return readAs(format, file);
+    } catch (OutOfMemoryError e) {
+      // Only the photo's own few large arrays can be meant, and they are garbage by now.
+      throw HeapRoom.usedUp();
+    }
+  }
+
   private static PhotoFormat formatOf(Path file) throws IOException, UnreadableException {
     byte[] start;
     try (var in = Files.newInputStream(file)) {
@@ -60,6 +68,10 @@ public final class PhotoReader {
     }
     if (start.length == 0) {
       throw new UnreadableException("is empty", COPY_AGAIN);
+    }
+    if (startsWith(start, 'I', 'I', 43, 0) || startsWith(start, 'M', 'M', 0, 43)) {
+      throw new UnreadableException(
+          "is a BigTIFF, which is not supported", "save it as a plain TIFF");
     }
     return signature(start)
         .orElseThrow(
@@ -91,7 +103,7 @@ public final class PhotoReader {
   private static Photo readAs(PhotoFormat format, Path file)
       throws IOException, UnreadableException {
     if (format == PhotoFormat.TIFF) {
-      return readTiff(file);
+      return new TiffReading(file).read();
     }
     if (Files.size(file) > FILE_BYTES_MOST) {
       throw new UnreadableException("is larger than 2 GB", "use a smaller photo");
@@ -100,46 +112,45 @@ public final class PhotoReader {
     return format == PhotoFormat.JPEG ? readJpeg(bytes) : readPng(bytes);
   }
 
+  /** The decoder writes straight into the photo's own samples. */
   private static Photo readJpeg(byte[] bytes) throws IOException, UnreadableException {
     JpegFile jpeg = JpegFile.of(bytes);
     FileFacts facts = checkedSize(jpeg.facts());
-    return decode(PhotoFormat.JPEG, jpeg.pixelsOnly(), facts);
+    PhotoShape shape = jpeg.shape(facts);
+    byte[] samples = new byte[shape.samples()];
+    ImageReader reader = Codecs.reader(PhotoFormat.JPEG);
+    try (ImageInputStream in = new ArrayImageInput(jpeg.pixelsOnly())) {
+      reader.setInput(in, true, true);
+      ImageReadParam param = reader.getDefaultReadParam();
+      param.setDestination(ImageView.of(shape, samples));
+      undamaged(reader, param);
+    } finally {
+      reader.dispose();
+    }
+    return facts.orientation().upright(new Photo(shape, facts.metadata(), samples));
   }
 
   private static Photo readPng(byte[] bytes) throws IOException, UnreadableException {
-    return decode(PhotoFormat.PNG, bytes, checkedSize(PngFile.facts(bytes)));
-  }
-
-  private static Photo decode(PhotoFormat format, byte[] bytes, FileFacts facts)
-      throws IOException, UnreadableException {
-    ImageReader reader = Codecs.reader(format);
-    try (ImageInputStream in = new MemoryCacheImageInputStream(new ByteArrayInputStream(bytes))) {
+    FileFacts facts = checkedSize(PngFile.facts(bytes));
+    ImageReader reader = Codecs.reader(PhotoFormat.PNG);
+    try (ImageInputStream in = new ArrayImageInput(bytes)) {
       reader.setInput(in, true, true);
-      return pixels(reader, facts);
+      BufferedImage image = undamaged(reader, reader.getDefaultReadParam());
+      return facts.orientation().upright(RasterSamples.photo(image, facts.metadata()));
     } finally {
       reader.dispose();
     }
   }
 
-  private static Photo readTiff(Path file) throws IOException, UnreadableException {
-    ImageReader reader = Codecs.reader(PhotoFormat.TIFF);
-    try (ImageInputStream in = new FileImageInputStream(file.toFile())) {
-      reader.setInput(in, true, false);
-      return pixels(reader, checkedSize(TiffFile.facts(reader.getImageMetadata(0), in.length())));
-    } finally {
-      reader.dispose();
-    }
-  }
-
-  private static Photo pixels(ImageReader reader, FileFacts facts)
+  static BufferedImage undamaged(ImageReader reader, ImageReadParam param)
       throws IOException, UnreadableException {
     List<String> damage = new ArrayList<>();
     reader.addIIOReadWarningListener((source, warning) -> noteDamage(warning, damage));
-    BufferedImage image = reader.read(0);
+    BufferedImage image = reader.read(0, param);
     if (!damage.isEmpty()) {
       throw UnreadableException.broken(damage.get(0));
     }
-    return facts.orientation().upright(RasterSamples.photo(image, facts.metadata()));
+    return image;
   }
 
   /** The JPEG decoder only warns where it has filled damaged places; stray bytes are harmless. */
@@ -150,16 +161,23 @@ public final class PhotoReader {
     }
   }
 
-  private static FileFacts checkedSize(FileFacts facts) throws UnreadableException {
+  static FileFacts checkedSize(FileFacts facts) throws UnreadableException {
     if (facts.widthPx() < 1 || facts.heightPx() < 1) {
       throw UnreadableException.broken("a picture without size");
     }
-    if ((long) facts.widthPx() * facts.heightPx() > PIXELS_MOST) {
+    long pixels = (long) facts.widthPx() * facts.heightPx();
+    if (pixels > PIXELS_MOST) {
       throw new UnreadableException(
           "is %d x %d px, must be at most %d million px (size of a photo)"
               .formatted(facts.widthPx(), facts.heightPx(), PIXELS_MOST / 1_000_000),
           "cut it or scale it down");
     }
+    if (!facts.filled()) {
+      throw UnreadableException.broken("its data cannot fill the size it claims");
+    }
+    boolean turned = !facts.orientation().equals(Orientation.AS_STORED);
+    HeapRoom.require(
+        facts.widthPx(), facts.heightPx(), pixels * facts.bytesPerPixel() * (turned ? 2 : 1));
     return facts;
   }
 }

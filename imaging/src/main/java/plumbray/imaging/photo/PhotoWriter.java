@@ -23,7 +23,7 @@ public final class PhotoWriter {
    *     photo, or the file cannot be written
    */
   public static void write(Photo photo, Path file) throws PhotoException {
-    write(photo, file, PhotoEncoder.JPEG_QUALITY);
+    write(photo, file, WriteOptions.likeSource());
   }
 
   /**
@@ -34,11 +34,22 @@ public final class PhotoWriter {
    *     photo, or the file cannot be written
    */
   public static void write(Photo photo, Path file, double jpegQuality) throws PhotoException {
+    write(photo, file, WriteOptions.likeSource().withJpegQuality(jpegQuality));
+  }
+
+  /**
+   * Writes a photo, over an existing file of the name.
+   *
+   * @param options how to write it
+   * @throws PhotoException with one line where the name's format is unknown or cannot hold the
+   *     photo, or the file cannot be written
+   */
+  public static void write(Photo photo, Path file, WriteOptions options) throws PhotoException {
     PhotoFormat format = checkedFormat(photo.shape(), file);
     try {
       Path part = newPart(file);
       try {
-        PhotoEncoder.encode(photo, format, (float) jpegQuality, part);
+        PhotoEncoder.encode(photo, format, options, part);
         moveInto(part, file);
       } finally {
         Files.deleteIfExists(part);

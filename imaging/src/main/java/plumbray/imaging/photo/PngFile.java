@@ -1,19 +1,21 @@
 package plumbray.imaging.photo;
 
-import java.io.ByteArrayOutputStream;
 import java.nio.ByteBuffer;
 import java.nio.charset.StandardCharsets;
+import java.util.ArrayList;
 import java.util.Arrays;
-import java.util.Optional;
+import java.util.List;
+import java.util.Set;
 import java.util.zip.CRC32;
-import java.util.zip.DataFormatException;
-import java.util.zip.Deflater;
-import java.util.zip.Inflater;
+import plumbray.imaging.metadata.ExifBlock;
+import plumbray.imaging.metadata.Resolution;
 
 /** The chunks of a PNG file (W3C PNG specification, sections 5 and 11), checked before decoding. */
 final class PngFile {
   static final byte[] SIGNATURE = {(byte) 0x89, 'P', 'N', 'G', '\r', '\n', 0x1a, '\n'};
   private static final int HEADER_BYTES = 13;
+  private static final int RESOLUTION_BYTES = 9;
+  private static final int PALETTE = 3;
 
   /** Bytes of a chunk besides its data: length, name, checksum. */
   private static final int AROUND_DATA = 12;
@@ -21,15 +23,18 @@ final class PngFile {
   /** Deflate makes data at most 1032 times smaller, so a claimed size far above that is false. */
   private static final long DEFLATE_RATIO_MOST = 1100;
 
-  private static final int PROFILE_BYTES_MOST = 64 << 20;
+  /** What speaks of colours and in words; the rest belongs to the stored pixels or their file. */
+  private static final Set<String> CARRIED =
+      Set.of("gAMA", "cHRM", "sRGB", "cICP", "mDCV", "cLLI", "tEXt", "zTXt", "iTXt");
 
   private final ByteBuffer file;
+  private final List<FilePiece> pieces = new ArrayList<>();
+  private PhotoMetadata metadata = PhotoMetadata.none();
   private int widthPx;
   private int heightPx;
+  private int bytesPerPixel;
   private long rawBytes;
   private long packedBytes;
-  private Orientation orientation = Orientation.AS_STORED;
-  private byte[] iccProfile;
 
   private PngFile(byte[] file) {
     this.file = ByteBuffer.wrap(file);
@@ -38,8 +43,12 @@ final class PngFile {
   static FileFacts facts(byte[] file) throws UnreadableException {
     PngFile png = new PngFile(file);
     png.readChunks();
+    PhotoMetadata metadata = png.metadata.withPieces(png.pieces);
+    Orientation orientation =
+        metadata.exif().map(e -> new Orientation(e.orientation())).orElse(Orientation.AS_STORED);
+    boolean filled = png.rawBytes <= DEFLATE_RATIO_MOST * png.packedBytes;
     return new FileFacts(
-        png.widthPx, png.heightPx, png.orientation, Optional.ofNullable(png.iccProfile));
+        png.widthPx, png.heightPx, png.bytesPerPixel, filled, orientation, metadata);
   }
 
   private void readChunks() throws UnreadableException {
@@ -54,9 +63,6 @@ final class PngFile {
       take(name, at + 8, length);
       at += AROUND_DATA + length;
     } while (!name.equals("IEND"));
-    if (rawBytes > DEFLATE_RATIO_MOST * packedBytes) {
-      throw UnreadableException.broken("a PNG whose data cannot fill the size it claims");
-    }
   }
 
   private int checkedLength(int at) throws UnreadableException {
@@ -79,17 +85,21 @@ final class PngFile {
     switch (name) {
       case "IHDR" -> takeHeader(at);
       case "IDAT" -> packedBytes += length;
-      case "eXIf" -> orientation = Orientation.ofExif(data(at, length));
-      case "iCCP" -> iccProfile = unpackedProfile(data(at, length));
-      default -> {
-        // other chunks say nothing about the samples
-      }
+      case "tRNS" -> bytesPerPixel += file.get(SIGNATURE.length + 16) == 16 ? 2 : 1;
+      case "eXIf" ->
+          metadata = ExifBlock.of(data(at, length)).map(metadata::withExif).orElse(metadata);
+      case "iCCP" ->
+          metadata =
+              PngText.profile(data(at, length)).map(metadata::withIccProfile).orElse(metadata);
+      case "pHYs" -> takeResolution(at, length);
+      default -> takeOther(name, at, length);
     }
   }
 
   private void takeHeader(int at) {
     widthPx = file.getInt(at);
     heightPx = file.getInt(at + 4);
+    int bits = file.get(at + 8);
     int channels =
         switch (file.get(at + 9)) {
           case 2 -> 3;
@@ -97,55 +107,36 @@ final class PngFile {
           case 6 -> 4;
           default -> 1;
         };
-    double bytes = (double) widthPx * heightPx * channels * file.get(at + 8) / 8;
-    rawBytes = (long) bytes;
+    // a palette is written out, besides the indices
+    bytesPerPixel = file.get(at + 9) == PALETTE ? 4 : channels * Math.max(1, bits / 8);
+    rawBytes = (long) ((double) widthPx * heightPx * channels * bits / 8);
+  }
+
+  private void takeResolution(int at, int length) {
+    if (length != RESOLUTION_BYTES || file.getInt(at) <= 0 || file.getInt(at + 4) <= 0) {
+      return;
+    }
+    Resolution.Unit unit = file.get(at + 8) == 1 ? Resolution.Unit.METRE : Resolution.Unit.NONE;
+    if (file.getInt(at) < 1_000_000_000 && file.getInt(at + 4) < 1_000_000_000) {
+      metadata =
+          metadata.withResolution(new Resolution(unit, file.getInt(at), file.getInt(at + 4)));
+    }
+  }
+
+  private void takeOther(String name, int at, int length) {
+    if (!CARRIED.contains(name)) {
+      return;
+    }
+    byte[] chunk = data(at, length);
+    String keyword = name.endsWith("Xt") ? PngText.keyword(chunk) : "";
+    if (name.equals("iTXt") && keyword.equals(PngText.XMP_KEYWORD)) {
+      metadata = PngText.international(chunk).map(metadata::withXmp).orElse(metadata);
+    } else if (!PngText.isCopy(keyword)) {
+      pieces.add(new FilePiece(PhotoFormat.PNG, name, chunk));
+    }
   }
 
   private byte[] data(int at, int length) {
     return Arrays.copyOfRange(file.array(), at, at + length);
-  }
-
-  /** The profile out of an iCCP chunk: name, zero, method 0, packed bytes; null if damaged. */
-  private static byte[] unpackedProfile(byte[] chunk) {
-    int nameEnd = 0;
-    while (nameEnd < chunk.length && chunk[nameEnd] != 0) {
-      nameEnd++;
-    }
-    if (nameEnd + 2 >= chunk.length) {
-      return null;
-    }
-    Inflater inflater = new Inflater();
-    inflater.setInput(chunk, nameEnd + 2, chunk.length - nameEnd - 2);
-    ByteArrayOutputStream profile = new ByteArrayOutputStream();
-    byte[] part = new byte[1 << 16];
-    try {
-      while (!inflater.finished() && profile.size() < PROFILE_BYTES_MOST) {
-        int count = inflater.inflate(part);
-        if (count == 0) {
-          return null;
-        }
-        profile.write(part, 0, count);
-      }
-      return inflater.finished() ? profile.toByteArray() : null;
-    } catch (DataFormatException e) {
-      // A profile that cannot be unpacked says nothing; the samples are sound without it.
-      return null;
-    } finally {
-      inflater.end();
-    }
-  }
-
-  /** A profile packed as an iCCP chunk wants it. */
-  static byte[] packedProfile(byte[] profile) {
-    Deflater deflater = new Deflater();
-    deflater.setInput(profile);
-    deflater.finish();
-    ByteArrayOutputStream packed = new ByteArrayOutputStream();
-    byte[] part = new byte[1 << 16];
-    while (!deflater.finished()) {
-      packed.write(part, 0, deflater.deflate(part));
-    }
-    deflater.end();
-    return packed.toByteArray();
   }
 }

@@ -42,13 +42,70 @@ final class RasterSamples {
     return new PhotoShape(raster.getWidth(), raster.getHeight(), bands, bits);
   }
 
+  /** The raster's own array where it lies as a photo's samples do, else a copy. */
   private static Object samples(Raster raster, PhotoShape shape) {
     ComponentSampleModel model = (ComponentSampleModel) raster.getSampleModel();
+    if (liesAlike(raster, model, shape)) {
+      DataBuffer data = raster.getDataBuffer();
+      Object samples =
+          data instanceof DataBufferByte bytes
+              ? bytes.getData()
+              : ((DataBufferUShort) data).getData();
+      inOrder(samples, model.getBandOffsets());
+      return samples;
+    }
     Object samples = shape.bits() == 8 ? new byte[shape.samples()] : new short[shape.samples()];
     for (int c = 0; c < shape.channels(); c++) {
       copyBand(raster, model, c, samples);
     }
     return samples;
+  }
+
+  /** Whether the samples are those of the pixels and no others, perhaps in blue green red order. */
+  private static boolean liesAlike(Raster raster, ComponentSampleModel model, PhotoShape shape) {
+    DataBuffer data = raster.getDataBuffer();
+    int[] offsets = model.getBandOffsets();
+    return data.getNumBanks() == 1
+        && data.getOffset() == 0
+        && data.getSize() == shape.samples()
+        && model.getPixelStride() == shape.channels()
+        && model.getScanlineStride() == shape.rowSamples()
+        && raster.getSampleModelTranslateX() == raster.getMinX()
+        && raster.getSampleModelTranslateY() == raster.getMinY()
+        && (isStraight(offsets) || isBlueFirst(offsets));
+  }
+
+  private static boolean isStraight(int... offsets) {
+    for (int c = 0; c < offsets.length; c++) {
+      if (offsets[c] != c) {
+        return false;
+      }
+    }
+    return true;
+  }
+
+  private static boolean isBlueFirst(int... offsets) {
+    return offsets.length == 3 && offsets[0] == 2 && offsets[1] == 1 && offsets[2] == 0;
+  }
+
+  private static void inOrder(Object samples, int... offsets) {
+    if (isStraight(offsets)) {
+      return;
+    }
+    if (samples instanceof byte[] bytes) {
+      for (int i = 0; i < bytes.length; i += 3) {
+        byte blue = bytes[i];
+        bytes[i] = bytes[i + 2];
+        bytes[i + 2] = blue;
+      }
+    } else {
+      short[] shorts = (short[]) samples;
+      for (int i = 0; i < shorts.length; i += 3) {
+        short blue = shorts[i];
+        shorts[i] = shorts[i + 2];
+        shorts[i + 2] = blue;
+      }
+    }
   }
 
   private static void copyBand(Raster raster, ComponentSampleModel model, int c, Object into) {

@@ -1,16 +1,34 @@
 package plumbray.imaging.photo;
 
 import java.util.Optional;
+import java.util.Set;
 import javax.imageio.metadata.IIOInvalidTreeException;
 import javax.imageio.metadata.IIOMetadata;
 import javax.imageio.plugins.tiff.BaselineTIFFTagSet;
 import javax.imageio.plugins.tiff.TIFFDirectory;
 import javax.imageio.plugins.tiff.TIFFField;
+import plumbray.imaging.metadata.Resolution;
 
 /** The directory of a TIFF file's first picture (TIFF 6.0), checked before decoding. */
 final class TiffFile {
   private static final int UNSIGNED = 1;
   private static final int UNSPECIFIED_EXTRA = 0;
+  private static final int LZW = 5;
+  private static final int PLAIN = 1;
+  private static final int OLD_DEFLATE = 32946;
+  private static final int DEFLATE = 8;
+  private static final int PALETTE_BYTES = 4;
+
+  /** LZW codes and Deflate make data at most some 1400 times smaller; far above that is false. */
+  private static final long RATIO_MOST = 2000;
+
+  private static final Set<Integer> COLOURS =
+      Set.of(
+          BaselineTIFFTagSet.PHOTOMETRIC_INTERPRETATION_WHITE_IS_ZERO,
+          BaselineTIFFTagSet.PHOTOMETRIC_INTERPRETATION_BLACK_IS_ZERO,
+          BaselineTIFFTagSet.PHOTOMETRIC_INTERPRETATION_RGB,
+          BaselineTIFFTagSet.PHOTOMETRIC_INTERPRETATION_PALETTE_COLOR,
+          BaselineTIFFTagSet.PHOTOMETRIC_INTERPRETATION_Y_CB_CR);
 
   private final TIFFDirectory directory;
 
@@ -18,16 +36,57 @@ final class TiffFile {
     this.directory = directory;
   }
 
-  static FileFacts facts(IIOMetadata metadata, long fileBytes)
+  /** Checks what a file's first directory says. */
+  static TiffFile of(IIOMetadata metadata, long fileBytes)
       throws UnreadableException, IIOInvalidTreeException {
     TiffFile tiff = new TiffFile(TIFFDirectory.createFromMetadata(metadata));
     tiff.requireSupported();
     tiff.requireWhole(fileBytes);
+    return tiff;
+  }
+
+  FileFacts facts() {
+    PhotoMetadata metadata =
+        PhotoMetadata.none().withCoding(new FileCoding(Optional.empty(), compression() != PLAIN));
+    metadata = iccProfile().map(metadata::withIccProfile).orElse(metadata);
+    metadata = resolution().map(metadata::withResolution).orElse(metadata);
     return new FileFacts(
-        tiff.size(BaselineTIFFTagSet.TAG_IMAGE_WIDTH),
-        tiff.size(BaselineTIFFTagSet.TAG_IMAGE_LENGTH),
-        Orientation.ofCode(tiff.first(BaselineTIFFTagSet.TAG_ORIENTATION, 1)),
-        tiff.iccProfile());
+        size(BaselineTIFFTagSet.TAG_IMAGE_WIDTH),
+        size(BaselineTIFFTagSet.TAG_IMAGE_LENGTH),
+        bytesPerPixel(),
+        isFilled(),
+        Orientation.ofCode(first(BaselineTIFFTagSet.TAG_ORIENTATION, 1)),
+        metadata);
+  }
+
+  /**
+   * Whether samples of 16 bit are stored as differences, which the runtime's decoder does not undo.
+   */
+  boolean needsSums() {
+    long way = compression();
+    return first(BaselineTIFFTagSet.TAG_PREDICTOR, 1)
+            == BaselineTIFFTagSet.PREDICTOR_HORIZONTAL_DIFFERENCING
+        && first(BaselineTIFFTagSet.TAG_BITS_PER_SAMPLE, 1) == 16
+        && (way == LZW || way == DEFLATE || way == OLD_DEFLATE);
+  }
+
+  /** After how many columns differences begin anew. */
+  int tileWidthPx() {
+    long tile = first(BaselineTIFFTagSet.TAG_TILE_WIDTH, Integer.MAX_VALUE);
+    return (int) Math.max(1, Math.min(Integer.MAX_VALUE, tile));
+  }
+
+  private long compression() {
+    return first(BaselineTIFFTagSet.TAG_COMPRESSION, PLAIN);
+  }
+
+  private int bytesPerPixel() {
+    long samples = Math.min(8, first(BaselineTIFFTagSet.TAG_SAMPLES_PER_PIXEL, 1));
+    long bits = first(BaselineTIFFTagSet.TAG_BITS_PER_SAMPLE, 1);
+    boolean palette =
+        first(BaselineTIFFTagSet.TAG_PHOTOMETRIC_INTERPRETATION, 1)
+            == BaselineTIFFTagSet.PHOTOMETRIC_INTERPRETATION_PALETTE_COLOR;
+    return palette ? PALETTE_BYTES : (int) (samples * Math.max(1, Math.min(8, bits / 8)));
   }
 
   private void requireSupported() throws UnreadableException {
@@ -35,13 +94,10 @@ final class TiffFile {
     if (colors == BaselineTIFFTagSet.PHOTOMETRIC_INTERPRETATION_CMYK) {
       throw UnreadableException.unsupported("CMYK colours");
     }
-    boolean known =
-        colors == BaselineTIFFTagSet.PHOTOMETRIC_INTERPRETATION_WHITE_IS_ZERO
-            || colors == BaselineTIFFTagSet.PHOTOMETRIC_INTERPRETATION_BLACK_IS_ZERO
-            || colors == BaselineTIFFTagSet.PHOTOMETRIC_INTERPRETATION_RGB
-            || colors == BaselineTIFFTagSet.PHOTOMETRIC_INTERPRETATION_PALETTE_COLOR
-            || colors == BaselineTIFFTagSet.PHOTOMETRIC_INTERPRETATION_Y_CB_CR;
-    if (!known) {
+    if (colors == BaselineTIFFTagSet.PHOTOMETRIC_INTERPRETATION_CIELAB) {
+      throw UnreadableException.unsupported("Lab colours");
+    }
+    if (!COLOURS.contains((int) colors)) {
       throw UnreadableException.unsupported("TIFF colours of kind " + colors);
     }
     if (first(BaselineTIFFTagSet.TAG_SAMPLE_FORMAT, UNSIGNED) != UNSIGNED) {
@@ -74,6 +130,29 @@ final class TiffFile {
     }
   }
 
+  /** Whether the stored bytes can give as many as the size claims. */
+  private boolean isFilled() {
+    double most =
+        (double) RATIO_MOST
+            * (sum(BaselineTIFFTagSet.TAG_STRIP_BYTE_COUNTS)
+                + sum(BaselineTIFFTagSet.TAG_TILE_BYTE_COUNTS));
+    double pixels =
+        (double) size(BaselineTIFFTagSet.TAG_IMAGE_WIDTH)
+            * size(BaselineTIFFTagSet.TAG_IMAGE_LENGTH);
+    // pictures of one bit per pixel have ways of packing that know no such limit
+    boolean several = first(BaselineTIFFTagSet.TAG_BITS_PER_SAMPLE, 1) >= 8;
+    return !several || pixels * bytesPerPixel() <= most;
+  }
+
+  private double sum(int tag) {
+    TIFFField field = directory.getTIFFField(tag);
+    double sum = 0;
+    for (int i = 0; field != null && i < field.getCount(); i++) {
+      sum += field.getAsLong(i);
+    }
+    return sum;
+  }
+
   private int size(int tag) {
     return (int) Math.min(Integer.MAX_VALUE, first(tag, 0));
   }
@@ -81,6 +160,24 @@ final class TiffFile {
   private long first(int tag, long otherwise) {
     TIFFField field = directory.getTIFFField(tag);
     return field == null || field.getCount() < 1 ? otherwise : field.getAsLong(0);
+  }
+
+  private Optional<Resolution> resolution() {
+    double across = number(BaselineTIFFTagSet.TAG_X_RESOLUTION);
+    double down = number(BaselineTIFFTagSet.TAG_Y_RESOLUTION);
+    Resolution.Unit unit =
+        switch ((int) first(BaselineTIFFTagSet.TAG_RESOLUTION_UNIT, 2)) {
+          case 2 -> Resolution.Unit.INCH;
+          case 3 -> Resolution.Unit.CENTIMETRE;
+          default -> Resolution.Unit.NONE;
+        };
+    boolean sound = across > 0 && down > 0 && across < 1e8 && down < 1e8;
+    return sound ? Optional.of(new Resolution(unit, across, down)) : Optional.empty();
+  }
+
+  private double number(int tag) {
+    TIFFField field = directory.getTIFFField(tag);
+    return field == null || field.getCount() < 1 ? Double.NaN : field.getAsDouble(0);
   }
 
   private Optional<byte[]> iccProfile() {
