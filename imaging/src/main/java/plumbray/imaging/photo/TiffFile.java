@@ -22,6 +22,9 @@ final class TiffFile {
   /** LZW codes and Deflate make data at most some 1400 times smaller; far above that is false. */
   private static final long RATIO_MOST = 2000;
 
+  /** Between these, the decoder would leave the highest value below white. */
+  private static final Set<Integer> DEPTHS = Set.of(1, 2, 4, 8, 16);
+
   private static final Set<Integer> COLOURS =
       Set.of(
           BaselineTIFFTagSet.PHOTOMETRIC_INTERPRETATION_WHITE_IS_ZERO,
@@ -99,6 +102,11 @@ final class TiffFile {
     }
     if (!COLOURS.contains((int) colors)) {
       throw UnreadableException.unsupported("TIFF colours of kind " + colors);
+    }
+    long bits = first(BaselineTIFFTagSet.TAG_BITS_PER_SAMPLE, 1);
+    if (!DEPTHS.contains((int) bits)
+        && first(BaselineTIFFTagSet.TAG_SAMPLE_FORMAT, UNSIGNED) == UNSIGNED) {
+      throw UnreadableException.unsupported("samples of " + bits + " bit");
     }
     if (first(BaselineTIFFTagSet.TAG_SAMPLE_FORMAT, UNSIGNED) != UNSIGNED) {
       throw UnreadableException.unsupported("samples that are signed or not whole numbers");
