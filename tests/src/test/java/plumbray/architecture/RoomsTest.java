@@ -77,6 +77,15 @@ class RoomsTest {
           .resideInAnyPackage("boofcv..", "georegression..", "org.ddogleg..", "org.ejml..");
 
   @ArchTest
+  static final ArchRule THE_METADATA_LIBRARY_STAYS_WITH_THE_METADATA =
+      noClasses()
+          .that()
+          .resideOutsideOfPackage("plumbray.imaging.metadata..")
+          .should()
+          .dependOnClassesThat()
+          .resideInAPackage("org.apache.commons.imaging..");
+
+  @ArchTest
   static final ArchRule THE_MATHEMATICS_LIBRARY_STAYS_IN_CALIBRATION_AND_FITTING =
       noClasses()
           .that()

@@ -22,9 +22,8 @@ import org.w3c.dom.Document;
 import org.w3c.dom.Element;
 import org.w3c.dom.Node;
 import org.w3c.dom.NodeList;
-import org.xml.sax.ErrorHandler;
 import org.xml.sax.SAXException;
-import org.xml.sax.SAXParseException;
+import org.xml.sax.helpers.DefaultHandler;
 
 /**
  * An XMP packet (ISO 16684-1): RDF in XML. It is read without document types and external entities,
@@ -100,7 +99,8 @@ public final class XmpPacket {
     factory.setXIncludeAware(false);
     factory.setExpandEntityReferences(false);
     DocumentBuilder builder = factory.newDocumentBuilder();
-    builder.setErrorHandler(new Refusing());
+    // it throws what ends the reading, and prints nothing
+    builder.setErrorHandler(new DefaultHandler());
     return builder;
   }
 
@@ -200,24 +200,6 @@ public final class XmpPacket {
       return out.toByteArray();
     } catch (TransformerException e) {
       throw new IllegalStateException("a document in memory cannot be written", e);
-    }
-  }
-
-  /** Errors become exceptions; nothing is printed. */
-  private static final class Refusing implements ErrorHandler {
-    @Override
-    public void warning(SAXParseException e) {
-      // a warning leaves the document well-formed
-    }
-
-    @Override
-    public void error(SAXParseException e) throws SAXException {
-      throw e;
-    }
-
-    @Override
-    public void fatalError(SAXParseException e) throws SAXException {
-      throw e;
     }
   }
 }
