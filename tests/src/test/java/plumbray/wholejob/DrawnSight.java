@@ -153,7 +153,16 @@ record DrawnSight(
 
   /** The simulation of a photo. */
   Simulation drawn(Shimmer shimmer, int bits, long seed) {
-    Sight truth = truth();
+    return drawn(truth(), shimmer, new Sensor(0.8, 1, 4000, 6, bits), seed);
+  }
+
+  /** The simulation of a photo without shimmer and noise, by a sight that may differ a little. */
+  Simulation still(Sight truth, int bits) {
+    Sensor sensor = new Sensor(0.8, 1, Double.POSITIVE_INFINITY, 0, bits);
+    return drawn(truth, Shimmer.none(), sensor, 1);
+  }
+
+  private Simulation drawn(Sight truth, Shimmer shimmer, Sensor sensor, long seed) {
     Backdrop backdrop =
         new Backdrop(
             new Backdrop.Sky(LinearColour.grey(0.9), LinearColour.grey(0.5), 0.02),
@@ -174,7 +183,6 @@ record DrawnSight(
                   EDGES_M,
                   new StaffShape.Bars(0.05, 0.75, true))));
     }
-    Sensor sensor = new Sensor(0.8, 1, 4000, 6, bits);
     return new Simulation(truth, new Scene(seed, backdrop, things, shimmer, sensor));
   }
 

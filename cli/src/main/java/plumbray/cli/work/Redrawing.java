@@ -4,13 +4,14 @@ import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.stream.IntStream;
 import plumbray.calibration.sight.Sight;
 import plumbray.imaging.fit.SightOptics;
 import plumbray.imaging.photo.Photo;
-import plumbray.imaging.photo.PhotoBuilder;
 import plumbray.imaging.photo.PhotoException;
 import plumbray.imaging.photo.PhotoFormat;
 import plumbray.imaging.photo.PhotoWriter;
+import plumbray.imaging.rectify.ColourRectifier;
 import plumbray.imaging.rectify.Rectified;
 import plumbray.imaging.rectify.Rectifier;
 import plumbray.imaging.rectify.RectifyMap;
@@ -18,7 +19,6 @@ import plumbray.imaging.rectify.RedrawOptions;
 
 /** Redraws a photo and writes it with its mask. */
 final class Redrawing {
-  private static final int GREEN = 1;
   private static final int COLOURS = 3;
 
   private final SightOptics optics;
@@ -63,27 +63,10 @@ final class Redrawing {
     return List.of(picture, files.mask());
   }
 
-  /** Each colour through the air as it is for its own wavelength; the mask is that of green. */
+  /** Each colour through the air as it is for its own wavelength. */
   private Rectified byColours(Photo photo) {
-    Rectified green = Rectifier.rectify(photo, map(GREEN), options, threads);
-    PhotoBuilder picture = new PhotoBuilder(photo.shape()).metadata(green.picture().metadata());
-    for (int channel = 0; channel < photo.channels(); channel++) {
-      boolean other = channel != GREEN && channel < COLOURS;
-      Photo source =
-          other
-              ? Rectifier.rectify(photo, map(channel), options, threads).picture()
-              : green.picture();
-      copy(source, picture, channel);
-    }
-    return new Rectified(picture.build(), green.mask());
-  }
-
-  private static void copy(Photo from, PhotoBuilder to, int channel) {
-    for (int y = 0; y < from.height(); y++) {
-      for (int x = 0; x < from.width(); x++) {
-        to.sample(x, y, channel, from.sample(x, y, channel));
-      }
-    }
+    List<RectifyMap> maps = IntStream.range(0, COLOURS).mapToObj(this::map).toList();
+    return ColourRectifier.rectify(photo, maps, options, threads);
   }
 
   private RectifyMap map(int channel) {

@@ -56,22 +56,32 @@ public final class PhotoBuilder {
    * array is used up.
    */
   public PhotoBuilder row(int y, float[] values) {
+    return row(y, values, 0);
+  }
+
+  /** The same with values that start at {@code at}. */
+  public PhotoBuilder row(int y, float[] values, int at) {
     int start = y * shape.rowSamples();
     int count = shape.rowSamples();
-    float highest = shape.highestSample();
-    for (int i = 0; i < count; i++) {
-      values[i] = Math.min(highest, Math.max(0f, values[i])) + ROUNDING;
-    }
+    limit(values, at, at + count);
     if (bytes != null) {
       for (int i = 0; i < count; i++) {
-        bytes[start + i] = (byte) Float.floatToRawIntBits(values[i]);
+        bytes[start + i] = (byte) Float.floatToRawIntBits(values[at + i]);
       }
     } else {
       for (int i = 0; i < count; i++) {
-        shorts[start + i] = (short) Float.floatToRawIntBits(values[i]);
+        shorts[start + i] = (short) Float.floatToRawIntBits(values[at + i]);
       }
     }
     return this;
+  }
+
+  /** Limits values; (v + |v|) / 2 is quicker than the greater of v and 0, and as exact. */
+  private void limit(float[] values, int from, int end) {
+    float highest = shape.highestSample();
+    for (int i = from; i < end; i++) {
+      values[i] = Math.min(highest, 0.5f * (values[i] + Math.abs(values[i]))) + ROUNDING;
+    }
   }
 
   /** The photo; nothing can be drawn afterwards. */

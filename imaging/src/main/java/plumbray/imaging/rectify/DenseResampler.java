@@ -46,8 +46,9 @@ final class DenseResampler {
   }
 
   /**
-   * Writes the samples of {@code count} output pixels of row y from column {@code t} of a span on;
-   * false, with nothing written, where their sources are too far apart.
+   * Writes the samples of {@code count} output pixels of row y from column {@code t} of a span on,
+   * at their places in a row with a rim; false, with nothing written, where their sources are too
+   * far apart.
    */
   boolean sample(Span span, int y, int t, int count, float[] into) {
     int last = t + count - 1;
@@ -71,7 +72,7 @@ final class DenseResampler {
       take(y + top, rowCount);
       for (int c = 0; c < channels; c++) {
         add(c, x + left + FloatRows.RIM, columns, rowCount, count);
-        for (int k = 0, at = x * channels + c; k < count; k++, at += channels) {
+        for (int k = 0, at = (x + FloatRows.RIM) * channels + c; k < count; k++, at += channels) {
           into[at] = line[k];
         }
       }

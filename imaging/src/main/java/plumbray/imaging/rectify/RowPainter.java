@@ -28,7 +28,7 @@ final class RowPainter {
     this.width = photo.width();
     this.channels = photo.channels();
     this.lightChannels = photo.shape().lightChannels();
-    this.row = new float[photo.shape().rowSamples()];
+    this.row = new float[(width + 2 * FloatRows.RIM) * channels];
     FloatRows rows = new FloatRows(photo, curve);
     Kernel kernel = options.interpolation().kernel();
     this.single = new Resampler(rows, kernel, photo.shape());
@@ -52,11 +52,11 @@ final class RowPainter {
       if (span.isShown()) {
         paint(span, y);
       } else {
-        Arrays.fill(row, span.from * channels, span.to * channels, 0f);
+        Arrays.fill(row, at(span.from), at(span.to), 0f);
       }
     }
     curve.ifPresent(this::encode);
-    picture.row(y, row);
+    picture.row(y, row, at(0));
     return never;
   }
 
@@ -74,13 +74,18 @@ final class RowPainter {
     boolean tiled = !alpha && count > 1 && dense.sample(span, y, t, count, row);
     for (int k = t; k < t + count && !tiled; k++) {
       int x = span.from + k;
-      single.sample(x + span.u.at(k), y + span.v.at(k), span.stretch.at(k), row, x * channels);
+      single.sample(x + span.u.at(k), y + span.v.at(k), span.stretch.at(k), row, at(x));
     }
     return count;
   }
 
+  /** Index of a pixel in the row, which has a rim as the photo's rows have. */
+  private int at(int x) {
+    return (x + FloatRows.RIM) * channels;
+  }
+
   private void encode(LightCurve light) {
-    for (int pixel = 0; pixel < row.length; pixel += channels) {
+    for (int pixel = at(0); pixel < at(width); pixel += channels) {
       for (int c = 0; c < lightChannels; c++) {
         row[pixel + c] = light.encoded(row[pixel + c]);
       }

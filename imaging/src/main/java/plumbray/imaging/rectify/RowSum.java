@@ -11,18 +11,22 @@ final class RowSum {
   private float[] weights = new float[2 * TOGETHER];
   private int groups;
 
-  /** Takes the rows that the taps name. */
-  void take(FloatRows source, Taps taps) {
-    int count = taps.count();
+  /** Starts a sum of so many rows. */
+  void start(int count) {
     groups = (count + TOGETHER - 1) / TOGETHER;
     if (rows.length < groups * TOGETHER) {
       rows = new float[2 * groups * TOGETHER][];
       weights = new float[rows.length];
     }
-    source.keep(count);
-    for (int i = 0; i < groups * TOGETHER; i++) {
-      rows[i] = source.row(taps.first() + Math.min(i, count - 1));
-      weights[i] = i < count ? (float) taps.weight(i) : 0f;
+  }
+
+  /** Sets row i and its weight; those after it in its group are left without weight. */
+  void put(int i, float[] row, double weight) {
+    rows[i] = row;
+    weights[i] = (float) weight;
+    for (int next = i + 1; next % TOGETHER != 0; next++) {
+      rows[next] = row;
+      weights[next] = 0f;
     }
   }
 

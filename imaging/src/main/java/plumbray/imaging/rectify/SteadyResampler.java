@@ -1,7 +1,5 @@
 package plumbray.imaging.rectify;
 
-import java.util.Arrays;
-
 /**
  * Draws pixels whose sources keep their distance: all share the same weights, so that a row is the
  * weighted sum of a few rows of the photo, and of a few columns of that sum where the map moves
@@ -15,6 +13,12 @@ final class SteadyResampler {
    */
   static final double SHARED_PX = 5e-4;
 
+  /**
+   * Pixels moved sideways by less than this are not: a fifth of what the rays are traced to. A
+   * pitch of 2 mrad moves those at the corners of a long lens' picture so.
+   */
+  private static final double SIDEWAYS_PX = 1e-3;
+
   /** Stretches within this share of each other do. */
   static final double SHARED_STRETCH = 1e-2;
 
@@ -23,9 +27,9 @@ final class SteadyResampler {
   private final Taps across;
   private final Taps down;
   private final float[] sum;
-  private final float[] column;
-  private final float[] mixed;
+  private final float[][] columns;
   private final RowSum downSum = new RowSum();
+  private final RowSum acrossSum = new RowSum();
 
   SteadyResampler(FloatRows rows, Kernel kernel, int width, int channels) {
     this.channels = channels;
@@ -33,8 +37,7 @@ final class SteadyResampler {
     this.across = new Taps(kernel);
     this.down = new Taps(kernel);
     this.sum = new float[(width + 2 * FloatRows.RIM) * channels];
-    this.column = new float[width * channels];
-    this.mixed = new float[width * channels];
+    this.columns = new float[2 * (int) kernel.reach() + 1][sum.length];
   }
 
   /** How many columns from {@code t} of a span on may share their weights. */
@@ -49,47 +52,49 @@ final class SteadyResampler {
   }
 
   /**
-   * Writes the samples of {@code count} output pixels of row y from column {@code t} of a span on;
-   * false, with nothing written, where their sources are too far beyond the rim.
+   * Writes the samples of {@code count} output pixels of row y from column {@code t} of a span on,
+   * at their places in a row with a rim; false, with nothing written, where their sources are too
+   * far beyond the rim.
    */
   boolean sample(Span span, int y, int t, int count, float[] into) {
     double middle = t + 0.5 * (count - 1);
-    int x = span.from + t;
+    int start = (span.from + t + FloatRows.RIM) * channels;
+    int end = start + count * channels;
     double sideways = span.u.at(middle);
-    boolean straight = Math.abs(sideways) <= SHARED_PX;
-    across.place(straight ? 0 : sideways, 1);
-    int left = straight ? 0 : across.first();
-    int right = straight ? 0 : across.first() + across.count() - 1;
-    int first = (x + left + FloatRows.RIM) * channels;
-    int end = (x + count + right + FloatRows.RIM) * channels;
-    if (first < 0 || end > sum.length) {
-      return false;
+    if (Math.abs(sideways) <= SIDEWAYS_PX) {
+      takeRows(span, y, middle);
+      downSum.write(into, start, end);
+      return true;
     }
+    across.place(sideways, 1);
+    int first = start + across.first() * channels;
+    int last = end + (across.first() + across.count() - 1) * channels;
+    boolean near = first >= 0 && last <= sum.length;
+    if (near) {
+      takeRows(span, y, middle);
+      downSum.write(sum, first, last);
+      addColumns(start, end, into);
+    }
+    return near;
+  }
+
+  private void takeRows(Span span, int y, double middle) {
     down.place(y + span.v.at(middle), span.stretch.at(middle));
-    downSum.take(rows, down);
-    downSum.write(sum, first, end);
-    int samples = count * channels;
-    if (straight) {
-      System.arraycopy(sum, first, into, x * channels, samples);
-    } else {
-      addColumns(first, samples);
-      System.arraycopy(mixed, 0, into, x * channels, samples);
+    rows.keep(down.count());
+    downSum.start(down.count());
+    for (int i = 0; i < down.count(); i++) {
+      downSum.put(i, rows.row(down.first() + i), down.weight(i));
     }
-    return true;
   }
 
   /** Copies each column to the same place, so that one index serves all arrays. */
-  private void addColumns(int first, int samples) {
-    Arrays.fill(mixed, 0, samples, 0f);
+  private void addColumns(int start, int end, float[] into) {
+    acrossSum.start(across.count());
     for (int i = 0; i < across.count(); i++) {
-      System.arraycopy(sum, first + i * channels, column, 0, samples);
-      addProducts(mixed, (float) across.weight(i), column, samples);
+      int from = start + (across.first() + i) * channels;
+      System.arraycopy(sum, from, columns[i], start, end - start);
+      acrossSum.put(i, columns[i], across.weight(i));
     }
-  }
-
-  private static void addProducts(float[] into, float weight, float[] values, int count) {
-    for (int k = 0; k < count; k++) {
-      into[k] += weight * values[k];
-    }
+    acrossSum.write(into, start, end);
   }
 }

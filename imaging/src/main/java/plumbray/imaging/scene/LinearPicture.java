@@ -39,6 +39,12 @@ final class LinearPicture {
     }
   }
 
+  /** This picture's first channel, the second's second and the third's third. */
+  LinearPicture joined(LinearPicture second, LinearPicture third) {
+    return new LinearPicture(
+        width, height, new float[][] {planes[0], second.planes[1], third.planes[2]});
+  }
+
   /** The picture under a Gaussian point spread; beyond its border it goes on as at the border. */
   LinearPicture blurred(double sigmaPx) {
     if (sigmaPx == 0) {

@@ -17,8 +17,9 @@ import plumbray.raymodel.ray.StraightRay;
 /**
  * The photo that a sight would give of a scene, with all that is known about it.
  *
- * <p>Every quantity of the sight counts at its value, estimated or not. The picture does not depend
- * on the number of threads.
+ * <p>Where the sight gives the colour channels wavelengths of their own, each is drawn by its own
+ * rays. Every quantity of the sight counts at its value, estimated or not. The picture does not
+ * depend on the number of threads.
  */
 public final class Simulation {
   /** Spacing of the tabulated rays (px): straight between them errs by less than 0.001 px. */
@@ -38,6 +39,7 @@ public final class Simulation {
   private final SightPath path;
   private final AirColumn air;
   private final RayFan fan;
+  private final List<RayFan> channelFans;
   private final ElevationTable.Nodes nodes;
 
   /**
@@ -51,12 +53,25 @@ public final class Simulation {
     this.scene = scene;
     this.camera = sight.camera().camera();
     this.path = sight.path().path();
-    List<AirColumn> columns = columns(sight);
-    this.air = columns.get(0);
+    this.air = columns(sight).get(0);
     this.nodes = nodes();
-    this.fan =
-        RayFan.trace(
-            SightAir.along(sight, columns), path, request(), RayTracer.DEFAULT_TOLERANCE_M);
+    this.fan = fan(sight);
+    this.channelFans = channelFans();
+  }
+
+  /** The rays of each colour channel, where the sight gives each a wavelength of its own. */
+  private List<RayFan> channelFans() {
+    return sight.air().channelWavelengthsM().stream()
+        .map(wavelengthM -> fan(sight.withAir(sight.air().atWavelength(wavelengthM))))
+        .toList();
+  }
+
+  private RayFan fan(Sight coloured) {
+    return RayFan.trace(
+        SightAir.along(coloured, columns(coloured)),
+        path,
+        request(),
+        RayTracer.DEFAULT_TOLERANCE_M);
   }
 
   private static List<AirColumn> columns(Sight sight) {
@@ -106,12 +121,12 @@ public final class Simulation {
 
   /** The photo: through the air, with shimmer and noise. */
   public Photo photo() {
-    return picture(scene, new TracedRays(fan));
+    return throughAir(scene);
   }
 
   /** The photo without shimmer and noise. */
   public Photo stillPhoto() {
-    return picture(scene.still(), new TracedRays(fan));
+    return throughAir(scene.still());
   }
 
   /**
@@ -128,9 +143,21 @@ public final class Simulation {
   }
 
   private Photo picture(Scene drawn, Rays rays) {
-    ElevationTable table = new ElevationTable(rays, nodes);
-    SeenScene seen = SeenScene.of(drawn, table, reachM());
-    return new Development(drawn).develop(new SceneRenderer(seen, camera).render());
+    return new Development(drawn).develop(light(drawn, rays));
+  }
+
+  private Photo throughAir(Scene drawn) {
+    if (channelFans.isEmpty()) {
+      return picture(drawn, new TracedRays(fan));
+    }
+    List<LinearPicture> light =
+        channelFans.stream().map(each -> light(drawn, new TracedRays(each))).toList();
+    return new Development(drawn).develop(light.get(0).joined(light.get(1), light.get(2)));
+  }
+
+  private LinearPicture light(Scene drawn, Rays rays) {
+    SeenScene seen = SeenScene.of(drawn, new ElevationTable(rays, nodes), reachM());
+    return new SceneRenderer(seen, camera).render();
   }
 
   /** What is known exactly about the photo. */

@@ -34,7 +34,7 @@ final class DrawnSpan {
 
   /** With shared weights; the row as samples, rounded. */
   int[] steady(Span span, int y) {
-    float[] row = new float[photo.shape().rowSamples()];
+    float[] row = new float[(photo.width() + 2 * FloatRows.RIM) * photo.channels()];
     SteadyResampler steady = new SteadyResampler(rows, kernel, photo.width(), photo.channels());
     int t = 0;
     while (t < span.length()) {
@@ -49,7 +49,7 @@ final class DrawnSpan {
 
   /** With weights of each pixel's own. */
   int[] dense(Span span, int y) {
-    float[] row = new float[photo.shape().rowSamples()];
+    float[] row = new float[(photo.width() + 2 * FloatRows.RIM) * photo.channels()];
     DenseResampler dense = new DenseResampler(rows, kernel, photo.width(), photo.channels());
     for (int t = 0; t < span.length(); t += DenseResampler.TILE) {
       int count = Math.min(DenseResampler.TILE, span.length() - t);
@@ -62,18 +62,20 @@ final class DrawnSpan {
 
   /** Pixel by pixel. */
   int[] single(Span span, int y) {
-    float[] row = new float[photo.shape().rowSamples()];
+    float[] row = new float[(photo.width() + 2 * FloatRows.RIM) * photo.channels()];
     Resampler single = new Resampler(rows, kernel, photo.shape());
     for (int x = 0; x < photo.width(); x++) {
       double stretch = span.stretch.at(x);
-      single.sample(x + span.u.at(x), y + span.v.at(x), stretch, row, x * photo.channels());
+      single.sample(
+          x + span.u.at(x), y + span.v.at(x), stretch, row, (x + FloatRows.RIM) * photo.channels());
     }
     return rounded(row);
   }
 
   private int[] rounded(float[] row) {
-    Photo drawn = new PhotoBuilder(photo.shape()).row(0, row).build();
-    int[] samples = new int[row.length];
+    int rim = FloatRows.RIM * photo.channels();
+    Photo drawn = new PhotoBuilder(photo.shape()).row(0, row, rim).build();
+    int[] samples = new int[photo.shape().rowSamples()];
     for (int i = 0; i < samples.length; i++) {
       samples[i] = drawn.sample(i / photo.channels(), 0, i % photo.channels());
     }
