@@ -22,7 +22,11 @@ final class InverseTemperatureIntegral {
     -500.0, -50.0, -5.0, -0.5, 0.0, 0.02, 0.2, 1.0, 5.0, 20.0, 50.0, 200.0, 1000.0, 5000.0
   };
 
-  private static final int DEEPEST = 14;
+  private static final int DEEPEST = 24;
+
+  /** Widest panel, in the profile's scale at its middle: a layer within it could be missed. */
+  private static final double WIDEST = 4.0;
+
   private static final double[] GAUSS_NODES = {
     -0.9061798459386640, -0.5384693101056831, 0.0, 0.5384693101056831, 0.9061798459386640
   };
@@ -91,7 +95,8 @@ final class InverseTemperatureIntegral {
       double miss = hermite(left, right, 3 * c, 0.5, b - a) - half[3 * c];
       worst = Math.max(worst, Math.abs(miss) / scale);
     }
-    if (worst > TOLERANCE_M_PER_K && depth < DEEPEST) {
+    boolean coarse = b - a > WIDEST * column.verticalScaleM(mid);
+    if ((coarse || worst > TOLERANCE_M_PER_K) && depth < DEEPEST) {
       split(a, mid, depth + 1, grid);
       split(mid, b, depth + 1, grid);
     } else {

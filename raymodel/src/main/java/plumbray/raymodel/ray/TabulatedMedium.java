@@ -33,7 +33,17 @@ public final class TabulatedMedium implements Medium {
 
   private static final int NODES = 8;
   private static final int COEFFICIENTS = NODES + 1;
-  private static final int DEEPEST = 16;
+  private static final int DEEPEST = 24;
+
+  /** Part of a tolerance that is allowed where the table looks: elsewhere it may err more. */
+  private static final double HERE = 0.25;
+
+  /**
+   * Widest panel, in the scale of the air at its middle: a layer between all the points looked at
+   * would be missed.
+   */
+  private static final double WIDEST = 2.0;
+
   private static final double[] CHECKS = {-0.99, -0.7, -0.2, 0.31, 0.62, 0.9};
 
   private final Medium medium;
@@ -163,7 +173,8 @@ public final class TabulatedMedium implements Medium {
 
   private void build(double a, double b, int depth, List<Double> tops, List<double[]> built) {
     double[] panel = panel(a, b);
-    if (depth < DEEPEST && !goodEnough(panel, a, b)) {
+    boolean coarse = b - a > WIDEST * medium.verticalScaleM(0.5 * (a + b));
+    if (depth < DEEPEST && (coarse || !goodEnough(panel, a, b))) {
       double mid = 0.5 * (a + b);
       build(a, mid, depth + 1, tops, built);
       build(mid, b, depth + 1, tops, built);
@@ -213,9 +224,9 @@ public final class TabulatedMedium implements Medium {
         largest[c] = Math.max(largest[c], Math.abs(truth));
       }
     }
-    boolean good = worst[0] <= Math.max(GRADIENT_TOLERANCE, STEEP_TOLERANCE * largest[0]);
+    boolean good = worst[0] <= HERE * Math.max(GRADIENT_TOLERANCE, STEEP_TOLERANCE * largest[0]);
     for (int c = 1; c < channels; c++) {
-      good &= worst[c] <= Math.max(GRADIENT_TOLERANCE, DERIVATIVE_TOLERANCE * largest[c]);
+      good &= worst[c] <= HERE * Math.max(GRADIENT_TOLERANCE, DERIVATIVE_TOLERANCE * largest[c]);
     }
     return good;
   }
