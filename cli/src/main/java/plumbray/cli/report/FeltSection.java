@@ -1,7 +1,9 @@
 package plumbray.cli.report;
 
 import java.util.ArrayList;
+import java.util.EnumSet;
 import java.util.List;
+import java.util.Set;
 import java.util.function.ToDoubleFunction;
 import java.util.stream.DoubleStream;
 import plumbray.cli.report.markup.Markup;
@@ -100,19 +102,12 @@ final class FeltSection implements Section {
     double top = TargetHeights.topM(optics.sight(), mapping);
     List<Band> bands = new ArrayList<>();
     List<Line> lines = new ArrayList<>();
-    boolean inverted = false;
-    boolean upright = false;
+    Set<Sense> named = EnumSet.noneOf(Sense.class);
     for (Branch branch : mapping.branches()) {
       List<TargetRay> rays = sampled(mapping, branch, top);
-      boolean up = branch.sense() == Sense.UPRIGHT;
-      if (rays.isEmpty()) {
-        continue;
+      if (!rays.isEmpty()) {
+        addImage(rays, named.add(branch.sense()), bands, lines);
       }
-      String image = up ? "upright" : "inverted";
-      boolean first = up ? !upright : !inverted;
-      addImage(rays, first ? image : "", bands, lines);
-      upright |= up;
-      inverted |= !up;
     }
     Axis y =
         Axis.around(
@@ -150,15 +145,16 @@ final class FeltSection implements Section {
   }
 
   private static void addImage(
-      List<TargetRay> rays, String name, List<Band> bands, List<Line> lines) {
+      List<TargetRay> rays, boolean named, List<Band> bands, List<Line> lines) {
     boolean up = rays.get(0).sense() == Sense.UPRIGHT;
+    String name = "middle, " + (up ? "upright" : "inverted") + " image";
     Ink ink = up ? Ink.BLUE : Ink.VERMILION;
     double[] heights = values(rays, TargetRay::heightM);
     bands.add(band(rays, 0.05, new Band.Fill(ink, 0.15, false)));
     bands.add(band(rays, 0.25, new Band.Fill(ink, 0.25, false)));
     lines.add(
         new Line(
-            name.isEmpty() ? "" : "middle, " + name + " image",
+            named ? name : "",
             heights,
             values(rays, ray -> ray.felt().quantileM(0.5)),
             new Stroke(ink, up ? Dash.SOLID : Dash.DASHED, 2.0)));

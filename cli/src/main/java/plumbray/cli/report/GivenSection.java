@@ -3,6 +3,7 @@ package plumbray.cli.report;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.stream.Collectors;
 import plumbray.calibration.quantity.Quantity;
 import plumbray.calibration.sight.AirSetup;
 import plumbray.calibration.sight.CameraSetup;
@@ -42,6 +43,13 @@ final class GivenSection implements Section {
     table.row("Air known at a height of", number(air.atHeightM()), "m");
     table.row("Carbon dioxide", number(air.co2Ppm()), "ppm");
     table.row("Wavelength", number(air.wavelengthM() * NM_PER_M), "nm");
+    if (!air.channelWavelengthsM().isEmpty()) {
+      String each =
+          air.channelWavelengthsM().stream()
+              .map(wavelength -> number(wavelength * NM_PER_M))
+              .collect(Collectors.joining(", "));
+      table.row("Wavelengths of red, green and blue", each, "nm");
+    }
     table.row("Earth's radius", NumberText.significant(sight.path().earthRadiusM() / 1e3, 7), "km");
     table.addTo(page);
     page.close();

@@ -41,13 +41,12 @@ final class PlainWords implements Section {
   }
 
   private void addDistance(Markup page, SightMapping mapping) {
-    List<TargetRay> rays = PickedRays.of(optics, mapping);
-    if (rays.isEmpty()) {
+    if (mapping.branches().isEmpty()) {
       page.leaf(
           "li", "Nothing is seen at " + Metres.text(mapping.distanceM()) + " in the picture.");
     }
     Map<Double, List<TargetRay>> byHeight =
-        rays.stream()
+        PickedRays.of(optics, mapping).stream()
             .collect(Collectors.groupingBy(TargetRay::heightM, TreeMap::new, Collectors.toList()));
     byHeight.forEach(
         (height, images) -> page.leaf("li", line(mapping, height, images) + felt(images)));

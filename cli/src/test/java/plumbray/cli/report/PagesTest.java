@@ -14,6 +14,9 @@ import org.junit.jupiter.api.Test;
 import org.w3c.dom.Document;
 import org.w3c.dom.Element;
 import org.w3c.dom.NodeList;
+import plumbray.calibration.quantity.Quantity;
+import plumbray.calibration.sight.AirSetup;
+import plumbray.calibration.sight.PathSetup;
 import plumbray.calibration.sight.Region;
 import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.SightParameters;
@@ -28,6 +31,7 @@ import plumbray.imaging.fit.Warning;
 import plumbray.raymodel.diagnosis.HeightZone;
 import plumbray.raymodel.mapping.Branch;
 import plumbray.raymodel.mapping.Sense;
+import plumbray.raymodel.path.GroundProfile;
 
 class PagesTest {
 
@@ -222,6 +226,44 @@ class PagesTest {
             "Refractive index less 1 (millionths) against height")
         .doesNotContain("Colour fringes at 640 m");
     assertThat(sightPage()).contains("to the inverted image", "vanishing line", "grazing");
+  }
+
+  @Test
+  void coloursOfTheirOwnWavelengthsGetTheirFringes() {
+    Sight one = ReportSamples.asked(15.0);
+    AirSetup air = one.air();
+    AirSetup coloured =
+        new AirSetup(
+            air.temperatureK(),
+            air.atHeightM(),
+            air.pressurePa(),
+            air.relativeHumidity(),
+            air.co2Ppm(),
+            air.wavelengthM(),
+            List.of(610e-9, 540e-9, 460e-9));
+    String page = planned(one.withAir(coloured), Estimates.none());
+    assertThat(titles(WellFormed.parse(page))).contains("Colour fringes at 640 m");
+    assertThat(page).contains("610, 540 and 460 nm bend by different amounts");
+  }
+
+  @Test
+  void aDistanceBehindAHillHasWordsAndNoPictures() {
+    Sight one = ReportSamples.asked(15.0);
+    GroundProfile hill = new GroundProfile(new double[] {0, 300, 640}, new double[] {0, 30, 0});
+    Sight hidden =
+        new Sight(
+            one.name(),
+            one.camera(),
+            new PathSetup(6_371_000, hill, Quantity.held(0.0)),
+            one.air(),
+            one.profile(),
+            one.references(),
+            one.regions(),
+            0.0);
+    String page = planned(hidden, Estimates.none());
+    assertThat(page).contains("Nothing is seen at 640 m in the picture.");
+    assertThat(titles(WellFormed.parse(page)))
+        .doesNotContain("Rays to 640 m", "Magnification at 640 m", "Heights felt at 640 m");
   }
 
   /** Steep below h ln[E/(h (g/R_d - 0.0098))] with E = 15 K, h = 0.1 m, by hand: 0.873 m. */

@@ -15,6 +15,11 @@ import plumbray.raymodel.mapping.SightMapping;
 /**
  * What the colour channels see where the luminance sees one traced ray arrive.
  *
+ * <p>Where bending is weak, a channel's displacement from a straight ray stands to the luminance's
+ * as n - 1 at its wavelength, and its shift is that ratio less 1 times the displacement. Inverted
+ * images shift much less than that: their light turns back in the air almost as from a mirror, and
+ * the colours differ in the height at which it does. At a vanishing line shifts grow without bound.
+ *
  * @param distanceM distance of what it shows, m
  * @param apparentRad apparent elevation, rad
  * @param rowPx row in the photo at the principal column, px
