@@ -46,7 +46,7 @@ final class BendingSection implements Section {
     for (SightMapping mapping : ShownDistances.seen(optics)) {
       List<TargetRay> rays = PickedRays.of(optics, mapping);
       if (!rays.isEmpty()) {
-        page.open("div");
+        page.open("div", "class", "mapping");
         page.leaf("h3", "To " + Metres.text(mapping.distanceM()));
         page.add(plot(mapping.distanceM(), rays).svg(WIDTH_PX, HEIGHT_PX)).close();
       }

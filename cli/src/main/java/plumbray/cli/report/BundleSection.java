@@ -55,8 +55,9 @@ final class BundleSection implements Section {
             + " end in the ground before. Heights are much exaggerated. Where two rays meet at the"
             + " right, one thing is seen twice.");
     for (SightMapping mapping : ShownDistances.seen(optics)) {
+      page.open("div", "class", "mapping");
       page.leaf("h3", "To " + Metres.text(mapping.distanceM()));
-      page.add(plot(mapping).svg(WIDTH_PX, HEIGHT_PX));
+      page.add(plot(mapping).svg(WIDTH_PX, HEIGHT_PX)).close();
     }
     page.close();
   }

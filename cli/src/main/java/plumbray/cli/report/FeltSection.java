@@ -56,7 +56,7 @@ final class FeltSection implements Section {
     for (SightMapping mapping : ShownDistances.seen(optics)) {
       page.leaf("h3", "To " + Metres.text(mapping.distanceM()));
       page.open("div", "class", "pair");
-      page.open("div").add(plot(mapping).svg(WIDTH_PX, HEIGHT_PX)).close();
+      page.open("div", "class", "mapping").add(plot(mapping).svg(WIDTH_PX, HEIGHT_PX)).close();
       page.open("div");
       table(findings.targetsAt(mapping)).addTo(page);
       page.close().close();

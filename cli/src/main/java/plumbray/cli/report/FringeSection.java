@@ -58,7 +58,7 @@ final class FringeSection implements Section {
             + " to the inverted image.");
     page.open("div", "class", "pair");
     for (SightMapping mapping : ShownDistances.seen(optics)) {
-      page.open("div");
+      page.open("div", "class", "mapping");
       page.leaf("h3", "At " + Metres.text(mapping.distanceM()));
       page.add(plot(mapping).svg(WIDTH_PX, HEIGHT_PX)).close();
     }

@@ -60,7 +60,7 @@ final class MagnificationSection implements Section {
             + " their heads. At the vanishing line it grows without bound.");
     page.open("div", "class", "pair");
     for (SightMapping mapping : ShownDistances.seen(optics)) {
-      page.open("div");
+      page.open("div", "class", "mapping");
       page.leaf("h3", "At " + Metres.text(mapping.distanceM()));
       page.add(plot(mapping).svg(WIDTH_PX, HEIGHT_PX)).close();
     }
