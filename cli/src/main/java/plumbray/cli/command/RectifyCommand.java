@@ -39,9 +39,11 @@ final class RectifyCommand implements Callable<Integer> {
   @Override
   public Integer call() throws IOException {
     int threads = Runtime.getRuntime().availableProcessors();
-    Path picture =
+    RectifyWorker.Redrawn redrawn =
         new RectifyWorker(redraw.options(), threads).rectify(heldFile, photoFile, folder);
-    parent.terminal().result(picture + " is drawn");
+    Terminal terminal = parent.terminal();
+    terminal.result(redrawn.picture() + " is drawn");
+    redrawn.caution().map(w -> ResultLines.caution(heldFile, w)).ifPresent(terminal::warning);
     return ExitStatus.DONE.code();
   }
 }

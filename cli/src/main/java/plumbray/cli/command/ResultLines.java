@@ -1,5 +1,6 @@
 package plumbray.cli.command;
 
+import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
@@ -9,6 +10,7 @@ import plumbray.cli.document.Numbers;
 import plumbray.cli.report.ZoneWords;
 import plumbray.imaging.diagnosis.StretchZones;
 import plumbray.imaging.fit.SightLine;
+import plumbray.imaging.fit.Warning;
 
 /** Says results shortly, a line each. */
 final class ResultLines {
@@ -45,6 +47,11 @@ final class ResultLines {
                     + " steeper than autoconvective "
                     + ZoneWords.of(stretch.zones()))
         .toList();
+  }
+
+  /** Why the results of a file may not be as exact as they should. */
+  static String caution(Path file, Warning warning) {
+    return file + ": " + warning.message() + " (" + warning.code() + ")";
   }
 
   /** What was estimated, a line each, by the sight file's names and units. */

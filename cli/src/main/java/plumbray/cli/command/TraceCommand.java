@@ -49,6 +49,10 @@ final class TraceCommand implements Callable<Integer> {
     TraceWorker.Traced traced = TraceWorker.trace(sightFile, files);
     traced.lines().forEach(line -> parent.terminal().result(ResultLines.sightLine(line)));
     ResultLines.steepAir(traced.steep()).forEach(line -> parent.terminal().result(line));
+    traced
+        .caution()
+        .map(w -> ResultLines.caution(sightFile, w))
+        .ifPresent(parent.terminal()::warning);
     return ExitStatus.DONE.code();
   }
 }

@@ -32,6 +32,7 @@ public final class SightReport {
     Sight sight = optics.sight();
     List<Section> sections = new ArrayList<>();
     sections.add(SightReport::lead);
+    optics.caution().ifPresent(w -> sections.add(page -> page.leaf("p", w.message())));
     sections.add(new PlainWords(optics, findings.steep()));
     sections.add(new SightLineSection(findings.lines()));
     sections.add(new BundleSection(optics));

@@ -10,6 +10,7 @@ import plumbray.cli.document.InputException;
 import plumbray.cli.document.MappingCsv;
 import plumbray.cli.document.WholeFile;
 import plumbray.imaging.fit.SightOptics;
+import plumbray.imaging.fit.Warning;
 import plumbray.imaging.measure.MappingRow;
 import plumbray.imaging.photo.Photo;
 import plumbray.imaging.photo.PhotoException;
@@ -21,6 +22,14 @@ import plumbray.imaging.rectify.RedrawOptions;
 public final class RectifyWorker {
   private final RedrawOptions options;
   private final int threads;
+
+  /**
+   * What came of it.
+   *
+   * @param picture the redrawn photo's file
+   * @param caution why it may not be as exact as it should, where that is so
+   */
+  public record Redrawn(Path picture, Optional<Warning> caution) {}
 
   /**
    * Creates a worker.
@@ -39,10 +48,10 @@ public final class RectifyWorker {
    * @param heldFile a fit, or a sight file whose quantities are all held
    * @param photoFile the photo
    * @param folder where the results go
-   * @return the redrawn photo's file
+   * @return what came of it
    * @throws IOException when a file cannot be written
    */
-  public Path rectify(Path heldFile, Path photoFile, Path folder) throws IOException {
+  public Redrawn rectify(Path heldFile, Path photoFile, Path folder) throws IOException {
     HeldSight held = HeldSight.read(heldFile);
     SightOptics optics = Tracing.optics(heldFile, held.sight(), held.estimates().names());
     ResultFiles files = new ResultFiles(folder, BatchPhoto.resultName(photoFile));
@@ -51,7 +60,7 @@ public final class RectifyWorker {
     Rectified rectified = new Redrawing(optics, options, threads).redraw(photo);
     List<Path> written = Redrawing.write(rectified, photoFile, files);
     WholeFile.write(files.mapping(), MappingCsv.text(MappingRow.of(optics, held.estimates())));
-    return written.get(0);
+    return new Redrawn(written.get(0), optics.caution());
   }
 
   private static Photo photo(HeldSight held, Path photoFile) {

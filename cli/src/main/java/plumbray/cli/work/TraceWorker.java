@@ -3,6 +3,7 @@ package plumbray.cli.work;
 import java.io.IOException;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Optional;
 import plumbray.calibration.quantity.Parameter;
 import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.SightParameters;
@@ -23,6 +24,7 @@ import plumbray.imaging.fit.SightLine;
 import plumbray.imaging.fit.SightOptics;
 import plumbray.imaging.fit.StretchTemperatures;
 import plumbray.imaging.fit.TemperatureRow;
+import plumbray.imaging.fit.Warning;
 import plumbray.imaging.measure.MappingRow;
 
 /**
@@ -37,8 +39,10 @@ public final class TraceWorker {
    *
    * @param lines what can be seen at each distance in use
    * @param steep heights at which the air is steeper than autoconvective, over each stretch
+   * @param caution why it may not be as exact as it should, where that is so
    */
-  public record Traced(List<SightLine> lines, List<StretchZones> steep) {}
+  public record Traced(
+      List<SightLine> lines, List<StretchZones> steep, Optional<Warning> caution) {}
 
   /**
    * Writes the tables, and the page that shows them.
@@ -58,7 +62,7 @@ public final class TraceWorker {
     Digest input = Digest.of(sightFile.getFileName().toString(), text);
     Provenance provenance = new Provenance(List.of(input), ProgramVersion.name());
     WholeFile.write(files.page(), new SightReport(files.name(), findings, provenance).html());
-    return new Traced(findings.lines(), findings.steep());
+    return new Traced(findings.lines(), findings.steep(), findings.optics().caution());
   }
 
   private static void writeTables(SightFindings findings, ResultFiles files) throws IOException {

@@ -2,6 +2,7 @@ package plumbray.imaging.fit;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import java.util.TreeSet;
 import plumbray.calibration.camera.Camera;
 import plumbray.calibration.sight.Reference;
@@ -192,6 +193,24 @@ public final class SightOptics {
   /** The air along the path, tabulated; for one thread at a time. */
   public PathAir air() {
     return air;
+  }
+
+  /** Says so where some mapping could not be made as exact as {@link #TOLERANCE_PX} asks. */
+  public Optional<Warning> caution() {
+    return caution(fan);
+  }
+
+  static Optional<Warning> caution(RayFan fan) {
+    return fan.accurate()
+        ? Optional.empty()
+        : Optional.of(
+            new Warning(
+                "inexact-mapping",
+                "This air folds or bends some lines of sight so sharply that they could not be"
+                    + " followed to "
+                    + TOLERANCE_PX
+                    + " px: heights there may be off by more than their sigmas say. Nearer"
+                    + " distances, a narrower view or a smoother profile would help."));
   }
 
   /** The rays. */

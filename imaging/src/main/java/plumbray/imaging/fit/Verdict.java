@@ -1,6 +1,7 @@
 package plumbray.imaging.fit;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
@@ -9,6 +10,7 @@ import org.apache.commons.math3.stat.regression.SimpleRegression;
 import plumbray.calibration.estimate.Degeneracy;
 import plumbray.calibration.estimate.Solution;
 import plumbray.calibration.sight.Sight;
+import plumbray.calibration.sight.SightParameters;
 import plumbray.imaging.reading.ReferenceObservation;
 import plumbray.imaging.reading.StaffObservation;
 import plumbray.imaging.reading.StripLook;
@@ -47,7 +49,16 @@ final class Verdict {
       shimmer();
       misfit();
       solver(solution);
+      mapping(solution);
     }
+  }
+
+  private void mapping(Solution solution) {
+    SightParameters parameters = adjusted.observation().sightParameters();
+    double[] values = Arrays.copyOf(solution.values(), parameters.parameters().size());
+    SightOptics.of(parameters.heldAt(values))
+        .caution()
+        .ifPresent(caution -> doubt(caution.code(), "%s", caution.message()));
   }
 
   Optional<String> error() {
