@@ -34,6 +34,7 @@ public final class PhotoReport {
     List<Section> sections = new ArrayList<>();
     sections.add(new VerdictSection(result, key, lines));
     sections.add(new PictureSection(input, lines));
+    sections.add(new SigmaSection(input));
     sections.add(new ReferenceSection(input, optics));
     optics.ifPresent(o -> addAir(sections, o, lines));
     sections.add(new EstimateSection(result));

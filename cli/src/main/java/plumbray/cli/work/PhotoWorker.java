@@ -25,6 +25,7 @@ import plumbray.imaging.photo.PhotoException;
 import plumbray.imaging.photo.PhotoReader;
 import plumbray.imaging.rectify.Rectified;
 import plumbray.imaging.rectify.RedrawOptions;
+import plumbray.imaging.rectify.SigmaPlane;
 
 /**
  * Fits one photo and writes all of its results. The fit file comes last and lists the digests of
@@ -136,8 +137,9 @@ public final class PhotoWorker {
       Files.deleteIfExists(stale);
     }
     Files.deleteIfExists(files.mask());
+    Files.deleteIfExists(files.sigma());
     Files.deleteIfExists(files.mapping());
-    writePage(fitted, Optional.empty(), files);
+    writePage(fitted, Optional.empty(), Optional.empty(), files);
     FitDocument fit =
         FitDocument.failed(fitted.result(), fitted.inputs())
             .withOutputs(digests(List.of(files.page())), Optional.empty());
@@ -148,16 +150,25 @@ public final class PhotoWorker {
   private FitDocument write(Fitted fitted, ResultFiles files) throws IOException {
     FitResult result = fitted.result();
     SightOptics optics = SightOptics.of(result.sight(), result.estimates().names());
-    WholeFile.write(files.mapping(), MappingCsv.text(MappingRow.of(optics, result.estimates())));
+    List<MappingRow> rows = MappingRow.of(optics, result.estimates());
+    WholeFile.write(files.mapping(), MappingCsv.text(rows));
     List<Path> outputs = new ArrayList<>(List.of(files.mapping(), files.page()));
-    Optional<Rectified> redrawn =
-        fitted
-            .photo()
-            .flatMap(p -> redraw.map(way -> new Redrawing(optics, way, threads).redraw(p)));
+    Optional<Redrawing> redrawing =
+        fitted.photo().flatMap(p -> redraw).map(way -> new Redrawing(optics, way, threads));
+    Optional<Rectified> redrawn = redrawing.map(r -> r.redraw(fitted.photo().get()));
+    Optional<SigmaPlane> sigma =
+        redrawing
+            .filter(r -> !result.estimates().names().isEmpty())
+            .map(r -> Uncertainty.plane(r.map(), rows));
     if (redrawn.isPresent()) {
       outputs.addAll(Redrawing.write(redrawn.get(), fitted.task().photo().get(), files));
     }
-    writePage(fitted, redrawn, files);
+    Files.deleteIfExists(files.sigma());
+    if (sigma.isPresent()) {
+      Uncertainty.write(sigma.get(), files.sigma());
+      outputs.add(files.sigma());
+    }
+    writePage(fitted, redrawn, sigma, files);
     FitDocument fit =
         FitDocument.of(result, optics, fitted.inputs())
             .withOutputs(digests(outputs), redrawn.isPresent() ? way() : Optional.empty());
@@ -165,12 +176,13 @@ public final class PhotoWorker {
     return fit;
   }
 
-  private static void writePage(Fitted fitted, Optional<Rectified> redrawn, ResultFiles files)
+  private static void writePage(
+      Fitted fitted, Optional<Rectified> redrawn, Optional<SigmaPlane> sigma, ResultFiles files)
       throws IOException {
     Provenance provenance = new Provenance(fitted.inputs(), ProgramVersion.name());
     ReportInput input =
         new ReportInput(
-            fitted.task().label(), fitted.result(), fitted.photo(), redrawn, provenance);
+            fitted.task().label(), fitted.result(), fitted.photo(), redrawn, sigma, provenance);
     WholeFile.write(files.page(), new PhotoReport(input).html());
   }
 

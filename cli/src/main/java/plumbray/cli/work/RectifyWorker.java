@@ -1,6 +1,7 @@
 package plumbray.cli.work;
 
 import java.io.IOException;
+import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Optional;
@@ -43,7 +44,7 @@ public final class RectifyWorker {
   }
 
   /**
-   * Writes the redrawn photo, its mask and the mapping.
+   * Writes the redrawn photo, its mask, the mapping and, after a fit, its uncertainty.
    *
    * @param heldFile a fit, or a sight file whose quantities are all held
    * @param photoFile the photo
@@ -57,9 +58,16 @@ public final class RectifyWorker {
     ResultFiles files = new ResultFiles(folder, BatchPhoto.resultName(photoFile));
     Photo photo = photo(held, photoFile);
     WholeFile.makeFolder(folder);
-    Rectified rectified = new Redrawing(optics, options, threads).redraw(photo);
+    Redrawing redrawing = new Redrawing(optics, options, threads);
+    Rectified rectified = redrawing.redraw(photo);
     List<Path> written = Redrawing.write(rectified, photoFile, files);
-    WholeFile.write(files.mapping(), MappingCsv.text(MappingRow.of(optics, held.estimates())));
+    List<MappingRow> rows = MappingRow.of(optics, held.estimates());
+    WholeFile.write(files.mapping(), MappingCsv.text(rows));
+    if (held.estimates().names().isEmpty()) {
+      Files.deleteIfExists(files.sigma());
+    } else {
+      Uncertainty.write(Uncertainty.plane(redrawing.map(), rows), files.sigma());
+    }
     return new Redrawn(written.get(0), optics.caution());
   }
 

@@ -69,6 +69,11 @@ final class Redrawing {
     return ColourRectifier.rectify(photo, maps, options, threads);
   }
 
+  /** Where everything is seen in the light of the luminance. */
+  RectifyMap map() {
+    return map(optics);
+  }
+
   private RectifyMap map(int channel) {
     return map(SightOptics.ofChannel(optics.sight(), channel));
   }

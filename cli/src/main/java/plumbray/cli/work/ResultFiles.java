@@ -43,6 +43,11 @@ public record ResultFiles(Path folder, String name) {
     return of(".mask.png");
   }
 
+  /** How surely the pixels of the redrawn photo stand where they do. */
+  public Path sigma() {
+    return of(".sigma.tif");
+  }
+
   /** The traced rays. */
   public Path mapping() {
     return of(".mapping.csv");

@@ -77,7 +77,12 @@ class PagesTest {
     FitResult failed = FitResult.failed(input.result().asked(), "no staff was found in the box");
     ReportInput bare =
         new ReportInput(
-            "bad.jpg", failed, input.photo(), Optional.empty(), ReportSamples.provenance());
+            "bad.jpg",
+            failed,
+            input.photo(),
+            Optional.empty(),
+            Optional.empty(),
+            ReportSamples.provenance());
     return new PhotoReport(bare).html();
   }
 

@@ -33,6 +33,7 @@ import plumbray.imaging.photo.Photo;
 import plumbray.imaging.photo.PixelBox;
 import plumbray.imaging.rectify.MaskPlane;
 import plumbray.imaging.rectify.Rectified;
+import plumbray.imaging.rectify.SigmaPlane;
 import plumbray.imaging.scene.Backdrop;
 import plumbray.imaging.scene.LinearColour;
 import plumbray.imaging.scene.Paint;
@@ -241,7 +242,19 @@ final class ReportSamples {
         result(excessK, status, Optional.of(photo)),
         Optional.of(photo),
         Optional.of(new Rectified(simulation.straightPhoto(), mask())),
+        Optional.of(sigma()),
         provenance());
+  }
+
+  /** Rising from row to row, not known at the foot. */
+  private static SigmaPlane sigma() {
+    MaskPlane mask = mask();
+    float[] values = new float[mask.widthPx() * mask.heightPx()];
+    for (int i = 0; i < values.length; i++) {
+      int row = i / mask.widthPx();
+      values[i] = row > 0.9 * mask.heightPx() ? Float.NaN : 0.3f * row / mask.heightPx();
+    }
+    return new SigmaPlane(mask.widthPx(), mask.heightPx(), values);
   }
 
   static Provenance provenance() {

@@ -23,8 +23,12 @@ public final class RectifyMap {
   private final Camera camera;
   private final List<MappedRegion> regions;
 
-  /** A region with its table; without outline it holds all pixels. */
-  record MappedRegion(Optional<Outline> outline, ElevationTable table) {
+  /** A region with its distance (NaN: ground) and table; without outline it holds all pixels. */
+  record MappedRegion(Optional<Outline> outline, double distanceM, ElevationTable table) {
+    MappedRegion(Optional<Outline> outline, ElevationTable table) {
+      this(outline, Double.NaN, table);
+    }
+
     boolean holds(double u, double v) {
       return outline.isEmpty() || outline.get().holds(u, v);
     }
@@ -61,7 +65,7 @@ public final class RectifyMap {
                   region.ground()
                       ? groundTable(straight, path, fan, span)
                       : table(straight, fan, distanceM, span));
-      mapped.add(new MappedRegion(region.polygonPx().map(Outline::new), table));
+      mapped.add(new MappedRegion(region.polygonPx().map(Outline::new), region.distanceM(), table));
     }
     return new RectifyMap(camera, mapped);
   }
@@ -85,6 +89,15 @@ public final class RectifyMap {
 
   int heightPx() {
     return camera.heightPx();
+  }
+
+  /** Distance of a region's things, m; NaN for the ground. */
+  double distanceM(int region) {
+    return regions.get(region).distanceM();
+  }
+
+  int regionCount() {
+    return regions.size();
   }
 
   /** A reader of this map for one thread. */
@@ -156,6 +169,16 @@ public final class RectifyMap {
     /** True elevation on the axis at which the table answered, rad. */
     double onAxisRad() {
       return answer.onAxisRad;
+    }
+
+    /** Which region answered. */
+    int region() {
+      return (int) (place >> 32);
+    }
+
+    /** Apparent elevation in the photo, rad, where shown. */
+    double apparentRad() {
+      return answer.apparentRad;
     }
 
     /** Starts a stretch of pixels, after which {@link #isSteady} is asked. */

@@ -42,6 +42,7 @@ final class RowReader {
     double v;
     double stretch;
     double onAxisRad;
+    double apparentRad;
   }
 
   /** The map of output row y; overwritten by the next call. */
@@ -70,7 +71,9 @@ final class RowReader {
   private void lookUp(int x, int y) {
     cursor.look(x, y);
     Span span = spans.add(x, x + 1, cursor.code());
+    span.region = cursor.region();
     if (span.isShown()) {
+      span.apparentRad.constant(cursor.apparentRad());
       span.u.constant(cursor.sourceU() - x);
       span.v.constant(cursor.sourceV() - y);
       span.stretch.constant(cursor.stretch());
@@ -104,6 +107,7 @@ final class RowReader {
     node.place = cursor.place();
     node.code = cursor.code();
     node.onAxisRad = cursor.onAxisRad();
+    node.apparentRad = cursor.apparentRad();
     // relative to the pixel, so that a map that moves nothing is continued without rounding
     node.u = cursor.sourceU() - x;
     node.v = cursor.sourceV() - y;
@@ -121,11 +125,16 @@ final class RowReader {
 
   private boolean continued(int first, int last) {
     Span span = spans.add(first, last + 1, nodes[0].code);
+    span.region = (int) (nodes[0].place >> 32);
     if (!span.isShown()) {
       return true;
     }
     double middle = nodes[1].x - first;
     double end = last - first;
+    span.apparentRad.through(
+        new double[] {nodes[0].apparentRad, nodes[1].apparentRad, nodes[2].apparentRad},
+        middle,
+        end);
     span.u.through(new double[] {nodes[0].u, nodes[1].u, nodes[2].u}, middle, end);
     span.v.through(new double[] {nodes[0].v, nodes[1].v, nodes[2].v}, middle, end);
     span.stretch.through(

@@ -14,6 +14,12 @@ final class Span {
   /** Mask code of all its pixels. */
   int code;
 
+  /** Region that answered. */
+  int region;
+
+  /** Apparent elevation in the photo, rad. */
+  final Parabola apparentRad = new Parabola();
+
   /** Column in the photo less the output's own, px. */
   final Parabola u = new Parabola();
 
