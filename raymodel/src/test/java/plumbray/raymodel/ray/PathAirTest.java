@@ -5,8 +5,8 @@ import static org.assertj.core.api.Assertions.assertThatThrownBy;
 
 import java.util.Arrays;
 import java.util.List;
+import java.util.function.DoubleFunction;
 import java.util.function.DoubleUnaryOperator;
-import java.util.function.IntFunction;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
@@ -31,10 +31,11 @@ class PathAirTest {
   /** Rounding of a closed solution over a kilometre, m. */
   private static final double CLOSED_M = 1e-9;
 
-  /** As for one stratified air: what differences of rays can show, as a part of the largest. */
-  private static final double PART = 2e-6;
+  /** As for one stratified air: as a part of the largest derivative on the way. */
+  private static final double PART = 1e-8;
 
-  private static final double NOISE_M = 3e-11;
+  /** Rounding of the rays' heights, 1e-12 m, times the sum of the differences' weights, 3.7. */
+  private static final double NOISE_M = 4e-12;
 
   private static final SightPath LEVEL = new SightPath(6_371_000, GroundProfile.level(), 0.0);
 
@@ -137,14 +138,12 @@ class PathAirTest {
         RayTrace ray = trace(two, path, 1.6, angle);
         for (int k = 0; k < two.values().length; k++) {
           int parameter = k;
-          double step = 1e-3 * Math.max(0.05, Math.abs(two.values()[k]));
-          double[] points = Difference.points(two.values()[k], step);
-          compare(ray, 2 + k, step, i -> trace(two.with(parameter, points[i]), path, 1.6, angle));
+          double middle = two.values()[k];
+          double step = 4e-3 * Math.max(0.05, Math.abs(middle));
+          compare(ray, 2 + k, middle, step, v -> trace(two.with(parameter, v), path, 1.6, angle));
         }
-        double[] angles = Difference.points(angle, 2e-6);
-        compare(ray, 0, 2e-6, i -> trace(two, path, 1.6, angles[i]));
-        double[] heights = Difference.points(1.6, 1e-3);
-        compare(ray, 1, 1e-3, i -> trace(two, path, heights[i], angle));
+        compare(ray, 0, angle, 4e-6, v -> trace(two, path, 1.6, v));
+        compare(ray, 1, 1.6, 4e-3, v -> trace(two, path, v, angle));
       }
     }
   }
@@ -206,18 +205,26 @@ class PathAirTest {
     return new RayTracer(two.air(), path, DISTANCES, true, FINE_M).trace(heightM, angle);
   }
 
-  private static void compare(RayTrace ray, int k, double step, IntFunction<RayTrace> neighbours) {
-    RayTrace[] around = new RayTrace[6];
-    Arrays.setAll(around, neighbours);
+  private static void compare(
+      RayTrace ray, int k, double middle, double step, DoubleFunction<RayTrace> changed) {
+    RayTrace[] around = traces(Difference.points(middle, step), changed);
+    RayTrace[] nearer = traces(Difference.points(middle, 0.5 * step), changed);
     double largest = 0.0;
     for (int d = 0; d < ray.reached(); d++) {
-      int target = d;
-      double[] elevations = Arrays.stream(around).mapToDouble(t -> t.elevationM(target)).toArray();
       double found = ray.sensitivity(d, k);
       largest = Math.max(largest, Math.abs(found));
-      assertThat(Math.abs(found - Difference.slope(elevations, step)))
+      double truth = Difference.extrapolated(elevations(around, d), elevations(nearer, d), step);
+      assertThat(Math.abs(found - truth))
           .as("target %s, derivative %s = %s at %s rad", d, k, found, ray.apparentRad())
           .isLessThan(PART * largest + NOISE_M / step);
     }
+  }
+
+  private static RayTrace[] traces(double[] values, DoubleFunction<RayTrace> changed) {
+    return Arrays.stream(values).mapToObj(changed).toArray(RayTrace[]::new);
+  }
+
+  private static double[] elevations(RayTrace[] rays, int target) {
+    return Arrays.stream(rays).mapToDouble(t -> t.elevationM(target)).toArray();
   }
 }
