@@ -30,17 +30,26 @@ final class CartesianRay {
     long steps = Math.round(toM / stepM);
     for (long i = 0; i < steps; i++) {
       double x = i * stepM;
-      double groundSlope = path.ground().slope(x + 0.5 * stepM);
-      double ground = path.ground().elevationM(x) - groundSlope * x;
-      double[] a = rates(x, y, t, ground, groundSlope);
-      double h = 0.5 * stepM;
-      double[] b = rates(x + h, y + h * a[0], t + h * a[1], ground, groundSlope);
-      double[] c = rates(x + h, y + h * b[0], t + h * b[1], ground, groundSlope);
-      double[] d = rates(x + stepM, y + stepM * c[0], t + stepM * c[1], ground, groundSlope);
-      y += stepM / 6.0 * (a[0] + 2.0 * b[0] + 2.0 * c[0] + d[0]);
-      t += stepM / 6.0 * (a[1] + 2.0 * b[1] + 2.0 * c[1] + d[1]);
+      double[] next = step(x, y, t, stepM);
+      y = next[0];
+      t = next[1];
     }
     return y;
+  }
+
+  /** Elevation and t after one step, which must not pass a bend of the ground. */
+  double[] step(double x, double y, double t, double stepM) {
+    double groundSlope = path.ground().slope(x + 0.5 * stepM);
+    double ground = path.ground().elevationM(x) - groundSlope * x;
+    double h = 0.5 * stepM;
+    double[] a = rates(x, y, t, ground, groundSlope);
+    double[] b = rates(x + h, y + h * a[0], t + h * a[1], ground, groundSlope);
+    double[] c = rates(x + h, y + h * b[0], t + h * b[1], ground, groundSlope);
+    double[] d = rates(x + stepM, y + stepM * c[0], t + stepM * c[1], ground, groundSlope);
+    return new double[] {
+      y + stepM / 6.0 * (a[0] + 2.0 * b[0] + 2.0 * c[0] + d[0]),
+      t + stepM / 6.0 * (a[1] + 2.0 * b[1] + 2.0 * c[1] + d[1])
+    };
   }
 
   private double[] rates(double x, double y, double t, double ground, double groundSlope) {
