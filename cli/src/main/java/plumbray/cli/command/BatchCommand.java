@@ -22,6 +22,7 @@ import plumbray.cli.work.PhotoTask;
 import plumbray.cli.work.PhotoWorker;
 import plumbray.imaging.fit.FitStatus;
 import plumbray.imaging.fit.SightFit;
+import plumbray.imaging.photo.WriteOptions;
 import plumbray.imaging.rectify.RedrawOptions;
 
 /** {@code plumbray batch}: fits, redraws and reports every photo of a batch file. */
@@ -55,14 +56,17 @@ final class BatchCommand implements Callable<Integer> {
 
   @Mixin private RedrawChoice redraw;
 
+  @Mixin private FileChoice storing;
+
   @Override
   public Integer call() throws IOException {
     int side = jobs();
     RedrawOptions way = redraw.options();
+    WriteOptions stored = storing.options();
     List<PhotoTask> tasks = BatchReader.read(batchFile).stream().map(PhotoTask::of).toList();
     WholeFile.makeFolder(folder);
     ProgressLine progress = ProgressLine.of(parent.terminal());
-    PhotoWorker worker = new PhotoWorker(new SightFit()::fit, Optional.of(way), 1);
+    PhotoWorker worker = new PhotoWorker(new SightFit()::fit, Optional.of(way), 1).storing(stored);
     BatchDriver driver = new BatchDriver(worker, folder, side, progress);
     List<PhotoOutcome> outcomes =
         driver.run(batchFile.getFileName().toString(), List.of(Digest.of(batchFile)), tasks);

@@ -36,14 +36,19 @@ final class RectifyCommand implements Callable<Integer> {
 
   @Mixin private RedrawChoice redraw;
 
+  @Mixin private FileChoice storing;
+
   @Override
   public Integer call() throws IOException {
     int threads = Runtime.getRuntime().availableProcessors();
-    RectifyWorker.Redrawn redrawn =
-        new RectifyWorker(redraw.options(), threads).rectify(heldFile, photoFile, folder);
+    RectifyWorker worker = new RectifyWorker(redraw.options(), storing.options(), threads);
+    RectifyWorker.Redrawn redrawn = worker.rectify(heldFile, photoFile, folder);
     Terminal terminal = parent.terminal();
     terminal.result(redrawn.picture() + " is drawn");
     redrawn.caution().map(w -> ResultLines.caution(heldFile, w)).ifPresent(terminal::warning);
+    redrawn
+        .complaints()
+        .forEach(complaint -> terminal.warning("note: " + photoFile + ": " + complaint));
     return ExitStatus.DONE.code();
   }
 }

@@ -16,13 +16,16 @@ import plumbray.imaging.fit.FitStatus;
  * @param sight the sight, all quantities held
  * @param estimates what a fit estimated of it; none from a sight file
  * @param jitterPx standard deviation of the shimmer that the fit found, px; 0 from a sight file
+ * @param fit the whole fit; none from a sight file
  */
-public record HeldSight(Path file, Sight sight, Estimates estimates, double jitterPx) {
+public record HeldSight(
+    Path file, Sight sight, Estimates estimates, double jitterPx, Optional<FitDocument> fit) {
   /** Checks that all is there. */
   public HeldSight {
     Objects.requireNonNull(file, "file");
     Objects.requireNonNull(sight, "sight");
     Objects.requireNonNull(estimates, "estimates");
+    Objects.requireNonNull(fit, "fit");
   }
 
   /**
@@ -40,7 +43,7 @@ public record HeldSight(Path file, Sight sight, Estimates estimates, double jitt
     }
     Sight sight = SightReader.read(root);
     checkHeld(file, sight);
-    return new HeldSight(file, sight, Estimates.none(), 0.0);
+    return new HeldSight(file, sight, Estimates.none(), 0.0, Optional.empty());
   }
 
   private static HeldSight ofFit(Path file, FitDocument fit) {
@@ -52,7 +55,7 @@ public record HeldSight(Path file, Sight sight, Estimates estimates, double jitt
     }
     checkHeld(file, fit.sight());
     double jitterPx = Double.isNaN(fit.jitterPx()) ? 0.0 : fit.jitterPx();
-    return new HeldSight(file, fit.sight(), fit.estimates(), jitterPx);
+    return new HeldSight(file, fit.sight(), fit.estimates(), jitterPx, Optional.of(fit));
   }
 
   private static void checkHeld(Path file, Sight sight) {

@@ -12,6 +12,7 @@ import plumbray.cli.document.FitWriter;
 import plumbray.cli.document.InputException;
 import plumbray.cli.document.MappingCsv;
 import plumbray.cli.document.ProgramVersion;
+import plumbray.cli.document.RedrawnOrigin;
 import plumbray.cli.document.WholeFile;
 import plumbray.cli.report.PhotoReport;
 import plumbray.cli.report.Provenance;
@@ -19,10 +20,13 @@ import plumbray.cli.report.ReportInput;
 import plumbray.imaging.fit.FitResult;
 import plumbray.imaging.fit.FitStatus;
 import plumbray.imaging.fit.SightOptics;
+import plumbray.imaging.fit.Warning;
 import plumbray.imaging.measure.MappingRow;
+import plumbray.imaging.metadata.PhotoOrigin;
 import plumbray.imaging.photo.Photo;
 import plumbray.imaging.photo.PhotoException;
 import plumbray.imaging.photo.PhotoReader;
+import plumbray.imaging.photo.WriteOptions;
 import plumbray.imaging.rectify.Rectified;
 import plumbray.imaging.rectify.RedrawOptions;
 import plumbray.imaging.rectify.SigmaPlane;
@@ -34,6 +38,7 @@ import plumbray.imaging.rectify.SigmaPlane;
 public final class PhotoWorker {
   private final Fitting fitting;
   private final Optional<RedrawOptions> redraw;
+  private final WriteOptions storing;
   private final int threads;
 
   /**
@@ -44,9 +49,24 @@ public final class PhotoWorker {
    * @param threads how many threads one photo may use
    */
   public PhotoWorker(Fitting fitting, Optional<RedrawOptions> redraw, int threads) {
+    this(fitting, redraw, WriteOptions.likeSource(), threads);
+  }
+
+  private PhotoWorker(
+      Fitting fitting, Optional<RedrawOptions> redraw, WriteOptions storing, int threads) {
     this.fitting = fitting;
     this.redraw = redraw;
+    this.storing = storing.withThreads(threads);
     this.threads = threads;
+  }
+
+  /**
+   * The same, storing redrawn photos otherwise.
+   *
+   * @param wanted how to store them
+   */
+  public PhotoWorker storing(WriteOptions wanted) {
+    return new PhotoWorker(fitting, redraw, wanted, threads);
   }
 
   /**
@@ -62,7 +82,7 @@ public final class PhotoWorker {
   }
 
   private Optional<String> way() {
-    return redraw.map(RedrawOptions::label);
+    return redraw.map(options -> options.label() + storing.label());
   }
 
   /**
@@ -120,9 +140,24 @@ public final class PhotoWorker {
     FitResult result =
         complaint(task, photo)
             .map(error -> FitResult.failed(task.sight(), error))
-            .orElseGet(() -> fitting.fit(task.sight(), photo));
+            .orElseGet(() -> heeded(fitting.fit(task.sight(), photo), photo));
     Fitted fitted = new Fitted(task, photo, result, inputs);
     return result.status() == FitStatus.FAILED ? writeFailed(fitted, files) : write(fitted, files);
+  }
+
+  /** A fit to light that may not be what the photo means is doubtful. */
+  private FitResult heeded(FitResult result, Optional<Photo> photo) {
+    FitResult heeded =
+        photo
+            .flatMap(Photo::profileComplaint)
+            .map(complaint -> result.doubted(new Warning("colour-profile", complaint + ".")))
+            .orElse(result);
+    List<String> complaints =
+        photo.filter(p -> redraw.isPresent()).map(p -> p.metadata().complaints()).orElse(List.of());
+    for (String complaint : complaints) {
+      heeded = heeded.noted(new Warning("metadata", "Of the photo, " + complaint + "."));
+    }
+    return heeded;
   }
 
   private static Optional<Photo> photo(PhotoTask task) throws PhotoException {
@@ -160,8 +195,9 @@ public final class PhotoWorker {
         redrawing
             .filter(r -> !result.estimates().names().isEmpty())
             .map(r -> Uncertainty.plane(r.map(), rows));
+    FitDocument fit = FitDocument.of(result, optics, fitted.inputs());
     if (redrawn.isPresent()) {
-      outputs.addAll(Redrawing.write(redrawn.get(), fitted.task().photo().get(), files));
+      outputs.addAll(writeRedrawn(redrawn.get(), fit, fitted.task().photo().get(), files));
     }
     Files.deleteIfExists(files.sigma());
     if (sigma.isPresent()) {
@@ -169,11 +205,15 @@ public final class PhotoWorker {
       outputs.add(files.sigma());
     }
     writePage(fitted, redrawn, sigma, files);
-    FitDocument fit =
-        FitDocument.of(result, optics, fitted.inputs())
-            .withOutputs(digests(outputs), redrawn.isPresent() ? way() : Optional.empty());
+    fit = fit.withOutputs(digests(outputs), redrawn.isPresent() ? way() : Optional.empty());
     WholeFile.write(files.fit(), FitWriter.text(fit));
     return fit;
+  }
+
+  private List<Path> writeRedrawn(
+      Rectified redrawn, FitDocument fit, Path photoFile, ResultFiles files) throws IOException {
+    PhotoOrigin origin = RedrawnOrigin.of(fit, Digest.of(photoFile), way().orElseThrow());
+    return Redrawing.write(Redrawing.from(origin, redrawn), photoFile, files, storing);
   }
 
   private static void writePage(

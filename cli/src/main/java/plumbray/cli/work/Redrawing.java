@@ -7,10 +7,12 @@ import java.util.List;
 import java.util.stream.IntStream;
 import plumbray.calibration.sight.Sight;
 import plumbray.imaging.fit.SightOptics;
+import plumbray.imaging.metadata.PhotoOrigin;
 import plumbray.imaging.photo.Photo;
 import plumbray.imaging.photo.PhotoException;
 import plumbray.imaging.photo.PhotoFormat;
 import plumbray.imaging.photo.PhotoWriter;
+import plumbray.imaging.photo.WriteOptions;
 import plumbray.imaging.rectify.ColourRectifier;
 import plumbray.imaging.rectify.Rectified;
 import plumbray.imaging.rectify.Rectifier;
@@ -46,21 +48,30 @@ final class Redrawing {
    * @param rectified the redrawn photo
    * @param photoFile the photo's file, whose ending the redrawn one keeps where it can
    * @param files where the results go
+   * @param storing how they are stored
    * @return the files written
    * @throws IOException when one cannot be written
    */
-  static List<Path> write(Rectified rectified, Path photoFile, ResultFiles files)
+  static List<Path> write(
+      Rectified rectified, Path photoFile, ResultFiles files, WriteOptions storing)
       throws IOException {
     String name = photoFile.getFileName().toString();
     Path picture = files.rectified(PhotoFormat.extensionFor(name, rectified.picture().shape()));
     Files.createDirectories(files.folder());
     try {
-      PhotoWriter.write(rectified.picture(), picture);
-      PhotoWriter.write(rectified.mask().photo(), files.mask());
+      PhotoWriter.write(rectified.picture(), picture, storing);
+      PhotoWriter.write(rectified.mask().photo(), files.mask(), storing);
     } catch (PhotoException e) {
       throw new IOException(e.getMessage(), e);
     }
     return List.of(picture, files.mask());
+  }
+
+  /** The same with its origin, which is written into the redrawn photo's file. */
+  static Rectified from(PhotoOrigin origin, Rectified rectified) {
+    Photo picture = rectified.picture();
+    return new Rectified(
+        picture.withMetadata(picture.metadata().withOrigin(origin)), rectified.mask());
   }
 
   /** Each colour through the air as it is for its own wavelength. */

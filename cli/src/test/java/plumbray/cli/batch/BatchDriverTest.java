@@ -30,6 +30,7 @@ import plumbray.imaging.fit.Residuals;
 import plumbray.imaging.photo.Photo;
 import plumbray.imaging.photo.PhotoBuilder;
 import plumbray.imaging.photo.PhotoException;
+import plumbray.imaging.photo.PhotoMetadata;
 import plumbray.imaging.photo.PhotoShape;
 import plumbray.imaging.photo.PhotoWriter;
 import plumbray.imaging.rectify.Interpolation;
@@ -220,6 +221,17 @@ class BatchDriverTest {
             photos.resolve("p1.png")
                 + ": is 30 x 60 px, must be 40 x 60 px (size of the sight's photos); use the sight of"
                 + " this photo's camera");
+  }
+
+  @Test
+  void aBrokenColourProfileMakesAFitDoubtful() throws IOException, PhotoException {
+    Photo broken =
+        photo(2).withMetadata(PhotoMetadata.none().withIccProfile(new byte[] {1, 2, 3, 4}));
+    PhotoWriter.write(broken, photos.resolve("p1.png"));
+    PhotoOutcome outcome = run(tasks("{\"file\": \"p1.png\"}")).get(0);
+    assertThat(outcome.status()).isEqualTo(FitStatus.DOUBTFUL);
+    assertThat(Files.readString(out.resolve("p1.fit.json")))
+        .contains("\"colour-profile\"", "values are taken as sRGB-encoded.");
   }
 
   @Test

@@ -1,5 +1,6 @@
 package plumbray.imaging.fit;
 
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import plumbray.calibration.sight.Sight;
@@ -51,5 +52,22 @@ public record FitResult(
         List.of(),
         List.of(),
         0.0);
+  }
+
+  /** The same with one more reason for doubt; a fit that was good is doubtful then. */
+  public FitResult doubted(Warning reason) {
+    return warned(reason, status == FitStatus.GOOD ? FitStatus.DOUBTFUL : status);
+  }
+
+  /** The same with one more remark, which does not touch the verdict. */
+  public FitResult noted(Warning remark) {
+    return warned(remark, status);
+  }
+
+  private FitResult warned(Warning warning, FitStatus verdict) {
+    List<Warning> more = new ArrayList<>(warnings);
+    more.add(warning);
+    return new FitResult(
+        verdict, error, more, asked, sight, estimates, residuals, alternatives, readings, jitterPx);
   }
 }

@@ -6,6 +6,7 @@ import java.util.Optional;
 import plumbray.imaging.metadata.ExifBlock;
 import plumbray.imaging.metadata.PhotoOrigin;
 import plumbray.imaging.metadata.Resolution;
+import plumbray.imaging.metadata.XmpPacket;
 
 /**
  * What a photo file says besides its pixels and is carried from file to file. Immutable.
@@ -160,6 +161,13 @@ public final class PhotoMetadata {
   /** Where the picture comes from, for the file that is to be written. */
   public Optional<PhotoOrigin> origin() {
     return parts.origin;
+  }
+
+  /** What cannot be carried into another file, a line each. */
+  public List<String> complaints() {
+    return parts.xmp == null || XmpPacket.read(parts.xmp).isPresent()
+        ? List.of()
+        : List.of("its XMP is not well-formed and is left out");
   }
 
   List<FilePiece> pieces() {

@@ -1,5 +1,6 @@
 package plumbray.imaging.photo;
 
+import java.util.Locale;
 import java.util.Objects;
 import java.util.Optional;
 
@@ -59,5 +60,20 @@ public record WriteOptions(
   /** The same with this many threads. */
   public WriteOptions withThreads(int count) {
     return new WriteOptions(jpegQuality, jpegSampling, effort, count);
+  }
+
+  /**
+   * The choices in words, for files, each with a comma in front: the same words, the same bytes.
+   * Empty where all is as {@link #likeSource} has it.
+   */
+  public String label() {
+    String quality = jpegQuality.map(q -> ", jpeg quality " + Math.round(100 * q)).orElse("");
+    String sampling = jpegSampling.map(s -> ", jpeg sampling " + word(s)).orElse("");
+    String packing = effort == PackingEffort.FAST ? "" : ", packing " + word(effort);
+    return quality + sampling + packing;
+  }
+
+  private static String word(Enum<?> choice) {
+    return choice.name().toLowerCase(Locale.ROOT);
   }
 }
