@@ -30,6 +30,7 @@ public final class TiffContainer {
   private static final short BLACK_IS_ZERO = 1;
   private static final short RGB = 2;
   private static final short INTERLEAVED = 1;
+  private static final short UPRIGHT = 1;
   private static final short PLAIN_ALPHA = 2;
 
   private final TiffOutputSet set;
@@ -164,6 +165,7 @@ public final class TiffContainer {
         TiffTagConstants.TIFF_TAG_PHOTOMETRIC_INTERPRETATION,
         pixels.channels() < 3 ? BLACK_IS_ZERO : RGB);
     root.add(TiffTagConstants.TIFF_TAG_SAMPLES_PER_PIXEL, (short) pixels.channels());
+    root.add(TiffTagConstants.TIFF_TAG_ORIENTATION, UPRIGHT);
     root.add(TiffTagConstants.TIFF_TAG_ROWS_PER_STRIP, pixels.rowsPerStrip());
     root.add(TiffTagConstants.TIFF_TAG_PLANAR_CONFIGURATION, INTERLEAVED);
     if (pixels.differences()) {

@@ -42,9 +42,12 @@ public final class PhotoReader {
       throw new PhotoException(file, e.getMessage(), e.whatToDo(), e);
     } catch (EOFException e) {
       throw new PhotoException(file, "ends too early", COPY_AGAIN, e);
-    } catch (IOException | RuntimeException e) {
+    } catch (IOException e) {
+      String why = e.getMessage() == null ? "its data makes no sense" : e.getMessage();
+      throw new PhotoException(file, "cannot be read (" + why + ")", COPY_AGAIN, e);
+    } catch (RuntimeException e) {
       // A decoder meets damage with many kinds of exceptions; all mean the same to the user.
-      throw new PhotoException(file, "cannot be read (" + e.getMessage() + ")", COPY_AGAIN, e);
+      throw new PhotoException(file, "is damaged (its data makes no sense)", COPY_AGAIN, e);
     }
   }
 
