@@ -97,14 +97,18 @@ final class FamilyFit {
           .toList();
     }
 
-    /** Criterion of Schwarz (1978) with the edges and points as data. */
-    double informationCriterion() {
+    /** How many edges and points there are. */
+    int dataCount() {
       int data = 0;
       for (ReferenceObservation r : observation.references()) {
         data += r instanceof StaffObservation s ? s.edges().size() : r.count();
       }
-      int estimated = observation.sightParameters().parameters().size();
-      return solution.cost() + estimated * Math.log(Math.max(2, data));
+      return data;
+    }
+
+    /** How many of the sight's quantities are estimated. */
+    int estimated() {
+      return observation.sightParameters().parameters().size();
     }
   }
 
@@ -301,6 +305,52 @@ final class FamilyFit {
       }
     }
     return values.stream().mapToDouble(Double::doubleValue).toArray();
+  }
+
+  /**
+   * How badly an adjustment explains given rows of the staffs, with the noise and the shimmer that
+   * suit it best: minus twice the logarithm of its likelihood, the priors of the sight included.
+   *
+   * @param settings the rows and their relative noise, by staff
+   */
+  double deviance(Adjusted at, List<StripModelSettings> settings) {
+    FitTrace trace = at.observation().trace(at.solution().values(), false);
+    int[] index = {0};
+    SightObservation observation =
+        new SightObservation(
+            parameters,
+            references.observations(
+                s -> {
+                  int reference = index[0]++;
+                  StripModelSettings given = settings.get(reference);
+                  double spread = at.observation().own(at.solution().values(), reference)[0];
+                  return StaffObservation.shimmering(
+                      s,
+                      new StripModelSettings(given.used(), given.noiseFactors(), spread),
+                      edges(s, trace, at.groundEdges(reference)),
+                      at.found().shimmer());
+                }),
+            SightObservation.FINE_PX);
+    ShimmerSearch search =
+        new ShimmerSearch(observation, startAt(at, at.sightValues(), observation));
+    return search.deviance(search.find(at.found())) + priors(observation, at.sightValues());
+  }
+
+  private static double priors(SightObservation observation, double[] sightValues) {
+    double sum = 0.0;
+    List<Parameter> all = observation.allParameters();
+    for (int k = 0; k < sightValues.length; k++) {
+      if (all.get(k).hasPrior()) {
+        double off = (sightValues[k] - all.get(k).value()) / all.get(k).sigma();
+        sum += off * off;
+      }
+    }
+    return sum;
+  }
+
+  /** How badly an adjustment explains all of the strips, with no word of noise. */
+  double looks(Adjusted adjusted) {
+    return new FirstFit(sight, references, false).looks(adjusted);
   }
 
   private Found found(Adjusted at) {

@@ -103,17 +103,18 @@ final class FirstFit {
     if (references.staffs().isEmpty()) {
       return Optional.empty();
     }
-    return new TrailStarts(sight, references)
-        .values().stream()
-            .map(led -> new Along(still(chased(led.values(), NEAR_REACHES_PX)), led.sure()))
-            .filter(a -> Double.isFinite(a.adjusted().solution().cost()))
-            .min(Comparator.comparingDouble(a -> looks(a.adjusted())))
-            .map(a -> a.sure() ? a : beside(a));
-  }
-
-  private Along beside(Along along) {
-    Adjusted moved = besideBars(along.adjusted());
-    return new Along(moved, clearlyFound(looks(moved)));
+    List<TrailStarts.Led> ways = new TrailStarts(sight, references).values();
+    if (ways.size() == 1 && ways.get(0).only()) {
+      Adjusted led = still(chased(ways.get(0).values(), NEAR_REACHES_PX));
+      return Optional.of(new Along(led, ways.get(0).followed()))
+          .filter(a -> Double.isFinite(led.solution().cost()));
+    }
+    return ways.stream()
+        .map(led -> still(chased(led.values(), NEAR_REACHES_PX)))
+        .filter(a -> Double.isFinite(a.solution().cost()))
+        .min(Comparator.comparingDouble(this::looks))
+        .map(this::besideBars)
+        .map(a -> new Along(a, clearlyFound(looks(a))));
   }
 
   /** The one of two adjustments that explains more of the strips. */
@@ -204,7 +205,7 @@ final class FirstFit {
   }
 
   /** How well an adjustment explains all of the strips, bars and what is around them. */
-  private double looks(Adjusted adjusted) {
+  double looks(Adjusted adjusted) {
     return references.staffs().isEmpty()
         ? adjusted.solution().cost()
         : looks(adjusted.sightValues());

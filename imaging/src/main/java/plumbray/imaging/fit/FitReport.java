@@ -88,10 +88,10 @@ final class FitReport {
         count, Math.sqrt(sum / count), solution.cost(), solution.degreesOfFreedom());
   }
 
-  static Alternative alternative(ProfileFamily family, Sight sight, FamilyFit.Adjusted adjusted) {
+  static Alternative alternative(
+      ProfileFamily family, double criterion, Sight sight, FamilyFit.Adjusted adjusted) {
     double rms = residuals(readings(sight, adjusted), adjusted.solution()).rmsPx();
-    return new Alternative(
-        family, adjusted.informationCriterion(), rms, new Verdict(sight, adjusted).status());
+    return new Alternative(family, criterion, rms, new Verdict(sight, adjusted).status());
   }
 
   private static List<ReferenceReading> readings(Sight sight, FamilyFit.Adjusted adjusted) {

@@ -39,6 +39,21 @@ public record FitResult(
     readings = List.copyOf(readings);
   }
 
+  /** The same outcome of another sight asked for. */
+  FitResult askedAs(Sight other) {
+    return new FitResult(
+        status,
+        error,
+        warnings,
+        other,
+        sight,
+        estimates,
+        residuals,
+        alternatives,
+        readings,
+        jitterPx);
+  }
+
   /** A fit that gave nothing. */
   public static FitResult failed(Sight asked, String error) {
     return new FitResult(

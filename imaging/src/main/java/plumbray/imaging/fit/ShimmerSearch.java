@@ -1,6 +1,7 @@
 package plumbray.imaging.fit;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import org.apache.commons.math3.linear.Array2DRowRealMatrix;
 import org.apache.commons.math3.linear.ArrayRealVector;
@@ -31,6 +32,7 @@ final class ShimmerSearch {
   private final double squares;
   private final int rows;
   private final double[] priorWeights;
+  private final int sightCount;
 
   /** The problem linearized at {@code values}, whose residuals carry a noise scale of 1. */
   ShimmerSearch(SightObservation observation, double[] values) {
@@ -66,6 +68,7 @@ final class ShimmerSearch {
       }
     }
     squares = sum;
+    sightCount = observation.sightParameters().parameters().size();
     rows = counted;
     priorWeights = new double[n];
     for (int k = 0; k < n; k++) {
@@ -135,14 +138,33 @@ final class ShimmerSearch {
     return new Found(Math.exp(at[0]), new Shimmer(Math.exp(at[1]), Math.exp(at[2])));
   }
 
+  /**
+   * Minus twice the logarithm of the likelihood with the shimmer integrated out and the sight's
+   * quantities at their values, up to a constant that depends on the rows alone.
+   */
+  double deviance(Found at) {
+    return deviance(
+        new double[] {
+          Math.log(at.noiseFactor()),
+          Math.log(at.shimmer().sigmaPx()),
+          Math.log(at.shimmer().lengthPx())
+        },
+        sightCount);
+  }
+
   private static void clamp(double[] at) {
     for (int k = 0; k < 3; k++) {
       at[k] = Math.max(LIMITS_LOW[k], Math.min(LIMITS_HIGH[k], at[k]));
     }
   }
 
-  /** Minus twice the logarithm of the marginal likelihood, up to a constant. */
+  /** Minus twice the logarithm of the restricted likelihood, up to a constant. */
   private double deviance(double[] logs) {
+    return deviance(logs, 0);
+  }
+
+  /** All quantities but the first {@code fixed} are integrated out. */
+  private double deviance(double[] logs, int fixed) {
     double f2 = Math.exp(2.0 * logs[0]);
     Shimmer shimmer = new Shimmer(Math.exp(logs[1]), Math.exp(logs[2]));
     int n = gradient.length;
@@ -158,7 +180,7 @@ final class ShimmerSearch {
       double logDeterminant = addShimmer(a, shimmer);
       CholeskyDecomposition c =
           new CholeskyDecomposition(new Array2DRowRealMatrix(a, false), 1e-6, 0.0);
-      logDeterminant += logDeterminant(c);
+      logDeterminant += fixed == 0 ? logDeterminant(c) : logDeterminant(rightBelow(a, fixed));
       RealVector h = new ArrayRealVector(gradient);
       double explained = h.dotProduct(c.getSolver().solve(h)) / (f2 * f2);
       return squares / f2 - explained + logDeterminant + rows * Math.log(f2);
@@ -187,6 +209,14 @@ final class ShimmerSearch {
       sum += logDeterminant(k);
     }
     return sum;
+  }
+
+  private static CholeskyDecomposition rightBelow(double[][] a, int from) {
+    double[][] block = new double[a.length - from][];
+    for (int i = 0; i < block.length; i++) {
+      block[i] = Arrays.copyOfRange(a[from + i], from, a.length);
+    }
+    return new CholeskyDecomposition(new Array2DRowRealMatrix(block, false), 1e-6, 0.0);
   }
 
   private static double logDeterminant(CholeskyDecomposition c) {

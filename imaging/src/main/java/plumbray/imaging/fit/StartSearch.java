@@ -39,6 +39,17 @@ final class StartSearch {
     this.score = score;
   }
 
+  /**
+   * Starts of single exponentials that follow the staffs' pattern; none where there is no staff, or
+   * where the family is a step, which no exponential resembles.
+   */
+  static List<Start> locks(Sight sight, References references) {
+    return references.staffs().isEmpty()
+            || sight.profile().family().filter(ProfileFamily.STEP::equals).isPresent()
+        ? List.of()
+        : new StartSearch(sight, references).exponential();
+  }
+
   /** Starts of the sight's own family, best first. */
   List<Start> ofOwnFamily(int count) {
     ProfileFamily family = sight.profile().family().orElseThrow();

@@ -42,9 +42,10 @@ final class TrailStarts {
    * Where one way to read the strips leads.
    *
    * @param values the sight's values
-   * @param sure whether it is the only way, and the family follows the edges so read
+   * @param only whether it is the only way
+   * @param followed whether the family follows the edges so read
    */
-  record Led(double[] values, boolean sure) {}
+  record Led(double[] values, boolean only, boolean followed) {}
 
   /** Where each way to read the strips leads, the likeliest first. */
   List<Led> values() {
@@ -57,7 +58,7 @@ final class TrailStarts {
           .map(start -> adjusted(points, start))
           .filter(s -> Double.isFinite(s.cost()))
           .min(Comparator.comparingDouble(TrailStarts::typicalMiss))
-          .map(s -> new Led(sightValues(s), ways.size() == 1 && typicalMiss(s) < FOLLOWED))
+          .map(s -> new Led(sightValues(s), ways.size() == 1, typicalMiss(s) < FOLLOWED))
           .ifPresent(all::add);
     }
     return all;
