@@ -53,12 +53,19 @@ final class FamilyChoice {
       ProfileFamily family, Sight sight, FamilyFit fit, Adjusted adjusted, boolean sure) {
 
     Candidate refined() {
-      return new Candidate(family, sight, fit, fit.refine(adjusted), sure);
+      return with(fit.refine(adjusted));
+    }
+
+    private Candidate with(Adjusted other) {
+      return new Candidate(family, sight, fit, other, sure);
+    }
+
+    Candidate barsRefined() {
+      return with(fit.refineBars(adjusted));
     }
 
     Candidate onceAdjusted() {
-      Adjusted once = fit.shimmering(adjusted, FamilyFit.FIRST_GUESS);
-      return new Candidate(family, sight, fit, once, sure);
+      return with(fit.shimmering(adjusted, FamilyFit.FIRST_GUESS));
     }
 
     double looks() {
@@ -76,7 +83,9 @@ final class FamilyChoice {
       return FitResult.failed(sight, SightFit.noStart());
     }
     List<Judged> judged = judged(first);
-    Candidate chosen = judged.get(0).candidate();
+    Candidate best = judged.get(0).candidate();
+    Adjusted chosen =
+        references.staffs().isEmpty() ? best.adjusted() : best.fit().withGround(best.adjusted());
     List<Alternative> alternatives =
         judged.stream()
             .map(
@@ -87,7 +96,7 @@ final class FamilyChoice {
                         j.candidate().sight(),
                         j.candidate().adjusted()))
             .toList();
-    return FitReport.of(chosen.sight(), chosen.adjusted(), alternatives).askedAs(sight);
+    return FitReport.of(best.sight(), chosen, alternatives).askedAs(sight);
   }
 
   private List<Judged> judged(List<Candidate> first) {
@@ -105,7 +114,8 @@ final class FamilyChoice {
         IntStream.range(0, looks.length)
             .parallel()
             .mapToObj(
-                i -> looks[i] <= hopeless ? first.get(i).refined() : first.get(i).onceAdjusted())
+                i ->
+                    looks[i] <= hopeless ? first.get(i).barsRefined() : first.get(i).onceAdjusted())
             .toList();
     int leader =
         IntStream.range(0, looks.length)

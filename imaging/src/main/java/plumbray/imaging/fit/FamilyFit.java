@@ -30,7 +30,7 @@ import plumbray.imaging.reading.StaffScene;
 final class FamilyFit {
 
   private static final int ROUNDS = 3;
-  private static final int MOST_EVALUATIONS = 80;
+  private static final int MOST_EVALUATIONS = 30;
 
   /** Close enough, in standard deviations: far below what anybody can see in a result. */
   private static final double TOLERANCE = 0.1;
@@ -151,11 +151,13 @@ final class FamilyFit {
     return solver.solve(new Problem(all, observation, loss, start));
   }
 
-  /** Adjusts with shimmer, the noise and the shimmer found in turn with the estimates. */
+  /** Adjusts with shimmer and, where it is found, with the ground's edge. */
   Adjusted refine(Adjusted first) {
-    if (references.staffs().isEmpty()) {
-      return points(first);
-    }
+    return references.staffs().isEmpty() ? points(first) : withGround(refineBars(first));
+  }
+
+  /** Adjusts the bars alone, the noise and the shimmer found in turn with the estimates. */
+  Adjusted refineBars(Adjusted first) {
     int blocked = parameters.indexOf("path.blockedBelowM");
     Optional<GroundEdgeSearch.Found> ground =
         blocked < 0 ? Optional.empty() : new GroundEdgeSearch(first).findBlocked(blocked);
@@ -163,10 +165,21 @@ final class FamilyFit {
         ground.isEmpty()
             ? shimmering(first, FIRST_GUESS)
             : shimmering(first.with(ground.get()), ground.get().sightValues(), FIRST_GUESS);
+    return inTurn(best);
+  }
+
+  /** Noise and shimmer found in turn with the estimates, until they stay. */
+  private Adjusted inTurn(Adjusted from) {
+    Adjusted best = from;
     for (int round = 0; round < ROUNDS; round++) {
-      best = shimmering(best, found(best));
+      Found found = found(best);
+      boolean stays = round > 0 && found.equals(best.found()) && best.solution().converged();
+      if (stays) {
+        break;
+      }
+      best = shimmering(best, found);
     }
-    return withGround(best);
+    return best;
   }
 
   /**
@@ -174,7 +187,7 @@ final class FamilyFit {
    * grass or a kerb stands in front, or the family does not hold next to the ground, it does not.
    * Where it counts already, it is looked for once more, now that all is known better.
    */
-  private Adjusted withGround(Adjusted without) {
+  Adjusted withGround(Adjusted without) {
     Adjusted best = without;
     for (int round = 0; round < GROUND_ROUNDS; round++) {
       Optional<GroundEdgeSearch.Found> ground = new GroundEdgeSearch(best).find();

@@ -6,6 +6,7 @@ import static org.assertj.core.api.Assertions.within;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -15,6 +16,7 @@ import plumbray.calibration.quantity.Quantity;
 import plumbray.calibration.sight.ImageBox;
 import plumbray.calibration.sight.PointMark;
 import plumbray.calibration.sight.PointTarget;
+import plumbray.calibration.sight.ProfileSetup;
 import plumbray.calibration.sight.Reference;
 import plumbray.calibration.sight.SenseWanted;
 import plumbray.calibration.sight.Sight;
@@ -23,6 +25,8 @@ import plumbray.imaging.reading.StripPhotos;
 import plumbray.imaging.scene.Sensor;
 import plumbray.imaging.scene.Shimmer;
 import plumbray.raymodel.mapping.Branch;
+import plumbray.raymodel.profile.ProfileFamily;
+import plumbray.raymodel.profile.Stability;
 
 /** Fits of small drawn photos, and what is said of photos and sights that cannot be fitted. */
 class SightFitTest {
@@ -99,6 +103,36 @@ class SightFitTest {
         Quantity.held(blockedBelowM),
         SmallSights.known(excessK, 0.05),
         markedDownTo(396));
+  }
+
+  @ParameterizedTest
+  @CsvSource({"EXPONENTIAL, 9.0, 0.15", "LOGARITHMIC, -1.6, 0.005"})
+  void theFamilyIsFoundWhereItIsLeftOpen(ProfileFamily family, double first, double second) {
+    ProfileSetup profile =
+        SmallSights.profile(
+            family, Quantity.held(first), Quantity.held(second), Quantity.held(-0.0098));
+    Sight truth =
+        SmallSights.sight(
+            SmallSights.camera(Quantity.held(SmallSights.PITCH_RAD)), profile, SmallSights.staff());
+    Photo photo =
+        SmallSights.photo(
+            truth, new Shimmer(0.2, 0.1, 60, 12), new Sensor(0.8, 1, 6000, 5, 16), 3L);
+    Sight open =
+        open(SmallSights.staff())
+            .withProfile(new ProfileSetup(Optional.empty(), Map.of(), Stability.DYER));
+    FitResult result = new SightFit().fit(open, Optional.of(photo));
+    assertThat(result.status()).as("%s", result.warnings()).isEqualTo(FitStatus.GOOD);
+    assertThat(result.sight().profile().family()).contains(family);
+    assertThat(result.alternatives())
+        .hasSizeGreaterThan(2)
+        .extracting(Alternative::informationCriterion)
+        .isSorted();
+    for (TemperatureRow row : TemperatureRow.of(result.sight(), result.estimates())) {
+      double right = SightOptics.column(truth, List.of()).temperatureK(row.heightM());
+      assertThat(row.temperatureK())
+          .as("at %s m", row.heightM())
+          .isCloseTo(right, within(4.0 * row.sigmaK()));
+    }
   }
 
   private static Reference markedDownTo(int row) {
