@@ -69,6 +69,7 @@ class RedrawChoiceTest {
     assertThat(rectify("cubic", "--interpolation", "cubic")).isZero();
     assertThat(rectify("lanczos", "--interpolation", "lanczos")).isZero();
     assertThat(rectify("light", "--linear-light")).isZero();
+    assertThat(rectify("both", "--both-images")).isZero();
     assertThat(picture("plain")).isEqualTo(picture("cubic"));
     assertThat(picture("plain")).isNotEqualTo(picture("lanczos"));
     assertThat(picture("plain")).isNotEqualTo(picture("light"));

@@ -36,20 +36,22 @@ class RedrawnPictureTest {
   /** Above cubic remapping in 8 bit that rounds down, dB. */
   private static final double BETTER_DB = 1.0;
 
+  /** Over hot ground: the foot is never seen. */
+  private static final TexturedBoard BOARD = new TexturedBoard(DrawnSight.of(12, 0.2, 600));
+
   private static final int BLOCK_PX = 12;
 
   private static final Sensor CLEAN = new Sensor(0.8, 1, Double.POSITIVE_INFINITY, 0, 8);
 
   private static Rectified redrawn(Photo photo, Interpolation interpolation) {
-    return Rectifier.rectify(
-        photo, TexturedBoard.map(), new RedrawOptions(interpolation, false), 2);
+    return Rectifier.rectify(photo, BOARD.map(), new RedrawOptions(interpolation, false), 2);
   }
 
   @ParameterizedTest
   @EnumSource(Interpolation.class)
   void whatIsRestoredStandsWhereStraightRaysPutIt(Interpolation interpolation) {
-    Photo straight = TexturedBoard.drawn(CLEAN).straightPhoto();
-    Rectified redrawn = redrawn(TexturedBoard.drawn(CLEAN).photo(), interpolation);
+    Photo straight = BOARD.drawn(CLEAN).straightPhoto();
+    Rectified redrawn = redrawn(BOARD.drawn(CLEAN).photo(), interpolation);
     double[] shifts = shifts(redrawn, straight);
     assertThat(shifts.length).isGreaterThan(60);
     assertThat(shifts[shifts.length / 2]).isLessThan(MEDIAN_PX);
@@ -86,8 +88,8 @@ class RedrawnPictureTest {
   @ParameterizedTest
   @EnumSource(Interpolation.class)
   void itComesNearerThanCubicRemappingThatRoundsDown(Interpolation interpolation) {
-    Photo photo = TexturedBoard.drawn(CLEAN).photo();
-    Photo straight = TexturedBoard.drawn(CLEAN).straightPhoto();
+    Photo photo = BOARD.drawn(CLEAN).photo();
+    Photo straight = BOARD.drawn(CLEAN).straightPhoto();
     Rectified redrawn = redrawn(photo, interpolation);
     GrayU8 other = remapped(photo);
     double ours = 0;
@@ -112,7 +114,7 @@ class RedrawnPictureTest {
 
   /** A library's bicubic distortion with the true map. */
   private static GrayU8 remapped(Photo photo) {
-    SightOptics optics = TexturedBoard.optics();
+    SightOptics optics = BOARD.optics();
     GrayU8 from = new GrayU8(photo.width(), photo.height());
     for (int y = 0; y < photo.height(); y++) {
       for (int x = 0; x < photo.width(); x++) {
@@ -145,7 +147,7 @@ class RedrawnPictureTest {
     Camera camera = optics.camera();
     double[] direction = new double[2];
     camera.direction(x, y, direction);
-    double distanceM = TexturedBoard.DISTANCE_M;
+    double distanceM = BOARD.distanceM();
     double elevationM = optics.straight().elevationM(direction[0], distanceM);
     for (Branch branch : optics.mapping(distanceM).branches()) {
       if (branch.sense() == Sense.UPRIGHT && branch.holdsElevation(elevationM)) {
@@ -157,15 +159,14 @@ class RedrawnPictureTest {
 
   @Test
   void theMaskIsRightToARow() {
-    SightOptics optics = TexturedBoard.optics();
-    Rectified redrawn = redrawn(TexturedBoard.drawn(CLEAN).photo(), Interpolation.CUBIC);
+    SightOptics optics = BOARD.optics();
+    Rectified redrawn = redrawn(BOARD.drawn(CLEAN).photo(), Interpolation.CUBIC);
     double lowestM =
-        optics.mapping(TexturedBoard.DISTANCE_M).branches().stream()
+        optics.mapping(BOARD.distanceM()).branches().stream()
             .mapToDouble(Branch::lowestElevationM)
             .min()
             .orElseThrow();
-    double row =
-        optics.camera().rowAt(optics.straight().apparentRad(lowestM, TexturedBoard.DISTANCE_M));
+    double row = optics.camera().rowAt(optics.straight().apparentRad(lowestM, BOARD.distanceM()));
     for (int x = 0; x < redrawn.mask().widthPx(); x++) {
       assertThat(redrawn.mask().at(x, (int) Math.floor(row))).isEqualTo(MaskPlane.UPRIGHT);
       assertThat(redrawn.mask().at(x, (int) Math.ceil(row))).isEqualTo(MaskPlane.NEVER_VISIBLE);

@@ -3,7 +3,6 @@ package plumbray.wholejob;
 import java.util.List;
 import java.util.Optional;
 import plumbray.calibration.sight.Region;
-import plumbray.calibration.sight.Sight;
 import plumbray.imaging.fit.SightOptics;
 import plumbray.imaging.rectify.RectifyMap;
 import plumbray.imaging.scene.Backdrop;
@@ -19,36 +18,34 @@ import plumbray.imaging.scene.Thing;
 
 /**
  * A wall of uneven grey that fills the view above the ground at one distance; an invented place.
+ *
+ * @param sight the sight, with a staff where the wall is
  */
-final class TexturedBoard {
-  static final double DISTANCE_M = 600;
+record TexturedBoard(DrawnSight sight) {
+  double distanceM() {
+    return sight.staffs().get(0).distanceM();
+  }
 
-  /** Seen over hot ground: its foot never, its lower part twice. */
-  static final DrawnSight SIGHT = DrawnSight.of(12, 0.2, DISTANCE_M);
-
-  private TexturedBoard() {}
-
-  static Simulation drawn(Sensor sensor) {
+  Simulation drawn(Sensor sensor) {
     Backdrop backdrop =
         new Backdrop(
             new Backdrop.Sky(LinearColour.grey(0.9), LinearColour.grey(0.5), 0.02),
             new Backdrop.Ground(Paint.flat(LinearColour.grey(0.3)), List.of(), 3000),
             Backdrop.Haze.none());
     Paint paint = new Paint(LinearColour.grey(0.35), new Grain(0.7, 0.15, 0.15));
-    Thing wall = new Thing("wall", DISTANCE_M, 0, new BoardShape(-9, 9, 0, 9, paint));
+    Thing wall = new Thing("wall", distanceM(), 0, new BoardShape(-9, 9, 0, 9, paint));
     Scene scene = new Scene(7, backdrop, List.of(wall), Shimmer.none(), sensor);
-    return new Simulation(SIGHT.truth(), scene);
+    return new Simulation(sight.truth(), scene);
   }
 
-  static SightOptics optics() {
-    return SightOptics.of(SIGHT.truth());
+  SightOptics optics() {
+    return SightOptics.of(sight.truth());
   }
 
-  static RectifyMap map() {
+  RectifyMap map() {
     SightOptics optics = optics();
-    Sight sight = optics.sight();
-    List<Region> all = List.of(new Region("wall", false, DISTANCE_M, Optional.empty()));
+    List<Region> all = List.of(new Region("wall", false, distanceM(), Optional.empty()));
     return RectifyMap.of(
-        optics.camera(), optics.straight(), sight.path().path(), optics.fan(), all);
+        optics.camera(), optics.straight(), optics.sight().path().path(), optics.fan(), all);
   }
 }

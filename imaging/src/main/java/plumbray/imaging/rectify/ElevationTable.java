@@ -55,6 +55,12 @@ final class ElevationTable {
     return new ElevationTable(linked, pixelRad);
   }
 
+  /** The table of things that are never seen. */
+  static ElevationTable ofNothing() {
+    double[] all = {Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY};
+    return of(List.of(TablePiece.dark(all, MaskPlane.NEVER_VISIBLE)), 1);
+  }
+
   /** A dark piece moves with the shown ones beside it as distance grows. */
   private static TablePiece linked(List<TablePiece> pieces, int dark) {
     OptionalDouble below = OptionalDouble.empty();

@@ -23,10 +23,27 @@ public final class RectifyMap {
   private final Camera camera;
   private final List<MappedRegion> regions;
 
-  /** A region with its distance (NaN: ground) and table; without outline it holds all pixels. */
-  record MappedRegion(Optional<Outline> outline, double distanceM, ElevationTable table) {
+  /** The table of a region, and that of its inverted images alone, where there are some. */
+  record Tables(ElevationTable all, Optional<ElevationTable> inverted) {}
+
+  /** A region with its distance (NaN: ground) and tables; without outline it holds all pixels. */
+  record MappedRegion(Optional<Outline> outline, double distanceM, Tables tables) {
+    MappedRegion(Optional<Outline> outline, double distanceM, ElevationTable table) {
+      this(outline, distanceM, new Tables(table, Optional.empty()));
+    }
+
     MappedRegion(Optional<Outline> outline, ElevationTable table) {
       this(outline, Double.NaN, table);
+    }
+
+    ElevationTable table() {
+      return tables.all();
+    }
+
+    /** The region as its inverted images alone show it. */
+    MappedRegion inverted() {
+      return new MappedRegion(
+          outline, distanceM, tables.inverted().orElseGet(ElevationTable::ofNothing));
     }
 
     boolean holds(double u, double v) {
@@ -55,26 +72,36 @@ public final class RectifyMap {
           "regions is empty, must have at least one region (what lies where); add one");
     }
     ElevationSpan span = ElevationSpan.of(camera);
-    Map<Double, ElevationTable> tables = new HashMap<>();
+    Map<Double, Tables> tables = new HashMap<>();
     List<MappedRegion> mapped = new ArrayList<>();
     for (Region region : regions) {
-      ElevationTable table =
+      Tables table =
           tables.computeIfAbsent(
               region.distanceM(),
               distanceM ->
                   region.ground()
-                      ? groundTable(straight, path, fan, span)
-                      : table(straight, fan, distanceM, span));
+                      ? new Tables(groundTable(straight, path, fan, span), Optional.empty())
+                      : tables(straight, fan, distanceM, span));
       mapped.add(new MappedRegion(region.polygonPx().map(Outline::new), region.distanceM(), table));
     }
     return new RectifyMap(camera, mapped);
   }
 
-  private static ElevationTable table(
+  private static Tables tables(
       StraightRay straight, RayFan fan, double distanceM, ElevationSpan span) {
     List<ApparentBranch> branches =
         fan.mapping(distanceM).branches().stream().map(ApparentBranch::of).toList();
-    return MappingTable.of(branches, straight, distanceM, span);
+    return tables(branches, straight, distanceM, span);
+  }
+
+  static Tables tables(
+      List<ApparentBranch> branches, StraightRay straight, double distanceM, ElevationSpan span) {
+    List<ApparentBranch> inverted = branches.stream().filter(b -> !b.upright()).toList();
+    Optional<ElevationTable> alone =
+        inverted.isEmpty()
+            ? Optional.empty()
+            : Optional.of(MappingTable.of(inverted, straight, distanceM, span));
+    return new Tables(MappingTable.of(branches, straight, distanceM, span), alone);
   }
 
   private static ElevationTable groundTable(
@@ -89,6 +116,14 @@ public final class RectifyMap {
 
   int heightPx() {
     return camera.heightPx();
+  }
+
+  /** The map of inverted images alone; empty where there are none. */
+  Optional<RectifyMap> invertedAlone() {
+    boolean some = regions.stream().anyMatch(region -> region.tables().inverted().isPresent());
+    return some
+        ? Optional.of(new RectifyMap(camera, regions.stream().map(MappedRegion::inverted).toList()))
+        : Optional.empty();
   }
 
   /** Distance of a region's things, m; NaN for the ground. */

@@ -9,17 +9,25 @@ import java.util.Objects;
  * @param interpolation how the photo is read between its pixels
  * @param linearLight whether samples are decoded from sRGB to linear light before they are mixed,
  *     and encoded again after
+ * @param bothImages whether what is seen upright and inverted is drawn from both images, so that
+ *     there is less noise; else from the upright one alone
  */
-public record RedrawOptions(Interpolation interpolation, boolean linearLight) {
+public record RedrawOptions(Interpolation interpolation, boolean linearLight, boolean bothImages) {
   /** Checks that all is there. */
   public RedrawOptions {
     Objects.requireNonNull(interpolation, "interpolation");
   }
 
+  /** From the upright image alone, where it shows. */
+  public RedrawOptions(Interpolation interpolation, boolean linearLight) {
+    this(interpolation, linearLight, false);
+  }
+
   /** The choices in words, for files: the same words, the same pixels. */
   public String label() {
     String way = interpolation.name().toLowerCase(Locale.ROOT);
-    return linearLight ? way + ", linear light" : way;
+    String mixed = linearLight ? way + ", linear light" : way;
+    return bothImages ? mixed + ", both images" : mixed;
   }
 
   /** Cubic, on the samples as they are encoded. */
