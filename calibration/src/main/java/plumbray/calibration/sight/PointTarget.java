@@ -1,6 +1,7 @@
 package plumbray.calibration.sight;
 
 import java.util.List;
+import java.util.Optional;
 
 /**
  * Single marks of known height whose images were pointed at.
@@ -16,5 +17,10 @@ public record PointTarget(List<PointMark> marks) implements ReferenceKind {
       throw new IllegalArgumentException(
           "points has 0 marks, must have at least 1 (marks of known height); add a mark");
     }
+  }
+
+  @Override
+  public Optional<StaffTarget> bars() {
+    return Optional.empty();
   }
 }

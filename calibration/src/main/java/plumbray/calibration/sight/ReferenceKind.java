@@ -1,4 +1,9 @@
 package plumbray.calibration.sight;
 
-/** What is known about a reference: the edges of a staff's bars, or single points. */
-public sealed interface ReferenceKind permits StaffTarget, PointTarget {}
+import java.util.Optional;
+
+/** What is known about a reference: the edges of a staff's bars, its code, or single points. */
+public sealed interface ReferenceKind permits StaffTarget, CodedTarget, PointTarget {
+  /** The dark and bright bars that a photo shows; none where single points are all there is. */
+  Optional<StaffTarget> bars();
+}

@@ -1,6 +1,7 @@
 package plumbray.calibration.sight;
 
 import java.util.Arrays;
+import java.util.Optional;
 import plumbray.calibration.sight.Checks.Named;
 
 /**
@@ -35,6 +36,11 @@ public record StaffTarget(double[] edgesM, boolean firstBarDark) implements Refe
   @Override
   public double[] edgesM() {
     return edgesM.clone();
+  }
+
+  @Override
+  public Optional<StaffTarget> bars() {
+    return Optional.of(this);
   }
 
   @Override

@@ -5,7 +5,9 @@ import java.util.List;
 import java.util.Optional;
 import java.util.stream.Collectors;
 import plumbray.calibration.camera.PixelPoint;
+import plumbray.calibration.sight.CodedTarget;
 import plumbray.calibration.sight.ImageBox;
+import plumbray.calibration.sight.MaximalSequence;
 import plumbray.calibration.sight.PointMark;
 import plumbray.calibration.sight.PointTarget;
 import plumbray.calibration.sight.Reference;
@@ -21,6 +23,14 @@ final class ReferenceReader {
       new Limits("height of the reference's zero above the ground there", Unit.METRE, -1000, 1000);
   static final Limits EDGE =
       new Limits("height of a bar's edge above the foot", Unit.METRE, -1000, 5000);
+  static final Limits BITS =
+      new Limits(
+          "stages of the register that makes the code",
+          Unit.NONE,
+          MaximalSequence.FEWEST_BITS,
+          MaximalSequence.MOST_BITS);
+  static final Limits MODULE =
+      new Limits("height of one element of the code", Unit.METRE, 1e-4, 100);
   static final Limits MARK_HEIGHT =
       new Limits("height of a point above the foot", Unit.METRE, -1000, 5000);
   static final Limits SIGMA =
@@ -45,7 +55,7 @@ final class ReferenceReader {
     double distanceM = reference.si("distanceM", DISTANCE);
     String kind = kind(reference);
     Optional<ImageBox> box = reference.find("imageBox").map(frame::box);
-    if (kind.equals("staff") && box.isEmpty()) {
+    if (!kind.equals("points") && box.isEmpty()) {
       throw reference
           .child("imageBox")
           .wrong("[u0, v0, u1, v1]", "where the staff is in the photo");
@@ -54,7 +64,7 @@ final class ReferenceReader {
         name,
         distanceM,
         Quantities.read(reference, "footM", FOOT, 0.0),
-        kind.equals("staff") ? staff(reference.child(kind)) : points(reference.child(kind)),
+        kind(kind, reference.child(kind)),
         box);
   }
 
@@ -62,15 +72,42 @@ final class ReferenceReader {
     List<String> given = KINDS.stream().filter(reference::has).collect(Collectors.toList());
     if (given.size() != 1) {
       String found = given.isEmpty() ? "of no kind" : "both " + String.join(" and ", given);
-      throw reference.wrong(found, "exactly one of staff, points", WHAT);
+      throw reference.wrong(found, "exactly one of staff, coded, points", WHAT);
     }
     String kind = given.get(0);
-    if (kind.equals("coded") || kind.equals("baseline")) {
+    if (kind.equals("baseline")) {
       throw reference
           .child(kind)
-          .wrong("given", "left out", WHAT + "; this release reads staff and points alone");
+          .wrong("given", "left out", WHAT + "; this release reads staff, coded and points alone");
     }
     return kind;
+  }
+
+  private ReferenceKind kind(String kind, Node node) {
+    return switch (kind) {
+      case "staff" -> staff(node);
+      case "coded" -> coded(node);
+      default -> points(node);
+    };
+  }
+
+  private static ReferenceKind coded(Node coded) {
+    coded.onlyKeys("a coded staff", List.of("bits", "elements", "moduleM", "bottomM", "firstBar"));
+    int bits = coded.whole("bits", BITS);
+    int most = MaximalSequence.length(bits);
+    Limits elements =
+        new Limits(
+            "how many elements the staff has", Unit.NONE, CodedTarget.fewestElements(bits), most);
+    return new CodedTarget(
+        bits,
+        coded.has("elements") ? coded.whole("elements", elements) : most,
+        coded.number("moduleM", MODULE),
+        coded.number("bottomM", EDGE, 0.0),
+        coded.find("firstBar").map(ReferenceReader::dark).orElse(true));
+  }
+
+  private static boolean dark(Node first) {
+    return first.choice("which the lowest bar is", List.of("dark", "bright")).equals("dark");
   }
 
   private static ReferenceKind staff(Node staff) {
@@ -85,9 +122,7 @@ final class ReferenceReader {
             .wrong(Unit.METRE.show(edgesM[i]), "above " + Unit.METRE.show(edgesM[i - 1]), EDGES);
       }
     }
-    String what = "which the lowest bar is";
-    String first = staff.get("firstBar", what).choice(what, List.of("dark", "bright"));
-    return new StaffTarget(edgesM, first.equals("dark"));
+    return new StaffTarget(edgesM, dark(staff.get("firstBar", "which the lowest bar is")));
   }
 
   private ReferenceKind points(Node points) {

@@ -3,6 +3,7 @@ package plumbray.cli.document;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.Locale;
+import plumbray.calibration.sight.CodedTarget;
 import plumbray.calibration.sight.ImageBox;
 import plumbray.calibration.sight.PointMark;
 import plumbray.calibration.sight.PointTarget;
@@ -22,12 +23,23 @@ final class ReferenceWriter {
       ObjectNode bars = object.putObject("staff");
       bars.set("edgesM", Json.array(staff.edgesM()));
       bars.put("firstBar", staff.firstBarDark() ? "dark" : "bright");
+    } else if (reference.kind() instanceof CodedTarget coded) {
+      object.set("coded", coded(coded));
     } else if (reference.kind() instanceof PointTarget points) {
       ArrayNode marks = object.putArray("points");
       points.marks().forEach(mark -> marks.add(mark(mark)));
     }
     reference.imageBox().ifPresent(box -> object.set("imageBox", box(box)));
     return object;
+  }
+
+  static ObjectNode coded(CodedTarget coded) {
+    ObjectNode object = Json.object();
+    object.put("bits", coded.bits());
+    object.put("elements", coded.elements());
+    object.set("moduleM", Json.number(coded.moduleM()));
+    object.set("bottomM", Json.number(coded.bottomM()));
+    return object.put("firstBar", coded.firstBarDark() ? "dark" : "bright");
   }
 
   private static ObjectNode mark(PointMark mark) {

@@ -5,10 +5,10 @@ import java.util.List;
 import java.util.Optional;
 import java.util.stream.DoubleStream;
 import java.util.stream.Stream;
+import plumbray.calibration.sight.CodedTarget;
 import plumbray.calibration.sight.PointMark;
 import plumbray.calibration.sight.PointTarget;
 import plumbray.calibration.sight.Reference;
-import plumbray.calibration.sight.StaffTarget;
 import plumbray.cli.report.CropView.RowMark;
 import plumbray.cli.report.markup.Markup;
 import plumbray.cli.report.markup.NumberText;
@@ -74,7 +74,10 @@ final class ReferenceSection implements Section {
   }
 
   private static String kind(Reference reference) {
-    return reference.kind() instanceof StaffTarget ? "staff" : "points";
+    if (reference.kind() instanceof CodedTarget) {
+      return "coded staff";
+    }
+    return reference.kind().bars().isPresent() ? "staff" : "points";
   }
 
   private void crops(Markup page, Reference reference, ReferenceReading reading) {

@@ -8,7 +8,6 @@ import java.util.List;
 import java.util.Objects;
 import java.util.Optional;
 import plumbray.calibration.sight.Sight;
-import plumbray.calibration.sight.StaffTarget;
 import plumbray.cli.document.BatchPhoto;
 import plumbray.cli.document.Digest;
 import plumbray.cli.document.InputException;
@@ -69,7 +68,7 @@ public record PhotoTask(String name, Optional<Path> photo, Sight sight, List<Dig
 
   private static void checkPhotoGiven(Path file, Sight sight, Optional<Path> photo) {
     for (int i = 0; i < sight.references().size() && photo.isEmpty(); i++) {
-      if (sight.references().get(i).kind() instanceof StaffTarget) {
+      if (sight.references().get(i).kind().bars().isPresent()) {
         throw new InputException(
             "%s: /references/%d is a staff, must be points where no photo is given (what the heights are read from); give the photo"
                 .formatted(file, i));

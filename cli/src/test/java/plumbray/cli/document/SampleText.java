@@ -40,6 +40,15 @@ record SampleText(String file, String text) {
                 + " \"gradientKPerM\": 0.4}]");
   }
 
+  /** Everything, the staff a coded one. */
+  static SampleText coded() {
+    return everything()
+        .with(
+            "\"staff\": {\"edgesM\": [0.0, 0.1, 0.2, 0.3], \"firstBar\": \"dark\"}",
+            "\"coded\": {\"bits\": 7, \"elements\": 80, \"moduleM\": 0.03, \"bottomM\": 0.2,"
+                + " \"firstBar\": \"bright\"}");
+  }
+
   /** The same with one place changed; the place must be there, so that no case tests nothing. */
   SampleText with(String from, String to) {
     if (!text.contains(from)) {

@@ -45,6 +45,8 @@ class SchemaAgreementTest {
     assertThat(
             schema(DocumentFormat.SIGHT).validate(SampleText.stretches().text(), InputFormat.JSON))
         .isEmpty();
+    assertThat(schema(DocumentFormat.SIGHT).validate(SampleText.coded().text(), InputFormat.JSON))
+        .isEmpty();
   }
 
   @ParameterizedTest
@@ -62,7 +64,9 @@ class SchemaAgreementTest {
   @Test
   void whatTheProgramWritesHolds() {
     for (SampleText sample :
-        new SampleText[] {SampleText.everything(), SampleText.least(), SampleText.stretches()}) {
+        new SampleText[] {
+          SampleText.everything(), SampleText.least(), SampleText.stretches(), SampleText.coded()
+        }) {
       var sight = SightReader.read(sample.file(), sample.bytes());
       assertThat(holds(DocumentFormat.SIGHT, Json.text(SightWriter.write(sight)))).isTrue();
     }

@@ -192,17 +192,33 @@ class SightMessagesTest {
                 + " photo)"),
         everything(
             "\"staff\": {\"edgesM\": [0.0, 0.1, 0.2, 0.3], \"firstBar\": \"dark\"}",
-            "\"coded\": {}",
-            "/references/0/coded is given, must be left out (a reference; this release reads staff"
-                + " and points alone)"),
+            "\"baseline\": {}",
+            "/references/0/baseline is given, must be left out (a reference; this release reads"
+                + " staff, coded and points alone)"),
+        everything(
+            "\"staff\": {\"edgesM\": [0.0, 0.1, 0.2, 0.3], \"firstBar\": \"dark\"}",
+            "\"coded\": {\"moduleM\": 0.03}",
+            "/references/0/coded/bits is missing, must be given (stages of the register that makes"
+                + " the code)"),
+        everything(
+            "\"staff\": {\"edgesM\": [0.0, 0.1, 0.2, 0.3], \"firstBar\": \"dark\"}",
+            "\"coded\": {\"bits\": 4, \"moduleM\": 0.03}",
+            "/references/0/coded/bits is 4, must be 5 to 9 (stages of the register that makes the"
+                + " code)"),
+        everything(
+            "\"staff\": {\"edgesM\": [0.0, 0.1, 0.2, 0.3], \"firstBar\": \"dark\"}",
+            "\"coded\": {\"bits\": 7, \"moduleM\": 0.03, \"edgesM\": [0, 1]}",
+            "/references/0/coded/edgesM is not a known key, must be one of bits, elements, moduleM,"
+                + " bottomM, firstBar (a coded staff)"),
         everything(
             "\"staff\": {\"edgesM\": [0.0, 0.1, 0.2, 0.3], \"firstBar\": \"dark\"},",
             "",
-            "/references/0 is of no kind, must be exactly one of staff, points (a reference)"),
+            "/references/0 is of no kind, must be exactly one of staff, coded, points (a"
+                + " reference)"),
         everything(
             "\"imageBox\": [2950.0, 1700.0, 3050.0, 2300.0]",
             "\"points\": []",
-            "/references/0 is both staff and points, must be exactly one of staff, points (a"
+            "/references/0 is both staff and points, must be exactly one of staff, coded, points (a"
                 + " reference)"),
         everything(
             "\"sense\": \"upright\"",

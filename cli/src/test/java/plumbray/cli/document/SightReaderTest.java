@@ -1,11 +1,13 @@
 package plumbray.cli.document;
 
 import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.assertThatThrownBy;
 
 import java.util.List;
 import org.junit.jupiter.api.Test;
 import plumbray.calibration.camera.PixelPoint;
 import plumbray.calibration.quantity.Quantity;
+import plumbray.calibration.sight.CodedTarget;
 import plumbray.calibration.sight.ImageBox;
 import plumbray.calibration.sight.PointMark;
 import plumbray.calibration.sight.PointTarget;
@@ -61,6 +63,28 @@ class SightReaderTest {
         .containsEntry("surfaceExcessK", Quantity.free(15.0).within(-60.0, 120.0))
         .containsEntry("scaleHeightM", Quantity.free(0.1).within(0.002, 5.0));
     assertThat(sight.profile().quantities().get("gradientKPerM").sigma()).isEqualTo(0.05);
+  }
+
+  @Test
+  void aCodedStaffIsReadAndMostOfItMayBeLeftOut() {
+    SampleText coded = SampleText.coded();
+    CodedTarget given = new CodedTarget(7, 80, 0.03, 0.2, false);
+    assertThat(read(coded).references().get(0).kind()).isEqualTo(given);
+    SampleText least =
+        coded
+            .with("\"elements\": 80, ", "")
+            .with(", \"bottomM\": 0.2, \"firstBar\": \"bright\"", "");
+    assertThat(read(least).references().get(0).kind())
+        .isEqualTo(new CodedTarget(7, 127, 0.03, 0.0, true));
+  }
+
+  @Test
+  void aCodedStaffHasNoMoreElementsThanItsSequence() {
+    SampleText coded = SampleText.coded().with("\"elements\": 80", "\"elements\": 128");
+    assertThatThrownBy(() -> read(coded))
+        .hasMessageEndingWith(
+            "/references/0/coded/elements is 128, must be 14 to 127 (how many elements the staff"
+                + " has)");
   }
 
   @Test

@@ -4,7 +4,6 @@ import java.util.List;
 import java.util.stream.DoubleStream;
 import plumbray.calibration.sight.Reference;
 import plumbray.calibration.sight.Sight;
-import plumbray.calibration.sight.StaffTarget;
 import plumbray.raymodel.mapping.Branch;
 import plumbray.raymodel.mapping.Sense;
 import plumbray.raymodel.mapping.SightMapping;
@@ -42,8 +41,8 @@ public final class TargetHeights {
     top = Math.max(top, ABOVE_LOWEST * (lowest - mapping.groundM()));
     double distanceM = mapping.distanceM();
     for (Reference reference : sight.references()) {
-      if (reference.distanceM() == distanceM && reference.kind() instanceof StaffTarget staff) {
-        double[] edges = staff.edgesM();
+      if (reference.distanceM() == distanceM && reference.kind().bars().isPresent()) {
+        double[] edges = reference.kind().bars().get().edgesM();
         top = Math.max(top, ABOVE_STAFF * (edges[edges.length - 1] + reference.footM().value()));
       }
     }

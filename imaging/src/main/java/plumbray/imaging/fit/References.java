@@ -46,8 +46,9 @@ record References(List<StaffScene> staffs, List<PointObservation> points) {
     Camera camera = sight.camera().camera();
     for (int i = 0; i < sight.references().size(); i++) {
       Reference reference = sight.references().get(i);
-      if (reference.kind() instanceof StaffTarget staff) {
-        staffs.add(new StaffScene(i, reference, staff, strip(reference, photo, camera)));
+      Optional<StaffTarget> bars = reference.kind().bars();
+      if (bars.isPresent()) {
+        staffs.add(new StaffScene(i, reference, bars.get(), strip(reference, photo, camera)));
       } else if (reference.kind() instanceof PointTarget target) {
         points.add(new PointObservation(i, reference, target));
       }

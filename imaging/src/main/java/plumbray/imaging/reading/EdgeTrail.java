@@ -41,6 +41,9 @@ final class EdgeTrail {
   private static final double PRICE_OF_BREAK = 8.0;
   private static final double PRICE_OF_NO_TOP = 1.0;
 
+  /** A picture seldom shows an inverted image without the upright one above it. */
+  private static final double PRICE_OF_NO_UPRIGHT = 1.5;
+
   /** Scales may be this far from that of a straight ray, in logarithms, at no price. */
   private static final double PLAIN_SCALE = 1.5;
 
@@ -128,11 +131,12 @@ final class EdgeTrail {
   /** An image begins: the trail's first, one that a turn leads to, or one after a break. */
   private void begin(int j, int k, boolean upright, double bestSoFar, int bestState) {
     int at = state(j, k, upright, 0);
-    if (upright) {
-      score[at] = k == edges - 1 ? 0.0 : -PRICE_OF_NO_TOP;
-      before[at] = -1;
-      first[at] = k;
+    score[at] = upright ? -PRICE_OF_NO_TOP : -PRICE_OF_NO_UPRIGHT;
+    if (upright && k == edges - 1) {
+      score[at] = 0.0;
     }
+    before[at] = -1;
+    first[at] = k;
     offer(at, bestState, bestSoFar - PRICE_OF_BREAK);
     for (int dj = 1; dj <= REACH && dj <= j; dj++) {
       for (int dk = 1 - REACH; dk < REACH; dk++) {

@@ -170,19 +170,26 @@ public final class SmallSights {
   public static Photo photo(Sight sight, Shimmer shimmer, Sensor sensor, long seed) {
     List<Thing> things = new ArrayList<>();
     for (Reference reference : sight.references()) {
-      if (reference.kind() instanceof StaffTarget staff) {
-        things.add(
-            new Thing(
-                reference.name(),
-                reference.distanceM(),
-                reference.footM().value(),
-                new StaffShape(
-                    acrossM(sight, reference),
-                    0.6 * reference.distanceM() / DISTANCE_M,
-                    staff.edgesM(),
-                    new StaffShape.Bars(0.05, 0.75, staff.firstBarDark()))));
-      }
+      reference
+          .kind()
+          .bars()
+          .ifPresent(
+              staff ->
+                  things.add(
+                      new Thing(
+                          reference.name(),
+                          reference.distanceM(),
+                          reference.footM().value(),
+                          shape(staff, acrossM(sight, reference), reference.distanceM()))));
     }
     return new Simulation(sight, new Scene(seed, BACKDROP, things, shimmer, sensor)).photo();
+  }
+
+  private static StaffShape shape(StaffTarget staff, double acrossM, double distanceM) {
+    return new StaffShape(
+        acrossM,
+        0.6 * distanceM / DISTANCE_M,
+        staff.edgesM(),
+        new StaffShape.Bars(0.05, 0.75, staff.firstBarDark()));
   }
 }
