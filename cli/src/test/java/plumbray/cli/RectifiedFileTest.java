@@ -10,6 +10,7 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Random;
 import java.util.zip.CRC32;
@@ -165,6 +166,27 @@ class RectifiedFileTest {
     assertThat(err.toString().strip())
         .isEqualTo("note: " + path("p.png") + ": its XMP is not well-formed and is left out");
     assertThat(xmp("out/p.rectified.png")).contains("Plumbray ");
+  }
+
+  /** Nothing appears where the results would go, not even the folder. */
+  @ParameterizedTest
+  @ValueSource(strings = {"jpg", "png", "tif"})
+  void damagedPhotosLeaveOneLineAndNoFile(String ending) throws IOException, PhotoException {
+    Path whole = folder.resolve("whole." + ending);
+    PhotoWriter.write(noise(3, 8), whole);
+    byte[] bytes = Files.readAllBytes(whole);
+    Random random = new Random(12);
+    for (int i = 0; i < 25; i++) {
+      int length = ending.equals("tif") ? random.nextInt(5000) : random.nextInt(bytes.length);
+      byte[] cut = Arrays.copyOf(bytes, length);
+      Files.write(folder.resolve("p." + ending), cut);
+      assertThat(rectified("p." + ending)).isEqualTo(2);
+      assertThat(err.toString().strip())
+          .startsWith("plumbray: " + path("p." + ending) + ": ")
+          .contains("; ")
+          .doesNotContain("\n", "null", "Exception");
+      assertThat(folder.resolve("out")).doesNotExist();
+    }
   }
 
   @Test

@@ -15,6 +15,9 @@ import javax.imageio.stream.MemoryCacheImageOutputStream;
 
 /** Writes JPEG files: the runtime's encoder, and what the file says in segments before it. */
 final class JpegEncoder {
+  /** How long an EXIF block or an XMP packet can be behind its name in one segment. */
+  static final int METADATA_BYTES_MOST = 65500;
+
   private static final int SEGMENT_BYTES_MOST = 65533;
   private static final int PROFILE_PART_MOST = 65519;
 

@@ -12,19 +12,35 @@ final class OutgoingMetadata {
   private final Optional<ExifBlock> exif;
   private final Optional<byte[]> xmp;
 
-  OutgoingMetadata(Photo photo) {
+  /**
+   * What is to be said of a photo.
+   *
+   * @param bytesMost how long an EXIF block and an XMP packet can be in the file's format
+   */
+  OutgoingMetadata(Photo photo, int bytesMost) {
     this.carried = photo.metadata();
-    this.exif = carried.exif().map(block -> block.redrawn(photo.width(), photo.height()));
-    this.xmp = xmp(photo);
+    this.exif =
+        carried
+            .exif()
+            .map(block -> block.redrawn(photo.width(), photo.height()))
+            .filter(block -> block.bytes().length <= bytesMost);
+    this.xmp = xmp(photo, bytesMost);
   }
 
-  private Optional<byte[]> xmp(Photo photo) {
+  /** The source's packet with the origin; where both together are too long, the origin alone. */
+  private Optional<byte[]> xmp(Photo photo, int bytesMost) {
     Optional<XmpPacket> source = carried.xmp().flatMap(XmpPacket::read);
+    source.ifPresent(packet -> packet.setRedrawn(photo.width(), photo.height()));
+    return withOrigin(source)
+        .filter(packet -> packet.length <= bytesMost)
+        .or(() -> withOrigin(Optional.empty()).filter(packet -> packet.length <= bytesMost));
+  }
+
+  private Optional<byte[]> withOrigin(Optional<XmpPacket> source) {
     if (source.isEmpty() && carried.origin().isEmpty()) {
       return Optional.empty();
     }
     XmpPacket packet = source.orElseGet(XmpPacket::empty);
-    packet.setRedrawn(photo.width(), photo.height());
     carried.origin().ifPresent(packet::setOrigin);
     return Optional.of(packet.bytes());
   }

@@ -15,7 +15,9 @@ final class PhotoEncoder {
   /** Writes the file anew. */
   static void encode(Photo photo, PhotoFormat format, WriteOptions options, Path file)
       throws IOException {
-    OutgoingMetadata said = new OutgoingMetadata(photo);
+    int bytesMost =
+        format == PhotoFormat.JPEG ? JpegEncoder.METADATA_BYTES_MOST : Integer.MAX_VALUE;
+    OutgoingMetadata said = new OutgoingMetadata(photo, bytesMost);
     try (OutputStream out = new BufferedOutputStream(Files.newOutputStream(file), BUFFER_BYTES)) {
       switch (format) {
         case JPEG -> new JpegEncoder(photo, options, out).write(said);

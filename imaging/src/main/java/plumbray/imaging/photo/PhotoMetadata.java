@@ -19,6 +19,8 @@ public final class PhotoMetadata {
       new PhotoMetadata(
           new Parts(null, null, null, null, List.of(), Optional.empty(), FileCoding.unknown()));
 
+  private static final int XMP_BYTES_MOST = 56_000;
+
   private final Parts parts;
 
   private PhotoMetadata(Parts parts) {
@@ -165,9 +167,15 @@ public final class PhotoMetadata {
 
   /** What cannot be carried into another file, a line each. */
   public List<String> complaints() {
-    return parts.xmp == null || XmpPacket.read(parts.xmp).isPresent()
-        ? List.of()
-        : List.of("its XMP is not well-formed and is left out");
+    if (parts.xmp == null) {
+      return List.of();
+    }
+    if (XmpPacket.read(parts.xmp).isEmpty()) {
+      return List.of("its XMP is not well-formed and is left out");
+    }
+    // only a JPEG has this limit, and leaves room for some pages of ours
+    boolean full = parts.coding.jpeg().isPresent() && parts.xmp.length > XMP_BYTES_MOST;
+    return full ? List.of("its XMP leaves no room for more and may be left out") : List.of();
   }
 
   List<FilePiece> pieces() {

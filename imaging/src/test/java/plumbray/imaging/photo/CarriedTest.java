@@ -117,6 +117,26 @@ class CarriedTest {
     assertThat(PhotoReader.read(png).metadata().pieces()).isEqualTo(pieces.subList(1, 3));
   }
 
+  /** One JPEG segment holds 65533 bytes (ITU-T T.81, B.1.1.4); other formats have no such limit. */
+  @Test
+  void xmpTooLongForAJpegGivesWayToTheOrigin() throws Exception {
+    String text = new String(XMP, StandardCharsets.UTF_8);
+    byte[] tooLong = text.replace("kiln road", "kiln ".repeat(13_000)).getBytes();
+    Photo photo =
+        SamplePhotos.gradient(new PhotoShape(8, 8, 3, 8))
+            .withMetadata(PhotoMetadata.none().withXmp(tooLong).withOrigin(ORIGIN));
+    Path jpeg = folder.resolve("photo.jpg");
+    PhotoWriter.write(photo, jpeg);
+    byte[] said = PhotoReader.read(jpeg).metadata().xmp().orElseThrow();
+    assertThat(new String(said, StandardCharsets.UTF_8))
+        .contains("Plumbray 9")
+        .doesNotContain("kiln");
+    Path png = folder.resolve("photo.png");
+    PhotoWriter.write(photo, png);
+    said = PhotoReader.read(png).metadata().xmp().orElseThrow();
+    assertThat(new String(said, StandardCharsets.UTF_8)).contains("Plumbray 9", "kiln kiln");
+  }
+
   @Test
   void damagedXmpIsLeftOutAndTheOriginIsStillWritten() throws Exception {
     PhotoMetadata said =
