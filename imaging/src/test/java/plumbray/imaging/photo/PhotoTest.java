@@ -5,6 +5,7 @@ import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.assertj.core.api.Assertions.within;
 
 import org.junit.jupiter.api.Test;
+import plumbray.imaging.light.SampleProfiles;
 
 class PhotoTest {
   /** Single precision of numbers up to one. */
@@ -43,6 +44,43 @@ class PhotoTest {
     GreyPlane plane = builder.build().linearLuminance(new PixelBox(0, 1, 3, 1));
     // Rec. ITU-R BT.709-6, item 3.2
     assertThat(plane.values()).containsExactly(0.2126f, 0.7152f, 0.0722f);
+  }
+
+  @Test
+  void anEmbeddedProfileSaysWhatLightIs() {
+    for (int bits : new int[] {8, 16}) {
+      for (int channels : new int[] {1, 3}) {
+        Photo photo = SamplePhotos.noise(new PhotoShape(9, 7, channels, bits), 4);
+        byte[] straight = SampleProfiles.straight();
+        byte[] power = SampleProfiles.power(2.2);
+        GreyPlane linear = under(photo, straight).linearLuminance();
+        GreyPlane bent = under(photo, power).linearLuminance();
+        if (channels == 1) {
+          double value = photo.sample(3, 2, 0) / (double) photo.shape().highestSample();
+          assertThat((double) linear.at(3, 2)).isCloseTo(value, within(1e-6));
+          // ICC.1:2010, 10.5: 2.2 is written as 563/256
+          assertThat((double) bent.at(3, 2)).isCloseTo(Math.pow(value, 563 / 256.0), within(1e-6));
+        }
+        assertThat(linear.at(3, 2)).isNotEqualTo(photo.linearLuminance().at(3, 2));
+        assertThat(bent.at(3, 2)).isLessThan(linear.at(3, 2));
+      }
+    }
+  }
+
+  private static Photo under(Photo photo, byte[] curve) {
+    byte[] profile =
+        photo.channels() == 1 ? SampleProfiles.grey(curve) : SampleProfiles.colour(curve);
+    return photo.withMetadata(PhotoMetadata.none().withIccProfile(profile));
+  }
+
+  @Test
+  void aProfileThatCannotBeUsedIsComplainedOfAndTakenAsSrgb() {
+    Photo photo = SamplePhotos.noise(new PhotoShape(9, 7, 3, 8), 4);
+    Photo broken = photo.withMetadata(PhotoMetadata.none().withIccProfile(new byte[200]));
+    assertThat(photo.profileComplaint()).isEmpty();
+    assertThat(under(photo, SampleProfiles.straight()).profileComplaint()).isEmpty();
+    assertThat(broken.profileComplaint().orElseThrow()).contains("taken as sRGB-encoded");
+    assertThat(broken.linearLuminance().values()).isEqualTo(photo.linearLuminance().values());
   }
 
   @Test

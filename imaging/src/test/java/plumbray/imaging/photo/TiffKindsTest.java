@@ -3,11 +3,16 @@ package plumbray.imaging.photo;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 
+import java.awt.image.BufferedImage;
 import java.io.IOException;
 import java.nio.ByteOrder;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.stream.Stream;
+import javax.imageio.IIOImage;
+import javax.imageio.ImageWriteParam;
+import javax.imageio.ImageWriter;
+import javax.imageio.stream.FileImageOutputStream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -108,6 +113,39 @@ class TiffKindsTest {
       tiff.piece(tiff.words(plane));
     }
     requireSamples(read(tiff.bytes()), 3);
+  }
+
+  /** Packed by the runtime's own writer. */
+  @ParameterizedTest
+  @CsvSource({
+    "LZW,8",
+    "LZW,16",
+    "ZLib,8",
+    "ZLib,16",
+    "Deflate,8",
+    "Deflate,16",
+    "PackBits,8",
+    "PackBits,16"
+  })
+  void waysOfPacking(String way, int bits) throws Exception {
+    Photo photo = SamplePhotos.noise(new PhotoShape(31, 70, 3, bits), 6);
+    Path file = folder.resolve("packed.tif");
+    ImageWriter writer = Codecs.writer(PhotoFormat.TIFF);
+    try (FileImageOutputStream out = new FileImageOutputStream(file.toFile())) {
+      ImageWriteParam param = writer.getDefaultWriteParam();
+      param.setCompressionMode(ImageWriteParam.MODE_EXPLICIT);
+      param.setCompressionType(way);
+      writer.setOutput(out);
+      BufferedImage image = ImageView.of(photo.shape(), photo.samples());
+      writer.write(null, new IIOImage(image, null, null), param);
+    } finally {
+      writer.dispose();
+    }
+    Photo back = PhotoReader.read(file);
+    assertThat(back.withMetadata(PhotoMetadata.none())).isEqualTo(photo);
+    Path again = folder.resolve("again.tif");
+    PhotoWriter.write(back, again);
+    assertThat(PhotoReader.read(again)).isEqualTo(back);
   }
 
   @ParameterizedTest
