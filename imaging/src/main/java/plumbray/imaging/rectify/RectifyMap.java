@@ -15,9 +15,11 @@ import plumbray.raymodel.ray.StraightRay;
 /**
  * From a pixel of the redrawn picture to the place in the photo that shows what belongs there.
  *
- * <p>Polygons are drawn on the photo. The first region whose things, as seen in the photo, lie
- * inside its polygon is the one shown; where a region's thing is not seen in the photo, the output
- * pixel itself must lie inside. A pixel that no region claims goes with the last one.
+ * <p>Polygons are drawn on the photo, and a place of the photo belongs to the first region that
+ * holds it. The first region whose things, as seen in the photo, lie inside its polygon is the one
+ * shown; where they lie in that of an earlier region too, that one hides them, and nothing shows
+ * them: else its rim would be drawn a second time. Where a region's thing is not seen in the photo,
+ * the output pixel itself must lie inside. A pixel that no region claims goes with the last one.
  */
 public final class RectifyMap {
   private final Camera camera;
@@ -176,10 +178,25 @@ public final class RectifyMap {
         code = MaskPlane.OUTSIDE;
         return holds(region, u, v);
       }
-      return holds(
-          region,
-          withinCentres(source[0], camera.widthPx()),
-          withinCentres(source[1], camera.heightPx()));
+      double seenU = withinCentres(source[0], camera.widthPx());
+      double seenV = withinCentres(source[1], camera.heightPx());
+      if (!holds(region, seenU, seenV)) {
+        return false;
+      }
+      if (isTaken(region, seenU, seenV)) {
+        code = MaskPlane.NEVER_VISIBLE;
+      }
+      return true;
+    }
+
+    /** Whether an earlier region has that place of the photo: what is there hides this region. */
+    private boolean isTaken(int region, double u, double v) {
+      for (int i = 0; i < region; i++) {
+        if (holds(i, u, v)) {
+          return true;
+        }
+      }
+      return false;
     }
 
     private boolean holds(int region, double u, double v) {

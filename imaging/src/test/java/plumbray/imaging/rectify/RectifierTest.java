@@ -161,4 +161,44 @@ class RectifierTest {
             "photo is 120 x 150 px, must be 150 x 120 px (size of the camera's pictures);"
                 + " use the sight of this photo's camera");
   }
+
+  /** A board, seen 12 px too high, before a background that is seen 3 px too high. */
+  @Test
+  void whatOneRegionShowsIsNotDrawnAgainByAnother() {
+    double[][] corners = {{49.5, 39.5}, {89.5, 39.5}, {89.5, 69.5}, {49.5, 69.5}};
+    double pixelRad = 1 / LEVEL.focalPx();
+    RectifyMap map =
+        new RectifyMap(
+            LEVEL,
+            List.of(
+                new MappedRegion(Optional.of(new Outline(corners)), higher(12 * pixelRad)),
+                new MappedRegion(Optional.empty(), higher(3 * pixelRad))));
+    PhotoBuilder photo = new PhotoBuilder(new PhotoShape(150, 120, 1, 8));
+    for (int y = 0; y < 120; y++) {
+      for (int x = 0; x < 150; x++) {
+        boolean board = x >= 50 && x < 90 && y >= 40 && y < 70;
+        photo.sample(x, y, 0, board ? 220 : 60);
+      }
+    }
+    Rectified redrawn = Rectifier.rectify(photo.build(), map, 1);
+    for (int y = 3; y < 120; y++) {
+      boolean board = y >= 52 && y < 82;
+      // the board covers rows 40 to 69 of the photo: what shows 3 px lower is not to be known
+      boolean hidden = y >= 43 && y < 52;
+      int code = redrawn.mask().at(70, y);
+      assertThat(code)
+          .as("row %d", y)
+          .isEqualTo(hidden ? MaskPlane.NEVER_VISIBLE : MaskPlane.UPRIGHT);
+      if (!hidden && Math.abs(y - 52) > 2 && Math.abs(y - 82) > 2 && Math.abs(y - 43) > 2) {
+        assertThat(redrawn.picture().sample(70, y, 0)).as("row %d", y).isEqualTo(board ? 220 : 60);
+      }
+      // filled with the tones above and below, and so without a gap
+      assertThat(redrawn.picture().sample(70, y, 0)).as("row %d", y).isGreaterThan(40);
+    }
+  }
+
+  private static ElevationTable higher(double byRad) {
+    ApparentBranch branch = SampleBranches.shifted(STRAIGHT, DISTANCE_M, byRad, -0.01, 0.01);
+    return MappingTable.of(List.of(branch), STRAIGHT, DISTANCE_M, ElevationSpan.of(LEVEL));
+  }
 }
