@@ -39,8 +39,7 @@ public final class BenchmarkReport {
 
   private static void fans() throws RunnerException {
     print("400 rays over 1 km through an exponential profile of 25 K, with derivatives by 5");
-    print(
-        "parameters, every height good to 1e-6 m. Fast ms (worst error, m), and how many times");
+    print("parameters, every height good to 1e-6 m. Fast ms (worst error, m), and how many times");
     print("as long the library takes: Dormand-Prince 8(5,3) with the same 12 equations, on the");
     print("same table of the air, and on the air itself.");
     print("%-8s %-18s %-25s %-25s", "scale m", "own", "library", "library, no table");

@@ -38,4 +38,14 @@ public record Reference(
   public Reference withFootM(Quantity newFootM) {
     return new Reference(name, distanceM, newFootM, kind, imageBox);
   }
+
+  /**
+   * The same reference at a place in the picture.
+   *
+   * @param box where it is
+   * @return the changed reference
+   */
+  public Reference withImageBox(ImageBox box) {
+    return new Reference(name, distanceM, footM, kind, Optional.of(box));
+  }
 }

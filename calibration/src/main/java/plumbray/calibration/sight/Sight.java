@@ -74,4 +74,15 @@ public record Sight(
     return new Sight(
         name, newCamera, path, air, profile, references, regions, refractionCoefficient);
   }
+
+  /**
+   * The same sight with other references.
+   *
+   * @param newReferences what is known of things in the picture
+   * @return the changed sight
+   */
+  public Sight withReferences(List<Reference> newReferences) {
+    return new Sight(
+        name, camera, path, air, profile, newReferences, regions, refractionCoefficient);
+  }
 }

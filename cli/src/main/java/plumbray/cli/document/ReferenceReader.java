@@ -55,11 +55,6 @@ final class ReferenceReader {
     double distanceM = reference.si("distanceM", DISTANCE);
     String kind = kind(reference);
     Optional<ImageBox> box = reference.find("imageBox").map(frame::box);
-    if (!kind.equals("points") && box.isEmpty()) {
-      throw reference
-          .child("imageBox")
-          .wrong("[u0, v0, u1, v1]", "where the staff is in the photo");
-    }
     return new Reference(
         name,
         distanceM,

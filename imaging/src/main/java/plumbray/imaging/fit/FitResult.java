@@ -54,6 +54,23 @@ public record FitResult(
         jitterPx);
   }
 
+  /** The same outcome with more warnings, and with more doubt where they give reason to. */
+  FitResult with(List<Warning> more, boolean doubtful) {
+    List<Warning> all = new ArrayList<>(more);
+    all.addAll(warnings);
+    return new FitResult(
+        doubtful && status == FitStatus.GOOD ? FitStatus.DOUBTFUL : status,
+        error,
+        all,
+        asked,
+        sight,
+        estimates,
+        residuals,
+        alternatives,
+        readings,
+        jitterPx);
+  }
+
   /** A fit that gave nothing. */
   public static FitResult failed(Sight asked, String error) {
     return new FitResult(

@@ -20,6 +20,16 @@ public final class SightFit {
    */
   public FitResult fit(Sight sight, Optional<Photo> photo) {
     check(sight, photo);
+    if (photo.isPresent() && ReferenceSearch.needed(sight)) {
+      ReferenceSearch.Outcome found = new ReferenceSearch(sight, photo.get()).search();
+      return found.missing().isPresent()
+          ? FitResult.failed(sight, ReferenceSearch.missing(found.missing().get()))
+          : placed(found.sight(), photo).with(found.notes(), found.doubtful());
+    }
+    return placed(sight, photo);
+  }
+
+  private static FitResult placed(Sight sight, Optional<Photo> photo) {
     References references = References.read(sight, photo);
     if (sight.profile().family().isPresent()) {
       FamilyFit fit = new FamilyFit(sight, references);

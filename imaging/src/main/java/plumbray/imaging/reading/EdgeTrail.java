@@ -78,6 +78,19 @@ final class EdgeTrail {
    * @param nominalMPerPx metres a row where rays are straight
    */
   static List<List<Step>> of(StaffBars bars, List<StripEdges.Edge> seen, double nominalMPerPx) {
+    return scored(bars, seen, nominalMPerPx).stream().map(Scored::steps).toList();
+  }
+
+  /**
+   * A trail.
+   *
+   * @param steps its steps, down the strip
+   * @param score logarithm of how much likelier the edges are as bars of this staff than as any
+   */
+  record Scored(List<Step> steps, double score) {}
+
+  /** The same trails with their scores. */
+  static List<Scored> scored(StaffBars bars, List<StripEdges.Edge> seen, double nominalMPerPx) {
     EdgeTrail trail = new EdgeTrail(bars, seen, nominalMPerPx);
     trail.run();
     return trail.best();
@@ -222,7 +235,7 @@ final class EdgeTrail {
     return Math.abs(bars.edgeM(uprightOf(state) ? k + dk : k - dk) - bars.edgeM(k));
   }
 
-  private List<List<Step>> best() {
+  private List<Scored> best() {
     List<Integer> ends = new ArrayList<>();
     for (int k = 0; k < edges; k++) {
       int best = -1;
@@ -240,8 +253,8 @@ final class EdgeTrail {
     ends.sort(Comparator.comparingDouble(at -> -score[at]));
     return ends.stream()
         .filter(at -> score[at] > score[ends.get(0)] - ALMOST_AS_GOOD)
-        .map(this::steps)
-        .filter(steps -> steps.size() >= LEAST_STEPS)
+        .map(at -> new Scored(steps(at), score[at]))
+        .filter(scored -> scored.steps().size() >= LEAST_STEPS)
         .limit(MOST)
         .toList();
   }
