@@ -71,7 +71,7 @@ final class FloatRows {
     int lightChannels = photo.shape().lightChannels();
     for (int pixel = rim; pixel < end; pixel += channels) {
       for (int c = 0; c < lightChannels; c++) {
-        row[pixel + c] = light.decoded(row[pixel + c]);
+        row[pixel + c] = light.decoded(c, row[pixel + c]);
       }
     }
   }

@@ -1,49 +1,68 @@
 package plumbray.imaging.rectify;
 
+import plumbray.imaging.light.LightLaw;
+import plumbray.imaging.photo.Photo;
+
 /**
- * The sRGB curve between encoded samples and linear light, both on the scale of the samples (0 to
- * 255 or 65535).
- *
- * <p>With V the encoded value from 0 to 1: L = V / 12.92 up to V = 0.04045, above it L = ((V +
- * 0.055) / 1.055)^2.4 (IEC 61966-2-1:1999). Encoding is a table with straight lines between, which
- * errs by less than 0.01 of a 16 bit sample.
+ * Between encoded samples and linear light, both on the scale of the samples (0 to 255 or 65535),
+ * by the photo's own law: that of its embedded profile, else sRGB. Encoding is the exact inverse of
+ * decoding at whole samples, and straight between them.
  */
 final class LightCurve {
-  private static final int STEPS = 1 << 16;
-
   private final float highest;
-  private final float[] decoded;
-  private final float[] encoded = new float[STEPS + 2];
+  private final float[][] decoded;
 
-  LightCurve(int bits) {
-    int values = 1 << bits;
-    highest = values - 1;
-    decoded = new float[values];
-    for (int value = 0; value < values; value++) {
-      decoded[value] = (float) (highest * decode(value / (double) highest));
-    }
-    for (int step = 0; step < encoded.length; step++) {
-      encoded[step] = (float) (highest * encode(Math.min(1, step / (double) STEPS)));
+  /** The law of a photo. */
+  LightCurve(Photo photo) {
+    int colours = photo.shape().lightChannels();
+    LightLaw law =
+        photo
+            .metadata()
+            .iccProfile()
+            .map(profile -> LightLaw.of(profile, colours))
+            .orElseGet(() -> LightLaw.srgb(colours));
+    highest = photo.shape().highestSample();
+    decoded = new float[colours][];
+    for (int c = 0; c < colours; c++) {
+      decoded[c] = law.luminances(c, photo.bits()).clone();
+      scale(decoded[c]);
     }
   }
 
-  private static double decode(double value) {
-    return value <= 0.04045 ? value / 12.92 : Math.pow((value + 0.055) / 1.055, 2.4);
-  }
-
-  private static double encode(double light) {
-    return light <= 0.04045 / 12.92 ? 12.92 * light : 1.055 * Math.pow(light, 1 / 2.4) - 0.055;
+  /** To the scale of the samples, and never falling, so that there is a way back. */
+  private void scale(float[] light) {
+    float white = light[light.length - 1];
+    float before = 0;
+    for (int value = 0; value < light.length; value++) {
+      before = Math.max(before, highest * light[value] / white);
+      light[value] = before;
+    }
   }
 
   /** Linear light of a whole sample value. */
-  float decoded(float sample) {
-    return decoded[(int) sample];
+  float decoded(int colour, float sample) {
+    return decoded[colour][(int) sample];
   }
 
   /** Encoded value of linear light, limited to the range. */
-  float encoded(float light) {
-    float at = Math.max(0f, Math.min(1f, light / highest)) * STEPS;
-    int step = (int) at;
-    return encoded[step] + (at - step) * (encoded[step + 1] - encoded[step]);
+  float encoded(int colour, float light) {
+    float[] curve = decoded[colour];
+    int low = 0;
+    int high = curve.length - 1;
+    if (!(light > curve[low])) {
+      return low;
+    }
+    if (light >= curve[high]) {
+      return high;
+    }
+    while (high - low > 1) {
+      int middle = (low + high) >>> 1;
+      if (curve[middle] <= light) {
+        low = middle;
+      } else {
+        high = middle;
+      }
+    }
+    return low + (light - curve[low]) / (curve[high] - curve[low]);
   }
 }

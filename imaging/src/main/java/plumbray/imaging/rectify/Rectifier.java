@@ -31,8 +31,7 @@ public final class Rectifier {
     this.photo = photo;
     this.map = map;
     this.options = options;
-    this.curve =
-        options.linearLight() ? Optional.of(new LightCurve(photo.bits())) : Optional.empty();
+    this.curve = options.linearLight() ? Optional.of(new LightCurve(photo)) : Optional.empty();
     this.picture = new PhotoBuilder(photo.shape()).metadata(photo.metadata());
     this.codes = new byte[photo.width() * photo.height()];
   }

@@ -7,8 +7,8 @@ import java.util.Objects;
  * How photos are redrawn.
  *
  * @param interpolation how the photo is read between its pixels
- * @param linearLight whether samples are decoded from sRGB to linear light before they are mixed,
- *     and encoded again after
+ * @param linearLight whether samples are decoded to linear light before they are mixed, and encoded
+ *     again after
  * @param bothImages whether what is seen upright and inverted is drawn from both images, so that
  *     there is less noise; else from the upright one alone
  */

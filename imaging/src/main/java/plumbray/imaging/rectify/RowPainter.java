@@ -64,7 +64,7 @@ final class RowPainter {
   private void encode(LightCurve light) {
     for (int pixel = at(0); pixel < at(width); pixel += channels) {
       for (int c = 0; c < lightChannels; c++) {
-        row[pixel + c] = light.encoded(row[pixel + c]);
+        row[pixel + c] = light.encoded(c, row[pixel + c]);
       }
     }
   }

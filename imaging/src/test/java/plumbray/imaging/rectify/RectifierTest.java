@@ -10,8 +10,10 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import plumbray.calibration.camera.Camera;
+import plumbray.imaging.light.SampleProfiles;
 import plumbray.imaging.photo.Photo;
 import plumbray.imaging.photo.PhotoBuilder;
+import plumbray.imaging.photo.PhotoMetadata;
 import plumbray.imaging.photo.PhotoShape;
 import plumbray.imaging.rectify.RectifyMap.MappedRegion;
 import plumbray.imaging.rectify.SampleBranches.Parabola;
@@ -160,6 +162,26 @@ class RectifierTest {
         .hasMessage(
             "photo is 120 x 150 px, must be 150 x 120 px (size of the camera's pictures);"
                 + " use the sight of this photo's camera");
+  }
+
+  /** Half of the light of white, by a profile whose curve is a power. */
+  @ParameterizedTest
+  @CsvSource({"1, 127.5", "2, 180.3", "2.5, 193.3"})
+  void linearLightIsThatOfTheEmbeddedProfile(double power, double encoded) {
+    PhotoBuilder builder = new PhotoBuilder(new PhotoShape(150, 120, 1, 8));
+    for (int y = 60; y < 120; y++) {
+      for (int x = 0; x < 150; x++) {
+        builder.sample(x, y, 0, 255);
+      }
+    }
+    byte[] profile = SampleProfiles.grey(SampleProfiles.power(power));
+    builder.metadata(PhotoMetadata.none().withIccProfile(profile));
+    ApparentBranch halfARow =
+        SampleBranches.shifted(STRAIGHT, DISTANCE_M, 0.5 / LEVEL.focalPx(), -0.01, 0.01);
+    RedrawOptions options = new RedrawOptions(Interpolation.CUBIC, true);
+    Photo drawn = Rectifier.rectify(builder.build(), map(LEVEL, halfARow), options, 1).picture();
+    // 255 (1/2)^(1/power)
+    assertThat((double) drawn.sample(70, 60, 0)).isCloseTo(encoded, within(1.0));
   }
 
   /** A board, seen 12 px too high, before a background that is seen 3 px too high. */
