@@ -44,6 +44,7 @@ final class TiffFile {
       throws UnreadableException, IIOInvalidTreeException {
     TiffFile tiff = new TiffFile(TIFFDirectory.createFromMetadata(metadata));
     tiff.requireSupported();
+    tiff.requirePlainPalette();
     tiff.requireWhole(fileBytes);
     return tiff;
   }
@@ -113,6 +114,20 @@ final class TiffFile {
     }
     if (first(BaselineTIFFTagSet.TAG_EXTRA_SAMPLES, UNSIGNED) == UNSPECIFIED_EXTRA) {
       throw UnreadableException.unsupported("extra samples of unknown meaning");
+    }
+  }
+
+  /** The decoder keeps the upper 8 bit of a palette's colours; they must be all there is. */
+  private void requirePlainPalette() throws UnreadableException {
+    TIFFField map = directory.getTIFFField(BaselineTIFFTagSet.TAG_COLOR_MAP);
+    boolean repeated = true;
+    boolean padded = true;
+    for (int i = 0; map != null && i < map.getCount(); i++) {
+      repeated &= map.getAsLong(i) % 257 == 0;
+      padded &= map.getAsLong(i) % 256 == 0;
+    }
+    if (!repeated && !padded) {
+      throw UnreadableException.unsupported("a palette of colours with more than 8 bit");
     }
   }
 

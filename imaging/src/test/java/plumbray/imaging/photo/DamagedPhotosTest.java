@@ -27,7 +27,7 @@ import plumbray.imaging.metadata.SampleExif;
 
 /** Whatever is wrong with a file, one clear line comes of it, soon, and nothing else. */
 class DamagedPhotosTest {
-  private static final int CASES = 80;
+  private static final int CASES = 60;
 
   /** Each file is a few kilobytes; a hundredth of this is usual. */
   private static final Duration SOON = Duration.ofSeconds(5);

@@ -17,6 +17,7 @@ final class SampleTiff {
   static final int ROWS_PER_STRIP = 278;
   static final int PLANES = 284;
   static final int PREDICTOR = 317;
+  static final int PALETTE = 320;
   static final int TILE_WIDTH = 322;
   static final int TILE_HEIGHT = 323;
   static final int EXTRA_SAMPLES = 338;
@@ -91,7 +92,7 @@ final class SampleTiff {
   /** Writes an entry of type LONG, or SHORT for a single number; several go to {@code extra}. */
   private static int put(ByteBuffer out, int tag, long[] values, int extra) {
     boolean single = values.length == 1;
-    boolean small = tag == BITS || single && values[0] < 65536;
+    boolean small = tag == BITS || tag == PALETTE || single && values[0] < 65536;
     out.putShort((short) tag).putShort((short) (small ? 3 : 4)).putInt(values.length);
     if (single) {
       int at = out.position();

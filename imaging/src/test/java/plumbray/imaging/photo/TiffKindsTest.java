@@ -184,6 +184,26 @@ class TiffKindsTest {
                 + ", which is not supported; convert it to grey or RGB with 8 or 16 bit samples");
   }
 
+  /** TIFF 6.0, section 5: a palette's colours have 16 bit; 8 bit ones are written as 257 times. */
+  @Test
+  void palettesOfEightBitAreReadAndDeeperOnesRefused() throws Exception {
+    long[] colours = new long[3 * 256];
+    for (int i = 0; i < colours.length; i++) {
+      colours[i] = 257 * ((i * 7L + i / 256 * 31) % 256);
+    }
+    SampleTiff tiff = new SampleTiff(ByteOrder.LITTLE_ENDIAN, 2, 1, 1, 8);
+    tiff.tag(SampleTiff.COLOURS, 3).tag(SampleTiff.PALETTE, colours).piece((byte) 3, (byte) 200);
+    Photo photo = read(tiff.bytes());
+    for (int c = 0; c < 3; c++) {
+      assertThat(photo.sample(0, 0, c)).isEqualTo((int) colours[256 * c + 3] / 257);
+      assertThat(photo.sample(1, 0, c)).isEqualTo((int) colours[256 * c + 200] / 257);
+    }
+    colours[5]++;
+    Path file = Files.write(folder.resolve("deep.tif"), tiff.bytes());
+    assertThatThrownBy(() -> PhotoReader.read(file))
+        .hasMessageStartingWith(file + ": holds a palette of colours with more than 8 bit,");
+  }
+
   @Test
   void aBigTiffIsNamedSo() throws Exception {
     byte[] start = {'I', 'I', 43, 0, 8, 0, 0, 0, 16, 0};
