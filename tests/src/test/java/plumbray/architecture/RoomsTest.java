@@ -68,6 +68,15 @@ class RoomsTest {
           .resideInAPackage("picocli..");
 
   @ArchTest
+  static final ArchRule THE_PDF_LIBRARY_STAYS_WITH_THE_DRAWN_SHEETS =
+      noClasses()
+          .that()
+          .resideOutsideOfPackage("plumbray.cli.sheet..")
+          .should()
+          .dependOnClassesThat()
+          .resideInAPackage("org.apache.pdfbox..");
+
+  @ArchTest
   static final ArchRule THE_VISION_LIBRARY_STAYS_IN_IMAGING =
       noClasses()
           .that()

@@ -24,6 +24,7 @@ import picocli.CommandLine.Spec;
       MeasureCommand.class,
       BatchCommand.class,
       SimulateCommand.class,
+      StaffCommand.class,
       SchemaCommand.class
     },
     synopsisSubcommandLabel = "COMMAND",

@@ -20,9 +20,7 @@ final class ReferenceWriter {
     object.set("distanceM", Json.number(reference.distanceM()));
     Quantities.write(object, "footM", reference.footM(), Unit.METRE);
     if (reference.kind() instanceof StaffTarget staff) {
-      ObjectNode bars = object.putObject("staff");
-      bars.set("edgesM", Json.array(staff.edgesM()));
-      bars.put("firstBar", staff.firstBarDark() ? "dark" : "bright");
+      object.set("staff", staff(staff));
     } else if (reference.kind() instanceof CodedTarget coded) {
       object.set("coded", coded(coded));
     } else if (reference.kind() instanceof PointTarget points) {
@@ -31,6 +29,12 @@ final class ReferenceWriter {
     }
     reference.imageBox().ifPresent(box -> object.set("imageBox", box(box)));
     return object;
+  }
+
+  static ObjectNode staff(StaffTarget staff) {
+    ObjectNode object = Json.object();
+    object.set("edgesM", Json.array(staff.edgesM()));
+    return object.put("firstBar", staff.firstBarDark() ? "dark" : "bright");
   }
 
   static ObjectNode coded(CodedTarget coded) {
