@@ -44,11 +44,18 @@ public record PhotoOutcome(
     return status() == FitStatus.FAILED;
   }
 
+  /** The photo's line on the terminal: its verdict, and why it is not good where it is not. */
+  public String shortLine() {
+    return status() == FitStatus.GOOD ? verdict() : line();
+  }
+
+  private String verdict() {
+    return photo + ": " + status().key() + (kept ? " (kept, nothing has changed)" : "");
+  }
+
   /** The photo's line in the log: its verdict, and what is to be known about it. */
   public String line() {
-    StringBuilder line = new StringBuilder(photo).append(": ");
-    line.append(status().key());
-    line.append(kept ? " (kept, nothing has changed)" : "");
+    StringBuilder line = new StringBuilder(verdict());
     error.ifPresent(text -> line.append(": ").append(text));
     String warnings =
         fit.stream()

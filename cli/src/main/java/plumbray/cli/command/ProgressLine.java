@@ -33,7 +33,7 @@ final class ProgressLine implements BatchProgress {
 
   @Override
   public void finished(PhotoOutcome outcome, int finished, int total) {
-    String line = "[%d/%d] %s".formatted(finished, total, outcome.line());
+    String line = "[%d/%d] %s".formatted(finished, total, outcome.shortLine());
     if (outcome.failed()) {
       terminal.warning(clear() + (colours ? RED + line + PLAIN : line));
     } else if (!bar) {

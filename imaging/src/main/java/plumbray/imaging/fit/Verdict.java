@@ -9,6 +9,7 @@ import java.util.TreeSet;
 import org.apache.commons.math3.stat.regression.SimpleRegression;
 import plumbray.calibration.estimate.Degeneracy;
 import plumbray.calibration.estimate.Solution;
+import plumbray.calibration.quantity.Parameter;
 import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.SightParameters;
 import plumbray.imaging.reading.ReferenceObservation;
@@ -29,6 +30,9 @@ final class Verdict {
   private static final double MISFIT = 3.0;
   private static final double DRIFT_SHARE = 0.3;
   private static final double DRIFT_PX = 0.25;
+
+  /** A sigma that is still this part of the prior's has not been found from the photo. */
+  private static final double STILL_UNKNOWN = 0.5;
 
   private final Sight sight;
   private final FamilyFit.Adjusted adjusted;
@@ -207,18 +211,32 @@ final class Verdict {
   private void undetermined(Solution solution) {
     TreeSet<String> names = new TreeSet<>();
     for (Degeneracy degeneracy : solution.degeneracies()) {
-      degeneracy.names().stream()
-          .filter(n -> !n.contains("shimmerPx") && !n.contains("spreadPx"))
-          .map(PlainNames::of)
-          .forEach(names::add);
+      List<String> ofSight =
+          degeneracy.names().stream()
+              .filter(n -> !n.contains("shimmerPx") && !n.contains("spreadPx"))
+              .toList();
+      // one alone is undetermined only where the photo tells no more of it than was known before
+      if (ofSight.size() > 1 || ofSight.stream().anyMatch(n -> unknown(n, solution))) {
+        ofSight.stream().map(PlainNames::of).forEach(names::add);
+      }
     }
     if (!names.isEmpty()) {
       note(
           "undetermined",
-          "Nearly undetermined together: %s. Their sigmas say so; heights between the marks of a"
-              + " reference do not suffer. A reference at a second distance, a taller staff or a"
-              + " measured pitch would tell them apart.",
+          "Nearly undetermined together: %s. Their sigmas say so; heights between a reference's"
+              + " marks do not suffer. A second distance, a taller staff or a measured pitch would"
+              + " tell them apart.",
           String.join(", ", names));
     }
+  }
+
+  private boolean unknown(String name, Solution solution) {
+    List<Parameter> all = adjusted.observation().allParameters();
+    for (int k = 0; k < all.size(); k++) {
+      if (all.get(k).name().equals(name)) {
+        return !all.get(k).hasPrior() || solution.sigmas()[k] > STILL_UNKNOWN * all.get(k).sigma();
+      }
+    }
+    return false;
   }
 }
