@@ -10,16 +10,21 @@ import java.util.List;
  *
  * <p>Tabulated once: panels that halve until a quintic Hermite polynomial through both ends agrees
  * with Gauss-Legendre quadrature at the middle to {@link #TOLERANCE_M_PER_K}. Beyond the table,
- * where nothing is ever seen, the last panel's polynomial ends and I goes on as a straight line.
+ * where there is no air left, the last panel's polynomial ends and I goes on as a straight line.
  */
 final class InverseTemperatureIntegral {
 
   /** One part in 1e11 of pressure, with g/R = 0.034 K/m. */
   private static final double TOLERANCE_M_PER_K = 3e-10;
 
+  /** Above these many metres only rays into the sky come, and the air is thin. */
+  private static final double HIGH_M = 5000.0;
+
+  private static final double HIGH_TOLERANCE_M_PER_K = 1e-5;
+
   /** Panels end at these heights: kinks of the profiles at 0 and 50 m, then far out. */
   private static final double[] CORNERS_M = {
-    -500.0, -50.0, -5.0, -0.5, 0.0, 0.02, 0.2, 1.0, 5.0, 20.0, 50.0, 200.0, 1000.0, 5000.0
+    -500.0, -50.0, -5.0, -0.5, 0.0, 0.02, 0.2, 1.0, 5.0, 20.0, 50.0, 200.0, 1000.0, HIGH_M, 4e4, 4e5
   };
 
   private static final int DEEPEST = 24;
@@ -96,7 +101,8 @@ final class InverseTemperatureIntegral {
       worst = Math.max(worst, Math.abs(miss) / scale);
     }
     boolean coarse = b - a > WIDEST * column.verticalScaleM(mid);
-    if ((coarse || worst > TOLERANCE_M_PER_K) && depth < DEEPEST) {
+    double tolerance = a < HIGH_M ? TOLERANCE_M_PER_K : HIGH_TOLERANCE_M_PER_K;
+    if ((coarse || worst > tolerance) && depth < DEEPEST) {
       split(a, mid, depth + 1, grid);
       split(mid, b, depth + 1, grid);
     } else {

@@ -27,6 +27,13 @@ final class FanTracer {
    */
   private static final double HALVING_GAIN = 8.0;
 
+  /**
+   * Halving a smooth mapping divides the miss by 16. Where it gained less than this, or where that
+   * is not known, there may be a bend within the interval, as of rays that arrive in a thin layer,
+   * and the halves may miss nearly as much as the whole.
+   */
+  private static final double SMOOTH_GAIN = 10.0;
+
   private static final double SLOPE_WEIGHT = 1.25;
 
   /**
@@ -45,6 +52,9 @@ final class FanTracer {
   /** Grazing and turning rays are found to this part of the mapping's tolerance. */
   private static final double END_SHARE = 1e-5;
 
+  /** Steps that may be taken for each ray allowed, on the average; usual ones take some hundred. */
+  private static final int STEPS_A_RAY = 1500;
+
   private static final double FINEST_RAD = 1e-13;
   private static final int ITERATIONS = 60;
 
@@ -62,6 +72,7 @@ final class FanTracer {
   private final List<RayTrace> traces = new ArrayList<>();
   private final List<GrazingRay> grazing = new ArrayList<>();
   private int budget;
+  private int steps;
   private boolean exhausted;
 
   FanTracer(PathAir air, SightPath path, FanRequest request, double traceToleranceM) {
@@ -82,12 +93,13 @@ final class FanTracer {
     traces.add(left);
     for (int i = 1; i <= FIRST_INTERVALS; i++) {
       budget += request.mostRays() / FIRST_INTERVALS;
+      steps += STEPS_A_RAY * (request.mostRays() / FIRST_INTERVALS);
       double angle =
           i == FIRST_INTERVALS
               ? request.highestRad()
               : request.lowestRad() + span * i / FIRST_INTERVALS;
       RayTrace right = ray(angle);
-      refine(left, right, 0);
+      refine(left, right, 0, 0.0);
       left = right;
     }
     return traces;
@@ -103,9 +115,14 @@ final class FanTracer {
     return exhausted;
   }
 
+  private boolean spent() {
+    return budget <= 0 || steps <= 0;
+  }
+
   private RayTrace ray(double apparentRad) {
     budget--;
     RayTrace trace = tracer.trace(request.cameraHeightM(), apparentRad);
+    steps -= trace.steps();
     for (int d = 0; d < trace.reached(); d++) {
       for (int k = 0; k < trace.sensitivityCount(); k++) {
         largest[d][k] = Math.max(largest[d][k], Math.abs(trace.sensitivity(d, k)));
@@ -114,11 +131,16 @@ final class FanTracer {
     return trace;
   }
 
-  /** Appends the rays after {@code a} up to and with {@code b}. */
-  private void refine(RayTrace a, RayTrace b, int depth) {
+  /**
+   * Appends the rays after {@code a} up to and with {@code b}.
+   *
+   * @param missBefore what the cubic missed over the interval that this is half of, in tolerances;
+   *     0 where there was none
+   */
+  private void refine(RayTrace a, RayTrace b, int depth, double missBefore) {
     double width = b.apparentRad() - a.apparentRad();
-    if (depth >= DEEPEST || width <= 4.0 * endRad || budget <= 0) {
-      exhausted |= budget <= 0;
+    if (depth >= DEEPEST || width <= 4.0 * endRad || spent()) {
+      exhausted |= spent();
       traces.add(b);
       return;
     }
@@ -131,12 +153,14 @@ final class FanTracer {
     }
     RayTrace mid = ray(a.apparentRad() + 0.5 * width);
     boolean narrow = width < NARROWEST * request.toleranceRad();
-    if (mid.reached() == a.reached() && (narrow || foretold(a, mid, b))) {
+    boolean together = mid.reached() == a.reached();
+    double miss = together ? miss(a, mid, b) : 0.0;
+    if (together && (narrow || closeEnough(miss, missBefore) && restForetold(a, mid, b))) {
       traces.add(mid);
       traces.add(b);
     } else {
-      refine(a, mid, depth + 1);
-      refine(mid, b, depth + 1);
+      refine(a, mid, depth + 1, miss);
+      refine(mid, b, depth + 1, miss);
     }
   }
 
@@ -168,9 +192,9 @@ final class FanTracer {
     if (request.sensitivities()) {
       addGrazing(rightArrives ? after : before, target);
     }
-    refine(a, before, depth + 1);
+    refine(a, before, depth + 1, 0.0);
     traces.add(after);
-    refine(after, b, depth + 1);
+    refine(after, b, depth + 1, 0.0);
   }
 
   /** Keeps how the direction of a ray that grazes before target {@code i} varies. */
@@ -202,7 +226,9 @@ final class FanTracer {
 
   private double clearance(double apparentRad, int target) {
     budget--;
-    return tracer.traceThrough(request.cameraHeightM(), apparentRad).clearanceM(target);
+    RayTrace trace = tracer.traceThrough(request.cameraHeightM(), apparentRad);
+    steps -= trace.steps();
+    return trace.clearanceM(target);
   }
 
   /** Puts a ray where the slope at some distance is zero, if it changes sign between the rays. */
@@ -213,8 +239,8 @@ final class FanTracer {
       if (sa * sb < 0.0 && Math.abs(sa) > 1e-7 && Math.abs(sb) > 1e-7) {
         RayTrace turning = turning(a, b, d);
         if (turning.reached() == a.reached()) {
-          refine(a, turning, depth + 1);
-          refine(turning, b, depth + 1);
+          refine(a, turning, depth + 1, 0.0);
+          refine(turning, b, depth + 1, 0.0);
           return true;
         }
       }
@@ -253,11 +279,15 @@ final class FanTracer {
     return best;
   }
 
-  /** Whether the cubic through a and b foretells mid well enough at every distance. */
-  private boolean foretold(RayTrace a, RayTrace mid, RayTrace b) {
+  private static boolean closeEnough(double miss, double missBefore) {
+    return miss <= 1.0 || miss <= HALVING_GAIN && SMOOTH_GAIN * miss <= missBefore;
+  }
+
+  /** How far the cubic through a and b misses mid, in tolerances, at the worst distance. */
+  private double miss(RayTrace a, RayTrace mid, RayTrace b) {
     double width = b.apparentRad() - a.apparentRad();
+    double worst = 0.0;
     for (int d = 0; d < a.reached(); d++) {
-      double tolerance = HALVING_GAIN * request.toleranceRad() * distancesM[d];
       double y0 = a.elevationM(d);
       double y1 = b.elevationM(d);
       double d0 = a.sensitivity(d, 0);
@@ -266,10 +296,16 @@ final class FanTracer {
       double slope = CubicPiece.slope(0.5, width, y0, d0, y1, d1);
       double miss = Math.abs(value - mid.elevationM(d));
       double slopeMiss = Math.abs(slope - mid.sensitivity(d, 0)) * width;
-      if (!(miss + SLOPE_WEIGHT * slopeMiss <= tolerance)) {
-        return false;
-      }
-      if (request.sensitivities() && !sensitivitiesForetold(a, mid, b, d)) {
+      double all = (miss + SLOPE_WEIGHT * slopeMiss) / (request.toleranceRad() * distancesM[d]);
+      worst = all <= worst ? worst : all;
+    }
+    return worst;
+  }
+
+  /** Whether the other derivatives and the ground between a and b are as mid has them. */
+  private boolean restForetold(RayTrace a, RayTrace mid, RayTrace b) {
+    for (int d = 0; d < a.reached() && request.sensitivities(); d++) {
+      if (!sensitivitiesForetold(a, mid, b, d)) {
         return false;
       }
     }

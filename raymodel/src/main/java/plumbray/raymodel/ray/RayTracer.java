@@ -25,7 +25,7 @@ public final class RayTracer {
   private static final double SLOPE_LENGTH_M = 10.0;
   private static final double SAFETY = 0.9;
   private static final double SMALLEST_STEP_M = 1e-7;
-  private static final int MOST_STEPS = 1_000_000;
+  private static final int MOST_STEPS = 200_000;
   private static final double LANDING_M = 1e-9;
   private static final double LOST_BELOW_GROUND_M = 100.0;
 
@@ -156,7 +156,7 @@ public final class RayTracer {
       }
       if (trace.steps >= MOST_STEPS || !(state.heightM() > -LOST_BELOW_GROUND_M)) {
         Arrays.fill(trace.clearancesM, trace.reached, trace.clearancesM.length, watch.lowestM());
-        trace.accurate = trace.steps < MOST_STEPS;
+        trace.accurate &= trace.steps < MOST_STEPS && Double.isFinite(state.heightM());
         return false;
       }
     }

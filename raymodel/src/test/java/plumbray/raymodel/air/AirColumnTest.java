@@ -8,6 +8,7 @@ import java.util.Arrays;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.MethodSource;
 import plumbray.raymodel.profile.ProfileFamily;
 import plumbray.raymodel.profile.Stability;
@@ -28,6 +29,26 @@ class AirColumnTest {
   static Stream<ExampleAir> airs() {
     return Arrays.stream(ProfileFamily.values())
         .flatMap(family -> Stream.of(ExampleAir.of(family, false), ExampleAir.of(family, true)));
+  }
+
+  /**
+   * US Standard Atmosphere (1976), heights and pressures of its table of layers up to 11 km, from
+   * memory; beyond, its formula p = p_0 (T/T_0)^(g M/(R L)) for the same lapse rate, down to the
+   * temperature at which the column becomes isothermal.
+   */
+  @ParameterizedTest
+  @CsvSource({
+    "11000, 22632.06, 0.02",
+    "-300, 104981.22, 0.02",
+    "20000, 4328.135, 0.01",
+    "30000, 267.945, 0.01"
+  })
+  void pressureFallsAsInTheStandardAtmosphere(double heightM, double pressurePa, double withinPa) {
+    AirState seaLevel = new AirState(288.15, 101_325.0, 0.0, 450.0, 550e-9);
+    TemperatureProfile lapse =
+        ProfileFamily.UNIFORM.profile(new double[] {-0.0065}, Stability.DYER);
+    AirColumn column = AirColumn.of(seaLevel, 0.0, lapse);
+    assertThat(column.pressurePa(heightM)).isCloseTo(pressurePa, within(withinPa));
   }
 
   @ParameterizedTest

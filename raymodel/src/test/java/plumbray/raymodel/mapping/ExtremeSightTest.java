@@ -74,6 +74,30 @@ class ExtremeSightTest {
     assertThat(fan.rayCount()).isLessThan(200);
   }
 
+  /** Rays to and fro in a duct of centimetres over 20 km would take hours. */
+  @Test
+  void airInWhichRaysTakeStepsWithoutEndIsGivenUpAndSaysSo() {
+    Medium absurd = air(1.5, ProfileFamily.TWO_SCALE, 600, 1e-4, -300, 200, 100);
+    FanRequest few =
+        new FanRequest(1.5, -0.012, 0.012, new double[] {20_000}, TOLERANCE_RAD, 64, true);
+    RayFan fan = RayFan.trace(absurd, SightPath.level(), few);
+    assertThat(fan.accurate()).isFalse();
+    assertThat(fan.mapping(20_000).rays())
+        .allSatisfy(ray -> assertThat(ray.elevationM()).isFinite());
+  }
+
+  /** Rays that end kilometres up, where the pressure has fallen and the air grows thin. */
+  @ParameterizedTest
+  @CsvSource({"1, 0.5", "1000, 1.5", "20000, 0.3", "20000, 1.0", "20000, 1.5"})
+  void raysFarIntoTheSkyAreTracedWithFewOthers(double reachM, double highestRad) {
+    Medium hot = air(1.5, ProfileFamily.EXPONENTIAL, 20, 0.1, -0.0098);
+    FanRequest wide =
+        new FanRequest(1.5, -highestRad, highestRad, new double[] {reachM}, 4e-7, true);
+    RayFan fan = RayFan.trace(hot, SightPath.level(), wide);
+    check(fan);
+    assertThat(fan.rayCount()).isLessThan(1000);
+  }
+
   @Test
   void aCameraJustAboveWhatBlocksItSeesUpwards() {
     SightPath stubble = new SightPath(6_371_000, GroundProfile.level(), 0.0499999);

@@ -42,9 +42,12 @@ public final class MirageMedia {
       return 0.5 * h;
     }
 
-    /** Direction of the ray that just touches the ground, rad, from the height z0. */
+    /**
+     * Direction of the ray that just touches the ground, rad, from the height z0: n(z0) cos t =
+     * n(0), as a tangent, in which nothing cancels.
+     */
     public double grazingRad(double z0) {
-      return -Math.acos(Math.sqrt(square(0.0) / square(z0)));
+      return -Math.atan(Math.sqrt(-b * Math.expm1(-z0 / h) / square(0.0)));
     }
 
     /** E/C^2. */
