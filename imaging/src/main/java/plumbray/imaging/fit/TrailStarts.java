@@ -57,7 +57,7 @@ final class TrailStarts {
       starts(way).stream()
           .map(start -> adjusted(points, start))
           .filter(s -> Double.isFinite(s.cost()))
-          .min(Comparator.comparingDouble(TrailStarts::typicalMiss))
+          .min(Comparator.comparingDouble(Solution::cost))
           .map(s -> new Led(sightValues(s), ways.size() == 1, typicalMiss(s) < FOLLOWED))
           .ifPresent(all::add);
     }
