@@ -30,7 +30,7 @@ final class FamilyChoice {
   private static final double DEFAULT_GRADIENT_SIGMA_K_PER_M = 0.1;
 
   /** Families that leave this many times as much unexplained as the best are not refined. */
-  private static final double HOPELESS = 8.0;
+  private static final double HOPELESS = 3.0;
 
   private final Sight sight;
   private final References references;

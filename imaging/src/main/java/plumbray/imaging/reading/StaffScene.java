@@ -99,15 +99,14 @@ public final class StaffScene {
   }
 
   /**
-   * The edges of the ground that cut off inverted images of bars, within the strip, as a sight
-   * predicts them; as edges of number {@link #GROUND_EDGE}.
+   * The edges of the ground that cut off inverted images, within the strip, as a sight predicts
+   * them; as edges of number {@link #GROUND_EDGE}.
    */
   public List<EdgeImage> groundEdges(TracedSight sight) {
     List<Branch> branches = sight.mapping(place.distanceM()).branches();
     List<EdgeImage> ends = new ArrayList<>();
     for (StripEvent event : StripEvents.of(bars, strip, sight, place, new int[1])) {
       if (event.edge() == GROUND_EDGE
-          && bars.isBar(event.above())
           && event.row() >= strip.firstRow()
           && event.row() <= strip.firstRow() + strip.rows() - 1) {
         Sense sense = branches.get(branches.size() - 1 - event.image()).sense();
@@ -214,7 +213,7 @@ public final class StaffScene {
     }
     mark(use, what, from, strip.firstRow() + strip.rows());
     events.stream()
-        .filter(e -> e.branch().isEmpty())
+        .filter(e -> e.branch().isEmpty() && e.edge() != StripEvent.APART)
         .filter(
             e ->
                 e.edge() != GROUND_EDGE

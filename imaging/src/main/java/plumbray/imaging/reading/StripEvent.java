@@ -8,7 +8,7 @@ import plumbray.raymodel.mapping.Branch;
  *
  * @param row row, px, at the strip's column
  * @param edge index of the staff's edge; {@link #LOWER_END} or {@link #UPPER_END} where an image
- *     ends in the ground
+ *     ends in the ground, {@link #APART} shortly before
  * @param branch image in which the edge is seen; empty for the end of an image
  * @param image number of the image, counted downwards from the top of the fan
  * @param apparentRad apparent elevation, rad
@@ -29,4 +29,7 @@ record StripEvent(
 
   /** The upper end of an image. */
   static final int UPPER_END = -2;
+
+  /** A place above the ground's edge from which on what is no bar counts by itself. */
+  static final int APART = -3;
 }

@@ -13,6 +13,9 @@ final class StripEvents {
 
   private static final double MARGIN_PX = 40.0;
 
+  /** Well above the rows that show the ground's edge. */
+  private static final double APART_PX = 20.0;
+
   private final StaffBars bars;
   private final double columnPx;
   private final double shear;
@@ -126,6 +129,16 @@ final class StripEvents {
   }
 
   private void end(int end, double apparentRad, int image, int next) {
+    double[] pixel = new double[2];
+    camera.pixel(apparentRad, azimuthRad, pixel);
+    double row = pixel[1] - shear * (pixel[0] - columnPx) - APART_PX;
+    boolean last = events.isEmpty() || events.get(events.size() - 1).row() < row;
+    if (end == StripEvent.LOWER_END && !bars.isBar(current) && last) {
+      // what is seen next to the ground need not look as what is next to the bars
+      events.add(
+          new StripEvent(
+              row, StripEvent.APART, Optional.empty(), image, Double.NaN, current, current));
+    }
     add(apparentRad, end, Optional.empty(), image, next);
   }
 

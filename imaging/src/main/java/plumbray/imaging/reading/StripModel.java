@@ -74,7 +74,8 @@ final class StripModel {
       if (bars.isBar(what)) {
         columns[s] = bars.isDark(what) ? 0 : 2;
       } else {
-        columns[s] = what == before ? next - 1 : next++;
+        boolean apart = s > 0 && events.get(s - 1).edge() == StripEvent.APART;
+        columns[s] = what == before && !apart ? next - 1 : next++;
       }
       before = bars.isBar(what) ? Integer.MIN_VALUE : what;
     }

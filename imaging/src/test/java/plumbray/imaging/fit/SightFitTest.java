@@ -206,15 +206,20 @@ class SightFitTest {
   }
 
   @Test
-  void aStaffWithoutAnImageBoxIsRefused() {
+  void aStaffWithoutAnImageBoxIsLookedFor() {
     Reference staff = SmallSights.staff();
     Reference nowhere =
         new Reference(
             staff.name(), staff.distanceM(), staff.footM(), staff.kind(), Optional.empty());
     Photo plain = StripPhotos.of(SmallSights.WIDTH_PX, SmallSights.HEIGHT_PX, v -> 0.3);
-    assertThatIllegalArgumentException()
-        .isThrownBy(() -> new SightFit().fit(open(nowhere), Optional.of(plain)))
-        .withMessageContaining("has no imageBox, must have one");
+    FitResult missing = new SightFit().fit(open(nowhere), Optional.of(plain));
+    assertThat(missing.status()).isEqualTo(FitStatus.FAILED);
+    assertThat(missing.error().orElseThrow()).contains("has no imageBox");
+    Photo photo = SmallSights.stillPhoto(SmallSights.truth(6.0, 0.15));
+    FitResult found = new SightFit().fit(open(nowhere), Optional.of(photo));
+    assertThat(found.status()).as("%s", found.warnings()).isEqualTo(FitStatus.GOOD);
+    assertThat(found.warnings()).extracting(Warning::code).contains("reference-found");
+    assertThat(found.estimates().values()[1]).isCloseTo(6.0, within(CLEAN * 6.0));
   }
 
   @ParameterizedTest
