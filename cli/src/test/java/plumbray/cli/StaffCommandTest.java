@@ -73,7 +73,8 @@ class StaffCommandTest {
         .isZero();
     // 8 px of 0.25 m
     assertThat(pasted()).isEqualTo(new CodedTarget(5, 30, 2.0, 1.0, false));
-    assertThat(out.toString()).contains("Letter").contains("mount 15 copies side by side");
+    assertThat(out.toString()).contains("Letter");
+    assertThat(err.toString()).contains("mount 15 copies side by side");
     assertThat(folder.resolve("out/yard.staff.pdf")).isNotEmptyFile();
   }
 

@@ -27,7 +27,7 @@ import plumbray.cli.work.StaffWorker;
           + " sequence, so that any good stretch of it tells its own height and which way up it is"
           + " seen. An element is made some 8 pixels high at the sight's distance.",
       "",
-      "Writes, named after the sight file or simply \"staff\":",
+      "Writes, NAME being the sight file's (without one, staff.pdf and staff.svg):",
       "  NAME.staff.pdf  sheets for an ordinary printer, to cut and join",
       "  NAME.staff.svg  the whole staff, for a plotter or a sign maker",
       "and prints what to paste into a reference of the sight file.",
@@ -89,7 +89,7 @@ final class StaffCommand implements Callable<Integer> {
 
   @Option(
       names = "--edges-m",
-      paramLabel = "M,M,...",
+      paramLabel = "M",
       split = ",",
       description = "Draw a plain staff with these edges, m above the foot, rising, and no code.")
   private List<Double> edgesM;
@@ -135,8 +135,16 @@ final class StaffCommand implements Callable<Integer> {
     checkWidth(request.print());
     boolean dark = choice("--first-bar", firstBar, "dark", "bright");
     List<String> lines = edgesM == null ? coded(request, dark) : plain(request, dark);
-    lines.forEach(parent.terminal()::result);
+    lines.forEach(this::say);
     return ExitStatus.DONE.code();
+  }
+
+  private void say(String line) {
+    if (line.startsWith(StaffWorker.WARNING)) {
+      parent.terminal().warning(line);
+    } else {
+      parent.terminal().result(line);
+    }
   }
 
   private List<String> coded(StaffWorker.Request request, boolean dark) throws IOException {

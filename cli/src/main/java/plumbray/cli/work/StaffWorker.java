@@ -23,6 +23,9 @@ import plumbray.cli.sheet.StaffSvg;
 
 /** Draws staffs, and says how they were chosen. */
 public final class StaffWorker {
+  /** How lines begin that must be seen. */
+  public static final String WARNING = "warning: ";
+
   private static final double MM_PER_M = 1e3;
 
   /** Elements beyond two windows' worth that a stretch needs in practice. */
@@ -141,12 +144,13 @@ public final class StaffWorker {
                 Numbers.significant(elementPx, 2),
                 Numbers.significant(widthPx, 2)));
     if (elementPx < FEW_PX || elementPx > MANY_PX) {
-      lines.add("warning: elements are not 6 to 10 px high; choose another --module-mm");
+      lines.add(WARNING + "elements are not 6 to 10 px high; choose another --module-mm");
     }
     if (widthPx < NARROW_PX) {
       lines.add(
-          "warning: the staff is narrower than 8 px; mount %d copies side by side"
-              .formatted((int) Math.ceil(NARROW_PX / widthPx)));
+          WARNING
+              + "the staff is narrower than 8 px; mount %d copies side by side"
+                  .formatted((int) Math.ceil(NARROW_PX / widthPx)));
     }
     return lines;
   }
