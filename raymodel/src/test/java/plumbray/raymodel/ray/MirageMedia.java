@@ -90,9 +90,18 @@ public final class MirageMedia {
 
   /**
    * n^2 = N^2 + B exp(-z/h), K^2 = E/C^2 - tan^2 t: trapped rays, K^2 > 0, z = z_v + 2h ln cos[K (x
-   * - x_v)/2h]; others, T^2 = -K^2, exp(z/2h) = (sqrt(B)/(C T)) |sinh[T (x - x_s)/2h]|.
+   * - x_v)/2h]; others, T^2 = -K^2, exp(z/2h) = (sqrt(B)/(C T)) |sinh[T (x - x_s)/2h]|; the one
+   * between, K = 0, exp(z/2h) = exp(z0/2h) + sqrt(B) x/(2 h C).
    */
   public record ColdGround(double farIndex, double b, double h) implements ClosedMedium {
+    /** Below it sines are their angles to the last bit. */
+    private static final double NEITHER = 1e-8;
+
+    /** Direction of the ray that is neither trapped nor escapes, rad, from the height z0. */
+    public double escapingRad(double z0) {
+      return Math.asin(Math.sqrt(b * Math.exp(-z0 / h) / square(z0)));
+    }
+
     private double square(double z) {
       return farIndex * farIndex + b * Math.exp(-z / h);
     }
@@ -123,10 +132,11 @@ public final class MirageMedia {
       double c2 = square(z0) * Math.cos(t) * Math.cos(t);
       double k2 = b * Math.exp(-z0 / h) / c2 - tan * tan;
       double rate = 0.5 * Math.sqrt(Math.abs(k2)) / h;
-      double growth =
-          k2 > 0.0
-              ? Math.cos(rate * x) + tan / (2.0 * h * rate) * Math.sin(rate * x)
-              : Math.cosh(rate * x) + tan / (2.0 * h * rate) * Math.sinh(rate * x);
+      double turn = rate * x;
+      double reach = k2 > 0.0 ? Math.sin(turn) / rate : Math.sinh(turn) / rate;
+      // both come to x where K is 0 but for rounding
+      double along = Math.abs(turn) < NEITHER ? x : reach;
+      double growth = (k2 > 0.0 ? Math.cos(turn) : Math.cosh(turn)) + 0.5 * tan / h * along;
       return z0 + 2.0 * h * Math.log(growth);
     }
   }

@@ -14,6 +14,7 @@ record ZooRay(
   static final double EARTH_M = 6_371_000.0;
 
   private static final double N0 = 1.00027;
+  private static final MirageMedia.ColdGround COLD = new MirageMedia.ColdGround(1.00026, 5e-5, 2.0);
 
   /** Rays over flat ground. */
   static Stream<ZooRay> flat() {
@@ -28,8 +29,9 @@ record ZooRay(
         flat(new MirageMedia.HotGround(1.00026, 5e-5, 0.10), 1.5, -0.0025, 600),
         flat(new MirageMedia.HotGround(1.00026, 5e-5, 0.10), 1.5, 0.001, 600),
         flat(new MirageMedia.HotGround(1.00026, 4e-5, 0.01), 1.0, -0.006, 400),
-        flat(new MirageMedia.ColdGround(1.00026, 5e-5, 2.0), 1.0, 0.002, 900),
-        flat(new MirageMedia.ColdGround(1.00026, 5e-5, 2.0), 1.0, 0.008, 900));
+        flat(COLD, 1.0, 0.002, 900),
+        flat(COLD, 1.0, 0.008, 900),
+        flat(COLD, 1.0, COLD.escapingRad(1.0), 900));
   }
 
   /** Rays around the Earth: those made for it, and every flat one wrapped around it. */
@@ -37,6 +39,8 @@ record ZooRay(
     return Stream.concat(
         Stream.of(
             round(new SphereMedia.RadialPower(N0, 1.0, EARTH_M), 10.0, 0.001, 50_000),
+            // along the level surface: a circular orbit
+            round(new SphereMedia.RadialPower(N0, 1.0, EARTH_M), 10.0, 0.0, 50_000),
             round(new SphereMedia.RadialPower(N0, 0.13, EARTH_M), 2.0, -4e-4, 20_005.359),
             round(new SphereMedia.RadialPower(N0, -3.0, EARTH_M), 2.0, -4e-4, 20_005.173),
             round(new SphereMedia.RadialPower(N0, 1.7, EARTH_M), 2.0, -4e-4, 20_005.453),
