@@ -4,7 +4,10 @@ import java.util.List;
 import java.util.Locale;
 import plumbray.imaging.measure.MappingRow;
 
-/** Writes the mapping of a sight, one line a traced ray that arrives. */
+/**
+ * Writes the mapping of a sight, one line a traced ray that arrives. Between the rows of a run the
+ * mapping is the cubic through elevations and slopes.
+ */
 public final class MappingCsv {
   private static final List<String> HEADER =
       List.of(
@@ -18,9 +21,10 @@ public final class MappingCsv {
           "shift_px",
           "sigma_shift_px",
           "sense",
-          "z_sensitivity_m_per_mrad");
+          "z_sensitivity_m_per_mrad",
+          "run");
   // Decimals beyond what any camera resolves, so that differences of the numbers stay good.
-  private static final int MRAD = 7;
+  private static final int MRAD = 9;
   private static final int PIXEL = 4;
   private static final int METRE = 6;
 
@@ -45,7 +49,8 @@ public final class MappingCsv {
           Numbers.fixed(row.shiftPx(), PIXEL),
           Numbers.fixed(row.sigmaShiftPx(), PIXEL),
           row.sense().name().toLowerCase(Locale.ROOT),
-          Numbers.fixed(Unit.MILLIRADIAN.spanToSi(row.slopeMPerRad()), METRE));
+          Numbers.fixed(Unit.MILLIRADIAN.spanToSi(row.slopeMPerRad()), METRE),
+          Integer.toString(row.run()));
     }
     return table.text();
   }

@@ -28,6 +28,8 @@ import plumbray.raymodel.ray.StraightRay;
  * @param sigmaShiftPx standard deviation of the shift at that row of the photo, px
  * @param sense which way up the image is there
  * @param slopeMPerRad d elevation / d apparent elevation, m/rad
+ * @param run counts the runs of neighbouring rays at that distance, from 1: between two runs no ray
+ *     arrives, and nothing may be interpolated
  */
 public record MappingRow(
     double distanceM,
@@ -40,7 +42,8 @@ public record MappingRow(
     double shiftPx,
     double sigmaShiftPx,
     Sense sense,
-    double slopeMPerRad) {
+    double slopeMPerRad,
+    int run) {
 
   /**
    * The rows of all distances in use, by distance and rising apparent elevation.
@@ -52,7 +55,10 @@ public record MappingRow(
     List<MappingRow> rows = new ArrayList<>();
     for (SightMapping mapping : optics.mappings()) {
       Tracer tracer = new Tracer(optics, estimates, mapping);
-      mapping.rays().forEach(ray -> rows.add(tracer.row(ray)));
+      for (int i = 0; i < mapping.runs().size(); i++) {
+        int run = i + 1;
+        mapping.runs().get(i).forEach(ray -> rows.add(tracer.row(ray, run)));
+      }
     }
     return rows;
   }
@@ -80,7 +86,7 @@ public record MappingRow(
       distanceM = mapping.distanceM();
     }
 
-    MappingRow row(MappingRay ray) {
+    MappingRow row(MappingRay ray, int run) {
       double straightRad = straight.apparentRad(ray.elevationM(), distanceM);
       double rowPx = camera.rowAt(ray.apparentRad());
       double rectifiedRowPx = camera.rowAt(straightRad);
@@ -95,7 +101,8 @@ public record MappingRow(
           rectifiedRowPx - rowPx,
           sigmaShiftPx(ray, straightRad),
           ray.sense(),
-          ray.slopeMPerRad());
+          ray.slopeMPerRad(),
+          run);
     }
 
     private double sigmaShiftPx(MappingRay ray, double straightRad) {

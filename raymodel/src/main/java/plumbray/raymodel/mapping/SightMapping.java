@@ -14,19 +14,15 @@ public final class SightMapping {
   private final double distanceM;
   private final double groundM;
   private final List<Branch> branches;
-  private final List<MappingRay> rays;
+  private final List<List<MappingRay>> runs;
 
   SightMapping(double distanceM, double groundM, List<List<MappingRay>> runs) {
     this.distanceM = distanceM;
     this.groundM = groundM;
     List<Branch> pieces = new ArrayList<>();
-    List<MappingRay> all = new ArrayList<>();
-    for (List<MappingRay> run : runs) {
-      all.addAll(run);
-      cut(run, pieces);
-    }
+    runs.forEach(run -> cut(run, pieces));
     branches = List.copyOf(pieces);
-    rays = List.copyOf(all);
+    this.runs = runs.stream().map(List::copyOf).toList();
   }
 
   /** Cuts a run of rays where the slope changes sign; the traced vanishing ray belongs to both. */
@@ -61,7 +57,12 @@ public final class SightMapping {
 
   /** The traced rays that arrive, by rising apparent elevation. */
   public List<MappingRay> rays() {
-    return rays;
+    return runs.stream().flatMap(List::stream).toList();
+  }
+
+  /** The same rays in runs: from one run to the next lie directions whose rays never arrive. */
+  public List<List<MappingRay>> runs() {
+    return runs;
   }
 
   /** The branch that a direction belongs to; none where the ground stops its ray. */
