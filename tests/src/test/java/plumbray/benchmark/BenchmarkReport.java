@@ -15,7 +15,9 @@ import org.openjdk.jmh.runner.options.VerboseMode;
 import plumbray.raymodel.mapping.RayFan;
 import plumbray.raymodel.ray.TabulatedMedium;
 
-/** Measures everything and prints it. Takes some two minutes. */
+/**
+ * Measures everything and prints it. Takes some two minutes of a machine that does nothing else.
+ */
 public final class BenchmarkReport {
 
   /** The faster runs are taken, so that other work on the machine counts little. */
@@ -121,10 +123,10 @@ public final class BenchmarkReport {
         new OptionsBuilder()
             .include(benchmarks.getName() + "\\.")
             .forks(1)
-            .warmupIterations(2)
-            .warmupTime(TimeValue.milliseconds(700))
+            .warmupIterations(1)
+            .warmupTime(TimeValue.milliseconds(1000))
             .measurementIterations(3)
-            .measurementTime(TimeValue.milliseconds(700))
+            .measurementTime(TimeValue.milliseconds(300))
             .timeUnit(TimeUnit.MILLISECONDS)
             .verbosity(VerboseMode.SILENT)
             .build();
