@@ -57,7 +57,7 @@ final class TrailStarts {
       starts(way).stream()
           .map(start -> adjusted(points, start))
           .filter(s -> Double.isFinite(s.cost()))
-          .min(Comparator.comparingDouble(Solution::cost))
+          .min(Comparator.comparingDouble(TrailStarts::missed))
           .map(s -> new Led(sightValues(s), ways.size() == 1, typicalMiss(s) < FOLLOWED))
           .ifPresent(all::add);
     }
@@ -71,6 +71,11 @@ final class TrailStarts {
 
   private double[] sightValues(Solution solution) {
     return Arrays.copyOf(solution.values(), parameters.parameters().size());
+  }
+
+  /** All misses, a single wrong name counting for little: the loss that was adjusted with. */
+  private static double missed(Solution solution) {
+    return Arrays.stream(solution.residuals()).map(r -> Math.log1p(r * r)).sum();
   }
 
   /** Median of the residuals' sizes. */
