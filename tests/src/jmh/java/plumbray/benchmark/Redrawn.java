@@ -26,6 +26,9 @@ final class Redrawn {
        "regions": [{"name": "all", "distanceM": 640}]}
       """;
 
+  /** Other libraries' places are straight over so many columns: exact ones take long to prepare. */
+  private static final int EVERY = 8;
+
   private Redrawn() {}
 
   /** The map of a level camera, or of one that is rolled and distorts. */
@@ -45,13 +48,27 @@ final class Redrawn {
     float[][] places = new float[2][WIDTH * HEIGHT];
     double[] direction = new double[2];
     double[] pixel = new double[2];
-    for (int i = 0; i < WIDTH * HEIGHT; i++) {
-      camera.projection().direction(i % WIDTH, i / WIDTH, direction);
-      camera.projection().pixel(direction[0] - shiftRad, direction[1], pixel);
-      places[0][i] = (float) pixel[0];
-      places[1][i] = (float) pixel[1];
+    float[][] knots = new float[2][WIDTH / EVERY + 1];
+    for (int y = 0; y < HEIGHT; y++) {
+      for (int k = 0; k < knots[0].length; k++) {
+        camera.projection().direction(EVERY * k, y, direction);
+        camera.projection().pixel(direction[0] - shiftRad, direction[1], pixel);
+        knots[0][k] = (float) pixel[0];
+        knots[1][k] = (float) pixel[1];
+      }
+      for (int i = 0; i < 2; i++) {
+        between(knots[i], places[i], y * WIDTH);
+      }
     }
     return places;
+  }
+
+  private static void between(float[] knots, float[] into, int from) {
+    for (int x = 0; x < WIDTH; x++) {
+      int k = x / EVERY;
+      float s = (float) (x % EVERY) / EVERY;
+      into[from + x] = knots[k] + s * (knots[k + 1] - knots[k]);
+    }
   }
 
   private static SightOptics optics(boolean general) {
