@@ -13,7 +13,6 @@ import java.util.stream.IntStream;
 import plumbray.calibration.quantity.Quantity;
 import plumbray.calibration.sight.ProfileSetup;
 import plumbray.calibration.sight.Sight;
-import plumbray.imaging.fit.FamilyFit.Adjusted;
 import plumbray.imaging.reading.StaffObservation;
 import plumbray.imaging.reading.StaffObservation.StripModelSettings;
 import plumbray.imaging.reading.StaffScene;

@@ -13,7 +13,6 @@ import plumbray.calibration.estimate.Solution;
 import plumbray.calibration.sight.CameraSetup;
 import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.SightParameters;
-import plumbray.imaging.fit.FamilyFit.Adjusted;
 import plumbray.imaging.fit.SlideScore.Start;
 import plumbray.imaging.reading.EdgeImage;
 import plumbray.imaging.reading.Relabel;

@@ -22,7 +22,7 @@ final class FitReport {
 
   private FitReport() {}
 
-  static FitResult of(Sight sight, FamilyFit.Adjusted adjusted, List<Alternative> alternatives) {
+  static FitResult of(Sight sight, Adjusted adjusted, List<Alternative> alternatives) {
     Verdict verdict = new Verdict(sight, adjusted);
     if (verdict.error().isPresent()) {
       return FitResult.failed(sight, verdict.error().get());
@@ -89,12 +89,12 @@ final class FitReport {
   }
 
   static Alternative alternative(
-      ProfileFamily family, double criterion, Sight sight, FamilyFit.Adjusted adjusted) {
+      ProfileFamily family, double criterion, Sight sight, Adjusted adjusted) {
     double rms = residuals(readings(sight, adjusted), adjusted.solution()).rmsPx();
     return new Alternative(family, criterion, rms, new Verdict(sight, adjusted).status());
   }
 
-  private static List<ReferenceReading> readings(Sight sight, FamilyFit.Adjusted adjusted) {
+  private static List<ReferenceReading> readings(Sight sight, Adjusted adjusted) {
     double[] values = adjusted.solution().values();
     FitTrace trace = adjusted.observation().trace(values, false);
     List<ReferenceObservation> references = adjusted.observation().references();
@@ -125,7 +125,7 @@ final class FitReport {
       Sight sight,
       StaffObservation staff,
       FitTrace trace,
-      FamilyFit.Adjusted adjusted,
+      Adjusted adjusted,
       int index,
       int firstOwn) {
     double[] own = adjusted.observation().own(adjusted.solution().values(), index);

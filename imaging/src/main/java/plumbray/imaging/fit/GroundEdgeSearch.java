@@ -7,7 +7,6 @@ import java.util.List;
 import java.util.Optional;
 import java.util.stream.IntStream;
 import plumbray.calibration.quantity.Parameter;
-import plumbray.imaging.fit.FamilyFit.Adjusted;
 import plumbray.imaging.reading.EdgeImage;
 import plumbray.imaging.reading.GroundEdge;
 import plumbray.imaging.reading.ReferenceObservation;

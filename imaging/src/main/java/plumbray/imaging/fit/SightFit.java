@@ -3,7 +3,6 @@ package plumbray.imaging.fit;
 import java.util.List;
 import java.util.Optional;
 import plumbray.calibration.sight.Sight;
-import plumbray.imaging.fit.FamilyFit.Adjusted;
 import plumbray.imaging.photo.Photo;
 
 /** Fits a sight to a photo, to points, or to both. */

@@ -35,12 +35,12 @@ final class Verdict {
   private static final double STILL_UNKNOWN = 0.5;
 
   private final Sight sight;
-  private final FamilyFit.Adjusted adjusted;
+  private final Adjusted adjusted;
   private final List<Warning> warnings = new ArrayList<>();
   private boolean doubtful;
   private String error;
 
-  Verdict(Sight sight, FamilyFit.Adjusted adjusted) {
+  Verdict(Sight sight, Adjusted adjusted) {
     this.sight = sight;
     this.adjusted = adjusted;
     Solution solution = adjusted.solution();

@@ -80,8 +80,7 @@ class VerdictTest {
   }
 
   private static Verdict verdict(SightObservation observation, Said said, Found found) {
-    return new Verdict(
-        SIGHT, new FamilyFit.Adjusted(observation, said.solution(observation, 0.5), found));
+    return new Verdict(SIGHT, new Adjusted(observation, said.solution(observation, 0.5), found));
   }
 
   private static void doubts(Verdict verdict, String code, String message) {
@@ -178,7 +177,7 @@ class VerdictTest {
             SightObservation.ROUGH_PX);
     Solution solution = WELL.solution(observation, 2.0);
     doubts(
-        new Verdict(sight, new FamilyFit.Adjusted(observation, solution, CALM)),
+        new Verdict(sight, new Adjusted(observation, solution, CALM)),
         "points-misfit",
         "Points lie 2.0 times as far from the fit as their stated standard deviations: wrong"
             + " points, or a profile that this family cannot follow.");
@@ -218,8 +217,7 @@ class VerdictTest {
     SightObservation observation =
         staff(sight, SmallSights.stillPhoto(SmallSights.truth(3.0, 0.2)));
     Verdict verdict =
-        new Verdict(
-            sight, new FamilyFit.Adjusted(observation, WELL.solution(observation, 0.5), CALM));
+        new Verdict(sight, new Adjusted(observation, WELL.solution(observation, 0.5), CALM));
     assertThat(verdict.error().orElseThrow())
         .startsWith("reference \"staff\": 2 edges of the staff lie in its imageBox, 4 are needed;");
   }
