@@ -24,7 +24,7 @@ final class MeasureCommand implements Callable<Integer> {
 
   @Parameters(
       index = "0",
-      paramLabel = "FIT",
+      paramLabel = "SIGHT|FIT",
       description = "Fit file, or a sight file with all quantities held.")
   private Path fitFile;
 
@@ -41,7 +41,10 @@ final class MeasureCommand implements Callable<Integer> {
   @Override
   public Integer call() throws IOException {
     int points = MeasureWorker.measure(fitFile, pointsFile, outFile);
-    parent.terminal().result("heights of %d points are in %s".formatted(points, outFile));
+    parent
+        .terminal()
+        .result(
+            "%d %s in %s".formatted(points, points == 1 ? "height is" : "heights are", outFile));
     return ExitStatus.DONE.code();
   }
 }

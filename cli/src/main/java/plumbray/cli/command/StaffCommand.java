@@ -23,7 +23,8 @@ import plumbray.cli.work.StaffWorker;
 @Command(
     name = "staff",
     description = {
-      "Draws a coded staff in true scale, to print and set up in the picture. Its bars form a binary"
+      "Draws a coded staff in true scale, to print and set up in the picture.",
+      "Its bars form a binary"
           + " sequence, so that any good stretch of it tells its own height and which way up it is"
           + " seen. An element is made some 8 pixels high at the sight's distance.",
       "",

@@ -61,7 +61,8 @@ final class JsonText {
     try {
       return Files.readAllBytes(path);
     } catch (IOException e) {
-      throw new InputException(path + ": cannot be read (" + reason(path, e) + ")", e);
+      throw new InputException(
+          path + ": cannot be read (" + reason(path, e) + "); name a file that is there", e);
     }
   }
 
@@ -173,7 +174,9 @@ final class JsonText {
     String place =
         at == null ? "" : "line " + at.getLineNr() + ", column " + at.getColumnNr() + ": ";
     String found = e.getOriginalMessage().lines().findFirst().orElse("not JSON");
-    return new InputException(file + ": " + place + "is not JSON: " + found, e);
+    // What the parser adds in brackets about itself says nothing to the user.
+    found = found.replaceFirst(" \\(start marker at .*", "");
+    return new InputException(file + ": " + place + "is not JSON: " + found + "; mend it there", e);
   }
 
   /** The text of UTF-8 bytes, a byte order mark taken off. */

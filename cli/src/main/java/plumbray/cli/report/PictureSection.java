@@ -5,6 +5,8 @@ import static plumbray.cli.report.markup.NumberText.coordinate;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.stream.DoubleStream;
 import plumbray.calibration.sight.ImageBox;
 import plumbray.calibration.sight.Reference;
 import plumbray.calibration.sight.Sight;
@@ -20,8 +22,13 @@ final class PictureSection implements Section {
 
   private static final int WIDTH_MOST_PX = 1600;
 
-  /** Rows between the names of two lines, in widths of a line. */
-  private static final double NAME_ROOM = 10.0;
+  /** Height of a line's name, and the gap between the two, in widths of a line. */
+  private static final double NAME_HEIGHT = 9.0;
+
+  private static final double NAME_GAP = 2.0;
+
+  /** How near the middle of a name another line may come, in heights of the name. */
+  private static final double LINE_ROOM = 0.6;
 
   private final Sight sight;
   private final Optional<Photo> photo;
@@ -111,35 +118,63 @@ final class PictureSection implements Section {
     for (Reference reference : sight.references()) {
       reference.imageBox().ifPresent(box -> frame(page, box, stroke));
     }
-    List<Double> named = new ArrayList<>();
-    for (SightLine line : lines) {
-      if (line.vanishingLineRowPx().isPresent()) {
-        vanishingLine(page, line, source.width(), named);
+    vanishingLines(page, source.width());
+  }
+
+  /** Names come after all lines, where no line runs through them. */
+  private void vanishingLines(Markup page, int width) {
+    double stroke = width / 400.0;
+    List<SightLine> drawn =
+        lines.stream().filter(line -> line.vanishingLineRowPx().isPresent()).toList();
+    drawn.forEach(line -> vanishingLine(page, rowOf(line), width));
+    List<Double> rows = drawn.stream().map(PictureSection::rowOf).toList();
+    List<Double> names = new ArrayList<>();
+    for (SightLine line : drawn) {
+      OptionalDouble middle = roomForName(rowOf(line), stroke, rows, names);
+      if (middle.isPresent()) {
+        names.add(middle.getAsDouble());
+        name(page, line, width - 3 * stroke, middle.getAsDouble(), stroke);
       }
     }
   }
 
-  /** Names the line too, unless the name would run into that of a line drawn before. */
-  private static void vanishingLine(
-      Markup page, SightLine line, int width, List<Double> namedRows) {
+  private static double rowOf(SightLine line) {
+    return line.vanishingLineRowPx().orElseThrow() + 0.5;
+  }
+
+  /** Middle of a name above its line, else below it, clear of the other lines and names. */
+  private static OptionalDouble roomForName(
+      double row, double stroke, List<Double> rows, List<Double> names) {
+    double height = NAME_HEIGHT * stroke;
+    double away = NAME_GAP * stroke + height / 2.0;
+    return DoubleStream.of(row - away, row + away)
+        .filter(m -> rows.stream().allMatch(r -> r == row || isClear(m, r, LINE_ROOM * height)))
+        .filter(m -> names.stream().allMatch(n -> isClear(m, n, height)))
+        .findFirst();
+  }
+
+  private static boolean isClear(double middle, double other, double room) {
+    return Math.abs(other - middle) >= room;
+  }
+
+  private static void vanishingLine(Markup page, double row, int width) {
     double stroke = width / 400.0;
-    double v = line.vanishingLineRowPx().orElseThrow() + 0.5;
-    String path = "M0 " + coordinate(v) + "H" + width;
+    String path = "M0 " + coordinate(row) + "H" + width;
     stroked(page, path, "#ffffff", stroke, "none");
     stroked(page, path, "#1c2a33", stroke, coordinate(6 * stroke) + " " + coordinate(4 * stroke));
-    if (namedRows.stream().anyMatch(row -> Math.abs(row - v) < NAME_ROOM * stroke)) {
-      return;
-    }
-    namedRows.add(v);
+  }
+
+  private static void name(
+      Markup page, SightLine line, double rightPx, double middlePx, double stroke) {
     page.leaf(
         "text",
         Metres.text(line.distanceM()),
         "x",
-        coordinate(width - 3 * stroke),
+        coordinate(rightPx),
         "y",
-        coordinate(v - 2 * stroke),
+        coordinate(middlePx + NAME_HEIGHT / 2.0 * stroke),
         "font-size",
-        coordinate(9 * stroke),
+        coordinate(NAME_HEIGHT * stroke),
         "text-anchor",
         "end",
         "class",

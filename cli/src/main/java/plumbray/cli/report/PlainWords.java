@@ -63,7 +63,7 @@ final class PlainWords implements Section {
         + metres(heightM)
         + " at "
         + Metres.text(mapping.distanceM())
-        + " is "
+        + " bends "
         + (alike ? ways.get(0) : String.join(", ", parts))
         + ".";
   }
@@ -85,12 +85,12 @@ final class PlainWords implements Section {
   private static String bends(TargetRay ray) {
     List<Bend> convex = ray.convex();
     if (convex.isEmpty()) {
-      return "concave to the ground all the way";
+      return "towards the ground all the way";
     }
     if (convex.size() == ray.bends().size()) {
-      return "convex to the ground all the way";
+      return "away from the ground all the way";
     }
-    return "convex to the ground "
+    return "away from the ground "
         + convex.stream()
             .map(bend -> "from %s to %s m".formatted(whole(bend.fromM()), whole(bend.toM())))
             .collect(Collectors.joining(" and "));

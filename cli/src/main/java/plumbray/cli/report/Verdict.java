@@ -23,7 +23,7 @@ enum Verdict {
       "failed",
       "Failed",
       "\u2717",
-      "No air was found that explains this picture. Nothing may be read from it.");
+      "There is no result for this picture. Nothing may be read from it.");
 
   private final String css;
   private final String word;

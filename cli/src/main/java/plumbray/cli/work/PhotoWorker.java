@@ -99,9 +99,17 @@ public final class PhotoWorker {
     try {
       return work(task, photo(task), inputs, files);
     } catch (PhotoException e) {
-      FitResult failed = FitResult.failed(task.sight(), e.getMessage());
+      FitResult failed = FitResult.failed(task.sight(), reason(task, e));
       return writeFailed(new Fitted(task, Optional.empty(), failed, inputs), files);
     }
+  }
+
+  /** What is wrong with the photo. Its results name it already, so its path is left out. */
+  private static String reason(PhotoTask task, PhotoException e) {
+    String path = task.photo().map(photo -> photo + ": ").orElse("");
+    return e.getMessage().startsWith(path)
+        ? e.getMessage().substring(path.length())
+        : e.getMessage();
   }
 
   /**

@@ -277,7 +277,7 @@ class PagesTest {
     assertThat(sightPage())
         .containsPattern("The air is steeper than autoconvective below 0\\.87\\d m: there")
         .containsPattern(
-            "The line of sight to 0\\.\\d+ m at 640 m is convex to the ground from \\d+ to \\d+ m");
+            "The line of sight to 0\\.\\d+ m at 640 m bends away from the ground from \\d+ to \\d+ m");
   }
 
   @Test
