@@ -105,8 +105,8 @@ final class FirstFit {
     List<TrailStarts.Led> ways = new TrailStarts(sight, references).values();
     if (ways.size() == 1 && ways.get(0).only()) {
       Adjusted led = still(chased(ways.get(0).values(), NEAR_REACHES_PX));
-      return Optional.of(new Along(led, ways.get(0).followed()))
-          .filter(a -> Double.isFinite(led.solution().cost()));
+      boolean sure = ways.get(0).followed() && clearlyFound(looks(led));
+      return Optional.of(new Along(led, sure)).filter(a -> Double.isFinite(led.solution().cost()));
     }
     return ways.stream()
         .map(led -> still(chased(led.values(), NEAR_REACHES_PX)))
