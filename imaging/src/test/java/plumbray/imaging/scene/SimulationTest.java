@@ -61,7 +61,8 @@ class SimulationTest {
     assertThat(edges.inner()).hasSizeGreaterThan(6);
     for (SeenEdges.Edge edge : edges.inner()) {
       int middle = (int) Math.round(edge.columnPx());
-      double slope = Math.tan(0.02);
+      // y' = x sin(roll) + y cos(roll) is the same along a level line
+      double slope = -Math.tan(0.02);
       double expected = edge.rowPx() + slope * (middle - edge.columnPx());
       assertThat(edge.rowIn(photo, middle - 8, middle + 8)).isCloseTo(expected, within(EDGE_PX));
     }
