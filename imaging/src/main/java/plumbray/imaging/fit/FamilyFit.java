@@ -99,7 +99,16 @@ final class FamilyFit {
 
   /** Adjusts with shimmer and, where it is found, with the ground's edge. */
   Adjusted refine(Adjusted first) {
-    return references.staffs().isEmpty() ? points(first) : withGround(refineBars(first));
+    return references.staffs().isEmpty() ? points(first) : atRest(withGround(refineBars(first)));
+  }
+
+  /** Goes on a while where the adjustment has not come to rest. */
+  private Adjusted atRest(Adjusted from) {
+    Adjusted best = from;
+    for (int round = 0; round < ROUNDS && !best.solution().converged(); round++) {
+      best = shimmering(best, best.found());
+    }
+    return best;
   }
 
   /** Adjusts the bars alone, the noise and the shimmer found in turn with the estimates. */

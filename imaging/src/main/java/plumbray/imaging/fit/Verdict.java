@@ -10,11 +10,16 @@ import org.apache.commons.math3.stat.regression.SimpleRegression;
 import plumbray.calibration.estimate.Degeneracy;
 import plumbray.calibration.estimate.Solution;
 import plumbray.calibration.quantity.Parameter;
+import plumbray.calibration.sight.PointMark;
+import plumbray.calibration.sight.Reference;
+import plumbray.calibration.sight.SenseWanted;
 import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.SightParameters;
+import plumbray.imaging.reading.EdgeImage;
 import plumbray.imaging.reading.ReferenceObservation;
 import plumbray.imaging.reading.StaffObservation;
 import plumbray.imaging.reading.StripLook;
+import plumbray.raymodel.mapping.Sense;
 
 /** Judges an adjustment: whether it is one at all, and what speaks against it. */
 final class Verdict {
@@ -30,6 +35,11 @@ final class Verdict {
   private static final double MISFIT = 3.0;
   private static final double DRIFT_SHARE = 0.3;
   private static final double DRIFT_PX = 0.25;
+  private static final double LEAST_REACH_PX = 5.0;
+  private static final int TELLING_EDGES = 8;
+
+  /** Part of the bars that must be where the fit has them; a few may be misread. */
+  private static final double MOST_BARS = 0.7;
 
   /** A sigma that is still this part of the prior's has not been found from the photo. */
   private static final double STILL_UNKNOWN = 0.5;
@@ -129,7 +139,49 @@ final class Verdict {
                   + " too little of the brightness); check that the imageBox lies on the bars, and"
                   + " the staff's edges and distance",
               name);
+      return;
     }
+    bars(staff, trace);
+  }
+
+  /**
+   * Bars read one by one, without any idea of the air, must be where the fit has them: a fit that
+   * explains only a part of the staff may do so with small residuals.
+   */
+  private void bars(StaffObservation staff, FitTrace trace) {
+    Reference reference = sight.references().get(staff.scene().reference());
+    List<EdgeImage> edges = staff.scene().edges(trace);
+    double reach = LEAST_REACH_PX + 3.0 * adjusted.found().shimmer().sigmaPx();
+    double mPerPx = reference.distanceM() * trace.camera().radPerPx();
+    List<List<PointMark>> ways = staff.scene().trails(mPerPx, 1.0);
+    // even bars can be read in several ways, of which none needs to be the right one
+    boolean telling = ways.size() == 1 && ways.get(0).size() >= TELLING_EDGES;
+    double best = telling ? agreement(ways.get(0), edges, reach) : 1.0;
+    if (best < MOST_BARS) {
+      doubt(
+          "bars-disagree",
+          "Read one by one, only %.0f %% of the bars of \"%s\" are where the fit has them: it may"
+              + " have taken bars for others; check the staff's edges and its distance.",
+          100.0 * best,
+          reference.name());
+    }
+  }
+
+  /** Part of the bars read that the fit has within reach, the same height in the same image. */
+  static double agreement(List<PointMark> way, List<EdgeImage> edges, double reachPx) {
+    long agreeing =
+        way.stream()
+            .filter(
+                mark ->
+                    edges.stream()
+                        .anyMatch(
+                            e ->
+                                e.heightM() == mark.heightM()
+                                    && (e.sense() == Sense.UPRIGHT)
+                                        == (mark.sense() == SenseWanted.UPRIGHT)
+                                    && Math.abs(e.row() - mark.pixel().v()) < reachPx))
+            .count();
+    return (double) agreeing / way.size();
   }
 
   /** Scatter of a strip's brightness about the straight line through it: what needs no bars. */

@@ -21,12 +21,14 @@ import plumbray.calibration.sight.Sight;
 import plumbray.calibration.sight.SightParameters;
 import plumbray.imaging.fit.ShimmerSearch.Found;
 import plumbray.imaging.photo.Photo;
+import plumbray.imaging.reading.EdgeImage;
 import plumbray.imaging.reading.ReferenceObservation;
 import plumbray.imaging.reading.Shimmer;
 import plumbray.imaging.reading.StaffObservation;
 import plumbray.imaging.reading.StaffObservation.StripModelSettings;
 import plumbray.imaging.reading.StaffScene;
 import plumbray.imaging.reading.StripPhotos;
+import plumbray.raymodel.mapping.Sense;
 
 /**
  * What is said against an adjustment, in which words, and what makes it doubtful or none at all.
@@ -94,6 +96,22 @@ class VerdictTest {
     assertThat(verdict.error()).isEmpty();
     assertThat(verdict.warnings()).isEmpty();
     assertThat(verdict.status()).isEqualTo(FitStatus.GOOD);
+  }
+
+  @Test
+  void barsReadOneByOneAgreeWhereHeightImageAndRowDo() {
+    List<EdgeImage> edges = new ArrayList<>();
+    List<PointMark> marks = new ArrayList<>();
+    for (int k = 0; k < 10; k++) {
+      Sense sense = k < 6 ? Sense.UPRIGHT : Sense.INVERTED;
+      edges.add(new EdgeImage(k, 0.1 * k, 0, sense, 20.0 * k, 1, 1.0));
+      double row = 20.0 * k + (k == 2 ? 6.0 : 1.0);
+      SenseWanted wanted = k == 3 || k >= 6 && k != 8 ? SenseWanted.INVERTED : SenseWanted.UPRIGHT;
+      double heightM = k == 5 ? 0.4 : 0.1 * k;
+      marks.add(new PointMark(heightM, new PixelPoint(5.0, row), 1.0, wanted));
+    }
+    // 2 is too far off, 3 and 8 are of the wrong image, 5 is of the wrong height
+    assertThat(Verdict.agreement(marks, edges, 5.0)).isEqualTo(0.6);
   }
 
   @Test
