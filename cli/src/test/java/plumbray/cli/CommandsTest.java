@@ -60,12 +60,8 @@ class CommandsTest {
 
   @BeforeEach
   void sightsAndAPhotoLieInTheFolder() throws IOException, PhotoException {
-    String points =
-        "\"points\": ["
-            + POINT.formatted("2.0", "29.5")
-            + ", "
-            + POINT.formatted("4.5", "19.5")
-            + "]";
+    String both = POINT.formatted("2.0", "29.5") + ", " + POINT.formatted("4.5", "19.5");
+    String points = "\"points\": [" + both + "]";
     write("held.sight.json", "0", points);
     write("open.sight.json", "{\"value\": 1, \"sigma\": 20}", points);
     write(
